@@ -1,0 +1,63 @@
+using IceExtent.Grids;
+
+namespace IceExtent.Retrieval;
+
+/// <summary>What a sensor needs to know about one hemisphere.</summary>
+/// <param name="TiePoints">The pure surfaces.</param>
+/// <param name="Screens">The weather screens.</param>
+public sealed record HemisphereTuning(TiePoints TiePoints, WeatherScreens Screens);
+
+/// <summary>Gradient ratios above which a cell is open water.</summary>
+/// <param name="Gradient3719Limit">GR(37V/19V), without unit.</param>
+/// <param name="Gradient2219Limit">GR(22V/19V), without unit, or null where the screen is not used.</param>
+public sealed record WeatherScreens(double Gradient3719Limit, double? Gradient2219Limit);
+
+/// <summary>The brightness temperatures that are believed. Both ends are allowed.</summary>
+/// <param name="LowestKelvins">In K.</param>
+/// <param name="HighestKelvins">In K.</param>
+public sealed record KelvinRange(double LowestKelvins, double HighestKelvins);
+
+/// <summary>How well a sensor and its tie points are known, for standard errors.</summary>
+/// <param name="OpenWaterFraction">Standard deviation of concentration over open water. Unit: 1.</param>
+/// <param name="ClosedIceFraction">Standard deviation of concentration over closed ice. Unit: 1.</param>
+public sealed record RetrievalScatter(double OpenWaterFraction, double ClosedIceFraction);
+
+/// <summary>A radiometer: what it measures, when it served and how it is tuned. Read from config/sensors.</summary>
+public sealed record Sensor
+{
+    /// <summary>The name run files use, such as <c>ssmi-f13</c>.</summary>
+    public required string Name { get; init; }
+
+    /// <summary>The name people use.</summary>
+    public required string Title { get; init; }
+
+    /// <summary>The frequency of every channel the sensor has, in GHz.</summary>
+    public required IReadOnlyDictionary<Channel, double> FrequenciesGigahertz { get; init; }
+
+    /// <summary>The first day of service.</summary>
+    public required DateOnly FirstDay { get; init; }
+
+    /// <summary>The last day of service, or null while it serves.</summary>
+    public required DateOnly? LastDay { get; init; }
+
+    /// <summary>The range that is believed.</summary>
+    public required KelvinRange Range { get; init; }
+
+    /// <summary>The unseen circle round the pole begins at this latitude (absolute value, degrees), or null where there is none.</summary>
+    public required double? PolarGapLatitudeDegrees { get; init; }
+
+    /// <summary>Scatter of the retrieval over the two pure surfaces.</summary>
+    public required RetrievalScatter Scatter { get; init; }
+
+    /// <summary>Tie points and screens north of the equator.</summary>
+    public required HemisphereTuning North { get; init; }
+
+    /// <summary>Tie points and screens south of the equator.</summary>
+    public required HemisphereTuning South { get; init; }
+
+    /// <summary>Tie points and screens of one hemisphere.</summary>
+    public HemisphereTuning In(Hemisphere hemisphere) => hemisphere == Hemisphere.North ? North : South;
+
+    /// <summary>Whether a day lies in the period of service.</summary>
+    public bool Serves(DateOnly day) => day >= FirstDay && (LastDay is not { } last || day <= last);
+}

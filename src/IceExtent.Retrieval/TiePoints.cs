@@ -1,0 +1,13 @@
+namespace IceExtent.Retrieval;
+
+/// <summary>One pure surface as a radiometer sees it.</summary>
+/// <param name="V19Kelvins">19 GHz vertical, in K.</param>
+/// <param name="H19Kelvins">19 GHz horizontal, in K.</param>
+/// <param name="V37Kelvins">37 GHz vertical, in K.</param>
+public sealed record TiePoint(double V19Kelvins, double H19Kelvins, double V37Kelvins);
+
+/// <summary>The three pure surfaces between which a cell is mixed.</summary>
+/// <param name="OpenWater">No ice.</param>
+/// <param name="FirstYear">First-year ice in the north, type A in the south.</param>
+/// <param name="Multiyear">Multiyear ice in the north, type B in the south.</param>
+public sealed record TiePoints(TiePoint OpenWater, TiePoint FirstYear, TiePoint Multiyear);
