@@ -1,0 +1,73 @@
+using System.Numerics;
+
+namespace IceExtent.Retrieval;
+
+/// <summary>Brings concentrations into 0 to 1 and counts what it moved.</summary>
+public static class Clipping
+{
+    /// <summary>Clips a run of cells.</summary>
+    /// <param name="totalFraction">All ice; becomes 0 to 1, NaN stays.</param>
+    /// <param name="multiyearFraction">Multiyear ice; becomes 0 to the clipped total, so that first-year ice, the rest, is never negative.</param>
+    /// <param name="conditions">Receives <see cref="CellConditions.ClippedBelow"/> or <see cref="CellConditions.ClippedAbove"/> where the total was moved.</param>
+    /// <returns>The numbers of totals raised to 0 and lowered to 1.</returns>
+    /// <exception cref="ArgumentException">The spans differ in length.</exception>
+    public static (int Below, int Above) Apply(
+        Span<float> totalFraction, Span<float> multiyearFraction, Span<CellConditions> conditions)
+    {
+        int cells = totalFraction.Length;
+        if (multiyearFraction.Length != cells || conditions.Length != cells)
+        {
+            throw new ArgumentException("All planes must have the same number of cells.", nameof(totalFraction));
+        }
+
+        Span<ushort> masks = CellMasks.AsNumbers(conditions);
+        int below = 0;
+        int above = 0;
+        int cell = 0;
+        for (; cell <= cells - Vector<ushort>.Count; cell += Vector<ushort>.Count)
+        {
+            int half = cell + Vector<float>.Count;
+            (Vector<int> low1, Vector<int> high1) = Clip(totalFraction[cell..], multiyearFraction[cell..]);
+            (Vector<int> low2, Vector<int> high2) = Clip(totalFraction[half..], multiyearFraction[half..]);
+            below -= CellMasks.Set(low1, low2, (ushort)CellConditions.ClippedBelow, masks[cell..]);
+            above -= CellMasks.Set(high1, high2, (ushort)CellConditions.ClippedAbove, masks[cell..]);
+        }
+
+        for (; cell < cells; cell++)
+        {
+            float total = totalFraction[cell];
+            if (total < 0f)
+            {
+                masks[cell] |= (ushort)CellConditions.ClippedBelow;
+                below++;
+            }
+            else if (total > 1f)
+            {
+                masks[cell] |= (ushort)CellConditions.ClippedAbove;
+                above++;
+            }
+
+            float clipped = total < 0f ? 0f : total > 1f ? 1f : total;
+            float multi = multiyearFraction[cell];
+            totalFraction[cell] = clipped;
+            multiyearFraction[cell] = float.IsNaN(clipped) ? float.NaN : multi < 0f ? 0f : multi > clipped ? clipped : multi;
+        }
+
+        return (below, above);
+    }
+
+    private static (Vector<int> Below, Vector<int> Above) Clip(Span<float> totals, Span<float> multiyears)
+    {
+        Vector<float> total = new(totals);
+        Vector<float> multi = new(multiyears);
+        Vector<int> below = Vector.LessThan(total, Vector<float>.Zero);
+        Vector<int> above = Vector.GreaterThan(total, Vector<float>.One);
+        Vector<float> clipped = Vector.ConditionalSelect(below, Vector<float>.Zero, Vector.ConditionalSelect(above, Vector<float>.One, total));
+        clipped.CopyTo(totals);
+
+        Vector<float> lifted = Vector.ConditionalSelect(Vector.LessThan(multi, Vector<float>.Zero), Vector<float>.Zero, multi);
+        Vector<float> bounded = Vector.ConditionalSelect(Vector.GreaterThan(lifted, clipped), clipped, lifted);
+        Vector.ConditionalSelect(Vector.Equals(clipped, clipped), bounded, clipped).CopyTo(multiyears);
+        return (below, above);
+    }
+}

@@ -1,0 +1,49 @@
+namespace IceExtent.Retrieval;
+
+/// <summary>What one method says of one day on one grid. Reused from day to day.</summary>
+/// <remarks>Shape: one value a cell, row-major, row 0 at the top. Missing: NaN; <see cref="Conditions"/> says why.</remarks>
+public sealed class ConcentrationPlanes
+{
+    private readonly float[] total;
+    private readonly float[] multiyear;
+    private readonly float[] standardError;
+    private readonly CellConditions[] conditions;
+
+    /// <summary>Makes room for one grid.</summary>
+    /// <param name="cellCount">The number of cells, 1 or more.</param>
+    public ConcentrationPlanes(int cellCount)
+    {
+        ArgumentOutOfRangeException.ThrowIfLessThan(cellCount, 1);
+        total = new float[cellCount];
+        multiyear = new float[cellCount];
+        standardError = new float[cellCount];
+        conditions = new CellConditions[cellCount];
+    }
+
+    /// <summary>The number of cells.</summary>
+    public int CellCount => total.Length;
+
+    /// <summary>Sea-ice concentration of all ice. Unit: 1.</summary>
+    public Span<float> Total => total;
+
+    /// <summary>Concentration of multiyear ice (type B in the south). Unit: 1. First-year ice is the rest of the total.</summary>
+    public Span<float> Multiyear => multiyear;
+
+    /// <summary>Standard error of <see cref="Total"/>. Unit: 1.</summary>
+    public Span<float> StandardError => standardError;
+
+    /// <summary>Why each cell is what it is.</summary>
+    public Span<CellConditions> Conditions => conditions;
+
+    /// <summary>The total as memory, for writers.</summary>
+    public ReadOnlyMemory<float> TotalMemory => total;
+
+    /// <summary>Multiyear ice as memory, for writers.</summary>
+    public ReadOnlyMemory<float> MultiyearMemory => multiyear;
+
+    /// <summary>The standard error as memory, for writers.</summary>
+    public ReadOnlyMemory<float> StandardErrorMemory => standardError;
+
+    /// <summary>The conditions as memory, for writers.</summary>
+    public ReadOnlyMemory<CellConditions> ConditionMemory => conditions;
+}

@@ -1,0 +1,98 @@
+namespace IceExtent.Retrieval;
+
+/// <summary>Everything between one day's brightness temperatures and its concentration, for one method.</summary>
+/// <remarks>
+/// The steps, in order: retrieve, screen weather, empty land and polar gap, clip, standard error. The range check of
+/// the temperatures comes before them, once a day: <see cref="CheckRange"/>. Immutable and safe to use from several
+/// threads. The cells are handled in runs that stay in the processor's cache.
+/// </remarks>
+public sealed class DayRetrieval
+{
+    private const int RunCells = 8_192; // Eight planes of it are 224 kB: inside a second-level cache.
+
+    private readonly IConcentrationMethod method;
+    private readonly WeatherScreens screens;
+    private readonly RetrievalScatter scatter;
+    private readonly CellMask mask;
+
+    /// <summary>Prepares the retrieval of one sensor on one grid.</summary>
+    /// <param name="method">The tuned method.</param>
+    /// <param name="screens">The weather screens.</param>
+    /// <param name="scatter">The scatter over the pure surfaces.</param>
+    /// <param name="mask">Land and polar gap.</param>
+    public DayRetrieval(IConcentrationMethod method, WeatherScreens screens, RetrievalScatter scatter, CellMask mask)
+    {
+        ArgumentNullException.ThrowIfNull(method);
+        ArgumentNullException.ThrowIfNull(screens);
+        ArgumentNullException.ThrowIfNull(scatter);
+        ArgumentNullException.ThrowIfNull(mask);
+        (this.method, this.screens, this.scatter, this.mask) = (method, screens, scatter, mask);
+    }
+
+    /// <summary>The method's name.</summary>
+    public string MethodName => method.Name;
+
+    /// <summary>Makes impossible temperatures of every channel missing. Call it once a day, before any <see cref="Retrieve"/>.</summary>
+    /// <param name="observed">Changed in place.</param>
+    /// <param name="range">The values that are believed.</param>
+    /// <param name="conditions">Cleared, then receives <see cref="CellConditions.OutOfRange"/> where a value was made missing.</param>
+    /// <returns>The number of values made missing.</returns>
+    public static int CheckRange(BrightnessPlanes observed, KelvinRange range, Span<CellConditions> conditions)
+    {
+        ArgumentNullException.ThrowIfNull(observed);
+        conditions.Clear();
+        int count = 0;
+        foreach (Channel channel in observed.Channels)
+        {
+            count += RangeScreen.Apply(observed.Kelvins(channel), range, conditions);
+        }
+
+        return count;
+    }
+
+    /// <summary>Retrieves one day.</summary>
+    /// <param name="observed">Brightness temperatures after <see cref="CheckRange"/>; only read.</param>
+    /// <param name="rangeConditions">What <see cref="CheckRange"/> marked.</param>
+    /// <param name="into">Receives the day.</param>
+    /// <returns>What happened to the cells; <see cref="RetrievalCounts.OutOfRange"/> is left 0.</returns>
+    public RetrievalCounts Retrieve(
+        BrightnessPlanes observed, ReadOnlySpan<CellConditions> rangeConditions, ConcentrationPlanes into)
+    {
+        ArgumentNullException.ThrowIfNull(observed);
+        ArgumentNullException.ThrowIfNull(into);
+        rangeConditions.CopyTo(into.Conditions);
+        RetrievalCounts counts = default;
+        for (int start = 0; start < observed.CellCount; start += RunCells)
+        {
+            counts += RetrieveRun(observed, new(start, Math.Min(RunCells, observed.CellCount - start)), into);
+        }
+
+        return counts;
+    }
+
+    private RetrievalCounts RetrieveRun(BrightnessPlanes observed, CellRange cells, ConcentrationPlanes into)
+    {
+        Span<float> total = cells.Of(into.Total);
+        Span<CellConditions> conditions = cells.Of(into.Conditions);
+
+        method.Retrieve(observed, cells, into);
+        (int noObservation, int noSolution) =
+            MissingCells.Mark(cells.Of(mask.Conditions), new(observed, method.Channels, cells), total, conditions);
+        int screened3719 = Screen(Channel.V37, screens.Gradient3719Limit, CellConditions.WeatherGradient3719);
+        int screened2219 = Screen(Channel.V22, screens.Gradient2219Limit, CellConditions.WeatherGradient2219);
+        (int below, int above) = Clipping.Apply(total, cells.Of(into.Multiyear), conditions);
+        CellScatter.Apply(total, scatter, cells.Of(into.StandardError));
+        return new(0, screened3719, screened2219, below, above, noObservation, noSolution);
+
+        int Screen(Channel upper, double? limit, CellConditions condition) =>
+            limit is { } value && observed.Has(upper)
+                ? GradientScreen.Apply(
+                    cells.Of(observed.Kelvins(upper)),
+                    cells.Of(observed.Kelvins(Channel.V19)),
+                    value,
+                    condition,
+                    cells.Of(into.Total),
+                    cells.Of(into.Conditions))
+                : 0;
+    }
+}

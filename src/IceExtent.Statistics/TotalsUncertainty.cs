@@ -1,0 +1,107 @@
+namespace IceExtent.Statistics;
+
+/// <summary>The standard errors of one day's totals, from those of its cells. Reused from day to day; not shared between threads.</summary>
+/// <remarks>
+/// Cell errors are taken as Gaussian with a correlation that falls with distance (<see cref="ErrorCorrelation"/>).
+/// Area: the variance of Σ a·C over cells counted as ice. Extent: the variance of Σ a·[C + error ≥ limit], by the
+/// tetrachoric series of the two-by-two probabilities, with z = (C − limit)/σ:
+/// Σₖ (1/k!) ΣᵢΣⱼ aᵢaⱼ He₍ₖ₋₁₎(zᵢ)φ(zᵢ) He₍ₖ₋₁₎(zⱼ)φ(zⱼ) ρᵢⱼᵏ. Five terms are kept.
+/// Source of the series: [Kendall1941], value from memory. Sampling gaps and the polar gap add nothing here.
+/// </remarks>
+public sealed class TotalsUncertainty
+{
+    private const double FarFromLimit = 5.0; // In standard errors: beyond it a cell's side of the limit is certain.
+    private static readonly double InverseRootTwoPi = 1.0 / Math.Sqrt(2.0 * Math.PI);
+    private static readonly double[] InverseRootFactorials =
+        [1.0, 1.0, 1.0 / Math.Sqrt(2.0), 1.0 / Math.Sqrt(6.0), 1.0 / Math.Sqrt(24.0), 1.0 / Math.Sqrt(120.0)];
+
+    private readonly ErrorCorrelation correlation;
+    private readonly double[] areaWeights;
+    private readonly double[][] extentWeights;
+    private readonly double[] scratch;
+
+    /// <summary>Makes the working memory.</summary>
+    /// <param name="correlation">The correlation of cell errors on the grid.</param>
+    public TotalsUncertainty(ErrorCorrelation correlation)
+    {
+        ArgumentNullException.ThrowIfNull(correlation);
+        this.correlation = correlation;
+        areaWeights = new double[correlation.BlockCount];
+        extentWeights = new double[ErrorCorrelation.MostPowers][];
+        for (int term = 0; term < extentWeights.Length; term++)
+        {
+            extentWeights[term] = new double[correlation.BlockCount];
+        }
+
+        scratch = new double[2 * correlation.BlockCount];
+    }
+
+    /// <summary>Computes both standard errors.</summary>
+    /// <param name="region">The cells and their areas.</param>
+    /// <param name="totalFraction">Clipped concentrations. Unit: 1. Missing: NaN, brings nothing.</param>
+    /// <param name="standardErrorFraction">Their standard errors. Unit: 1.</param>
+    /// <param name="iceFraction">The limit from which a cell counts as ice. Unit: 1.</param>
+    /// <returns>In m².</returns>
+    public (double Extent, double IceArea) StandardErrorsSquareMeters(
+        TotalsRegion region,
+        ReadOnlySpan<float> totalFraction,
+        ReadOnlySpan<float> standardErrorFraction,
+        double iceFraction)
+    {
+        ArgumentNullException.ThrowIfNull(region);
+        Gather(region, totalFraction, standardErrorFraction, iceFraction);
+        double areaVariance = correlation.PairSum(areaWeights, 1, scratch);
+        double extentVariance = 0.0;
+        for (int term = 0; term < extentWeights.Length; term++)
+        {
+            extentVariance += correlation.PairSum(extentWeights[term], term + 1, scratch);
+        }
+
+        return (Math.Sqrt(extentVariance), Math.Sqrt(areaVariance));
+    }
+
+    private void Gather(
+        TotalsRegion region, ReadOnlySpan<float> totalFraction, ReadOnlySpan<float> standardErrorFraction, double iceFraction)
+    {
+        areaWeights.AsSpan().Clear();
+        foreach (double[] weights in extentWeights)
+        {
+            weights.AsSpan().Clear();
+        }
+
+        float limit = (float)iceFraction;
+        ReadOnlySpan<int> blocks = correlation.BlockOfCell;
+        ReadOnlySpan<int> cells = region.Cells;
+        ReadOnlySpan<double> areas = region.AreasSquareMeters;
+        for (int index = 0; index < cells.Length; index++)
+        {
+            int cell = cells[index];
+            float fraction = totalFraction[cell];
+            double error = standardErrorFraction[cell];
+            if (!(error > 0.0))
+            {
+                continue; // Missing, or known exactly.
+            }
+
+            int block = blocks[cell];
+            areaWeights[block] += fraction >= limit ? areas[index] * error : 0.0;
+            double z = (fraction - iceFraction) / error;
+            if (Math.Abs(z) < FarFromLimit)
+            {
+                AddExtentTerms(block, areas[index], z);
+            }
+        }
+    }
+
+    private void AddExtentTerms(int block, double area, double z)
+    {
+        double density = InverseRootTwoPi * Math.Exp(-0.5 * z * z);
+        double before = 0.0;
+        double hermite = 1.0; // He0; then He(n+1) = z·He(n) − n·He(n−1).
+        for (int term = 0; term < extentWeights.Length; term++)
+        {
+            extentWeights[term][block] += area * density * hermite * InverseRootFactorials[term + 1];
+            (before, hermite) = (hermite, (z * hermite) - (term * before));
+        }
+    }
+}
