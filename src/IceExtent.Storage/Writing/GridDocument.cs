@@ -1,25 +1,21 @@
+using System.Buffers;
+using System.Runtime.InteropServices;
 using IceExtent.Grids;
 using PureHDF;
-using PureHDF.Filters;
-using PureHDF.VOL.Native;
 
 namespace IceExtent.Storage.Writing;
 
 /// <summary>The content of one grid file while it is put together.</summary>
-internal sealed class GridDocument
+internal sealed class GridDocument : IDisposable
 {
     private const string MappingName = "crs";
     private static readonly DateOnly Epoch = new(1970, 1, 1);
-    private static readonly List<H5Filter> Filters =
-    [
-        new(ShuffleFilter.Id),
-        new(DeflateFilter.Id, new() { [DeflateFilter.COMPRESSION_LEVEL] = 1 }),
-    ];
 
     private readonly Grid grid;
     private readonly NetcdfText text = new();
     private readonly H5File file = [];
     private readonly NetcdfDimension[] planeDimensions;
+    private readonly List<byte[]> rented = [];
 
     /// <summary>Starts a file with its coordinates and its map.</summary>
     public GridDocument(Grid grid, DateOnly day)
@@ -76,23 +72,28 @@ internal sealed class GridDocument
     /// <summary>Writes the whole file.</summary>
     public void Encode(Stream stream) => file.Write(stream, text.Options);
 
-    private H5Dataset Packed(PackedVariable variable)
+    /// <inheritdoc/>
+    public void Dispose()
     {
-        short[] stored = new short[grid.CellCount];
-        PlanePacker.Pack(variable.Values.Span, variable.Packing.Range, stored.AsSpan());
-        H5Dataset plane = Plane(variable, stored);
+        rented.ForEach(memory => ArrayPool<byte>.Shared.Return(memory));
+        rented.Clear();
+    }
+
+    private H5Dataset<short[]> Packed(PackedVariable variable)
+    {
+        H5Dataset<short[]> plane = Plane(variable, out Span<short> stored);
         StoredRange range = variable.Packing.Range;
+        PlanePacker.Pack(variable.Values.Span, range, stored);
         DescribePacking(plane, variable.Units, Packing.Fill, variable.Packing.Scale, variable.Packing.Offset);
         plane.Attributes["valid_range"] = new[] { (short)range.Lowest, (short)range.Highest };
         return plane;
     }
 
-    private H5Dataset Packed(BytePackedVariable variable)
+    private H5Dataset<byte[]> Packed(BytePackedVariable variable)
     {
-        byte[] stored = new byte[grid.CellCount];
-        PlanePacker.Pack(variable.Values.Span, variable.Packing.Range, stored.AsSpan());
-        H5Dataset plane = Plane(variable, stored);
+        H5Dataset<byte[]> plane = Plane(variable, out Span<byte> stored);
         StoredRange range = variable.Packing.Range;
+        PlanePacker.Pack(variable.Values.Span, range, stored);
         DescribePacking(plane, variable.Units, BytePacking.Fill, variable.Packing.Scale, variable.Packing.Offset);
         plane.Attributes["valid_range"] = new[] { (byte)range.Lowest, (byte)range.Highest };
         return plane;
@@ -107,21 +108,27 @@ internal sealed class GridDocument
         plane.Attributes["add_offset"] = offset;
     }
 
-    private H5Dataset Mask(MaskVariable variable)
+    private H5Dataset<ushort[]> Mask(MaskVariable variable)
     {
-        H5Dataset plane = Plane(variable, variable.Values.ToArray());
+        H5Dataset<ushort[]> plane = Plane(variable, out Span<ushort> stored);
+        variable.Values.Span.CopyTo(stored);
         plane.Attributes["flag_masks"] = variable.Meanings.Select(flag => flag.Mask).ToArray();
         plane.Attributes["flag_meanings"] = text.Of(string.Join(' ', variable.Meanings.Select(flag => flag.Meaning)));
         return plane;
     }
 
-    private H5Dataset Plane<T>(GridVariable variable, T[] stored)
+    // The plane's memory is filled by the caller and read when the file is encoded.
+    private unsafe H5Dataset<T[]> Plane<T>(GridVariable variable, out Span<T> stored)
+        where T : unmanaged
     {
-        H5Dataset plane = new(
-            stored,
-            chunks: [1, (uint)grid.Rows, (uint)grid.Columns],
+        int length = grid.CellCount * sizeof(T);
+        byte[] memory = ArrayPool<byte>.Shared.Rent(length);
+        rented.Add(memory);
+        stored = MemoryMarshal.Cast<byte, T>(memory.AsSpan(0, length));
+        H5Dataset<T[]> plane = new(
             fileDims: [1, (ulong)grid.Rows, (ulong)grid.Columns],
-            datasetCreation: new(Filters: Filters));
+            chunks: [1, (uint)grid.Rows, (uint)grid.Columns],
+            datasetCreation: new(new WholePlane(memory.AsMemory(0, length)), PlaneFilters.Of(sizeof(T))));
         plane.Attributes["long_name"] = text.Of(variable.LongName);
         if (variable.StandardName is { } standardName)
         {

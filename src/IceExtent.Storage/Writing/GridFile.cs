@@ -13,6 +13,10 @@ namespace IceExtent.Storage.Writing;
 /// </remarks>
 public static class GridFile
 {
+    // A file is put together in memory that the next file on the same thread uses again.
+    [ThreadStatic]
+    private static MemoryStream? encoded;
+
     /// <summary>Writes one file beside its place, flushes it and renames it.</summary>
     /// <param name="path">The file; its folder is made when it is missing.</param>
     /// <param name="grid">The grid of every variable.</param>
@@ -35,7 +39,7 @@ public static class GridFile
         ArgumentNullException.ThrowIfNull(variables);
         ArgumentNullException.ThrowIfNull(attributes);
 
-        GridDocument document = new(grid, day);
+        using GridDocument document = new(grid, day);
         foreach (KeyValuePair<string, string> attribute in attributes)
         {
             document.Describe(attribute.Key, attribute.Value);
@@ -46,7 +50,8 @@ public static class GridFile
             document.Add(variable);
         }
 
-        using MemoryStream content = new();
+        MemoryStream content = encoded ??= new MemoryStream();
+        content.SetLength(0);
         document.Encode(content);
         PublishedFile.Write(path, content.GetBuffer().AsSpan(0, (int)content.Length));
     }
