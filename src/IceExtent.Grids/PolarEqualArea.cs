@@ -3,13 +3,13 @@ namespace IceExtent.Grids;
 /// <summary>The Lambert azimuthal equal-area projection centred on a pole, on the ellipsoid.</summary>
 /// <remarks>
 /// Formulas: [Snyder1987] ch. 24, polar aspect; the same as [EPSG] method 9820 at a pole. Every area is true.
+/// Departure: they are written in the distance from the pole, so that no digits cancel next to it.
 /// Accuracy: 1e-6 m against PROJ (see <c>ProjPositionTests</c>).
 /// </remarks>
 public sealed class PolarEqualArea : IMapProjection
 {
     private readonly double eccentricity;
     private readonly double sign;
-    private readonly double poleAuthalic;
 
     /// <summary>Sets the projection up.</summary>
     /// <param name="ellipsoid">The figure of the Earth.</param>
@@ -23,7 +23,6 @@ public sealed class PolarEqualArea : IMapProjection
         OriginLongitudeDegrees = originLongitudeDegrees;
         eccentricity = ellipsoid.Eccentricity;
         sign = hemisphere == Hemisphere.North ? 1.0 : -1.0;
-        poleAuthalic = Authalic(1.0);
     }
 
     /// <inheritdoc/>
@@ -38,57 +37,62 @@ public sealed class PolarEqualArea : IMapProjection
     /// <inheritdoc/>
     public MapPosition Forward(GeoPosition position)
     {
-        double sine = sign * Math.Sin(double.DegreesToRadians(position.LatitudeDegrees));
+        double halfColatitude = Math.Sin(0.5 * double.DegreesToRadians(90.0 - (sign * position.LatitudeDegrees)));
         double distance = Ellipsoid.SemiMajorAxisMeters
-            * Math.Sqrt(Math.Max(0.0, poleAuthalic - Authalic(sine)));                 // [Snyder1987] eq. 24-23
+            * Math.Sqrt(AuthalicDrop(2.0 * halfColatitude * halfColatitude));          // [Snyder1987] eq. 24-23
         double angle = double.DegreesToRadians(position.LongitudeDegrees - OriginLongitudeDegrees);
         return new(distance * Math.Sin(angle), -sign * distance * Math.Cos(angle));    // [Snyder1987] eqs. 21-30, 24-24
     }
 
     /// <inheritdoc/>
+    /// <remarks>A position outside the map, which ends at the far pole, is taken to be the far pole.</remarks>
     public GeoPosition Inverse(MapPosition position)
     {
         double distance = Math.Sqrt((position.XMeters * position.XMeters) + (position.YMeters * position.YMeters));
         double ratio = distance / Ellipsoid.SemiMajorAxisMeters;
-        double latitude = LatitudeOfAuthalic(poleAuthalic - (ratio * ratio));
+        double colatitude = 2.0 * Math.Asin(Math.Sqrt(0.5 * VersedSineOfDrop(ratio * ratio)));
         double longitude = distance == 0.0
             ? 0.0
             : Math.Atan2(position.XMeters, -sign * position.YMeters);
         return new(
-            sign * double.RadiansToDegrees(latitude),
+            sign * (90.0 - double.RadiansToDegrees(colatitude)),
             Longitudes.Normalize(OriginLongitudeDegrees + double.RadiansToDegrees(longitude)));
     }
 
     /// <inheritdoc/>
     public double ArealScale(double latitudeDegrees) => 1.0;
 
-    // q of [Snyder1987] eq. 3-12, as a function of the sine of the latitude.
-    private double Authalic(double sine)
+    // How far q of [Snyder1987] eq. 3-12 lies below its value at the pole, from versed = 1 - sine of the latitude.
+    // Both terms of q are subtracted in closed form; taking q(1) - q(sine) would lose all digits near the pole.
+    private double AuthalicDrop(double versed)
     {
-        double product = eccentricity * sine;
-        return (1.0 - (eccentricity * eccentricity)) * (
-            (sine / (1.0 - (product * product)))
-            - (Math.Log((1.0 - product) / (1.0 + product)) / (2.0 * eccentricity)));
+        double sine = 1.0 - versed;
+        double squared = eccentricity * eccentricity;
+        double product = squared * sine;
+        double angular = eccentricity == 0.0
+            ? versed
+            : (1.0 - squared) / eccentricity * Math.Atanh(eccentricity * versed / (1.0 - product));
+        return (versed * (1.0 + product) / (1.0 - (product * sine))) + angular;
     }
 
-    // [Snyder1987] eq. 3-16, iterated on the sine, where it stays regular at the pole:
-    // dq/d(sine) = 2 (1 − e²) / (1 − e² sine²)².
-    private double LatitudeOfAuthalic(double authalic)
+    // [Snyder1987] eq. 3-16 as a Newton step on the versed sine: d(drop)/d(versed) = 2 (1 − e²) / (1 − e² sine²)².
+    private double VersedSineOfDrop(double drop)
     {
         const int MostRounds = 20;
-        double sine = Math.Clamp(authalic / 2.0, -1.0, 1.0);
         double squared = eccentricity * eccentricity;
+        double versed = Math.Clamp(0.5 * drop, 0.0, 2.0);
         for (int round = 0; round < MostRounds; round++)
         {
+            double sine = 1.0 - versed;
             double factor = 1.0 - (squared * sine * sine);
-            double step = (authalic - Authalic(sine)) * factor * factor / (2.0 * (1.0 - squared));
-            sine = Math.Clamp(sine + step, -1.0, 1.0);
-            if (Math.Abs(step) < 1e-16)
+            double step = (drop - AuthalicDrop(versed)) * factor * factor / (2.0 * (1.0 - squared));
+            versed = Math.Clamp(versed + step, 0.0, 2.0);
+            if (Math.Abs(step) <= 1e-16 * versed)
             {
                 break;
             }
         }
 
-        return Math.Asin(sine);
+        return versed;
     }
 }

@@ -3,7 +3,8 @@ namespace IceExtent.Grids;
 /// <summary>The polar stereographic projection with true scale on one parallel (variant B), either pole.</summary>
 /// <remarks>
 /// Formulas: [Snyder1987] ch. 21, with the signs of latitude, longitude, x and y turned for the south pole.
-/// The same projection is [EPSG] method 9829. Accuracy: 1e-6 m against PROJ (see <c>ProjPositionTests</c>).
+/// The same projection is [EPSG] method 9829.
+/// Departure: latitudes are counted from the pole, so that no digits cancel next to it. Accuracy: 1e-6 m against PROJ (see <c>ProjPositionTests</c>).
 /// </remarks>
 public sealed class PolarStereographic : IMapProjection
 {
@@ -32,7 +33,7 @@ public sealed class PolarStereographic : IMapProjection
         eccentricity = ellipsoid.Eccentricity;
         sign = Math.Sign(trueScaleLatitudeDegrees);
 
-        double trueScale = sign * double.DegreesToRadians(trueScaleLatitudeDegrees);
+        double trueScale = Colatitude(trueScaleLatitudeDegrees);
         double parallel = ParallelRadius(trueScale);
         double conformal = ConformalRadius(trueScale);
         metersPerConformalUnit = ellipsoid.SemiMajorAxisMeters * parallel / conformal; // [Snyder1987] eq. 21-34
@@ -56,8 +57,7 @@ public sealed class PolarStereographic : IMapProjection
     /// <inheritdoc/>
     public MapPosition Forward(GeoPosition position)
     {
-        double distance = metersPerConformalUnit
-            * ConformalRadius(sign * double.DegreesToRadians(position.LatitudeDegrees));
+        double distance = metersPerConformalUnit * ConformalRadius(Colatitude(position.LatitudeDegrees));
         double angle = sign * double.DegreesToRadians(position.LongitudeDegrees - OriginLongitudeDegrees);
         return new(sign * distance * Math.Sin(angle), -sign * distance * Math.Cos(angle)); // [Snyder1987] eqs. 21-30, 21-31
     }
@@ -68,11 +68,10 @@ public sealed class PolarStereographic : IMapProjection
         double x = sign * position.XMeters;
         double y = sign * position.YMeters;
         double distance = Math.Sqrt((x * x) + (y * y));                // [Snyder1987] eq. 20-18
-        double conformal = distance / metersPerConformalUnit;          // [Snyder1987] eq. 21-40
-        double latitude = LatitudeOfConformalRadius(conformal);
+        double colatitude = ColatitudeOfConformalRadius(distance / metersPerConformalUnit); // [Snyder1987] eq. 21-40
         double longitude = distance == 0.0 ? 0.0 : Math.Atan2(x, -y);  // [Snyder1987] eq. 20-16
         return new(
-            sign * double.RadiansToDegrees(latitude),
+            sign * (90.0 - double.RadiansToDegrees(colatitude)),
             Longitudes.Normalize(OriginLongitudeDegrees + (sign * double.RadiansToDegrees(longitude))));
     }
 
@@ -81,11 +80,11 @@ public sealed class PolarStereographic : IMapProjection
     /// <remarks>[Snyder1987] eqs. 21-32 and, at the pole, 21-35.</remarks>
     public double ScaleFactor(double latitudeDegrees)
     {
-        double latitude = sign * double.DegreesToRadians(latitudeDegrees);
-        double parallel = ParallelRadius(latitude);
-        return latitude > (Math.PI / 2.0) - 1e-9
+        double colatitude = Colatitude(latitudeDegrees);
+        return colatitude == 0.0
             ? poleScale
-            : metersPerConformalUnit * ConformalRadius(latitude) / (Ellipsoid.SemiMajorAxisMeters * parallel);
+            : metersPerConformalUnit * ConformalRadius(colatitude)
+                / (Ellipsoid.SemiMajorAxisMeters * ParallelRadius(colatitude));
     }
 
     /// <inheritdoc/>
@@ -95,39 +94,40 @@ public sealed class PolarStereographic : IMapProjection
         return scale * scale; // The map is conformal: both directions are stretched alike.
     }
 
+    // In radians from the pole of the map; in degrees 90 - latitude is exact near the pole, in radians it is not.
+    private double Colatitude(double latitudeDegrees) => double.DegreesToRadians(90.0 - (sign * latitudeDegrees));
+
     // [Snyder1987] eq. 14-15, in units of the equatorial radius.
-    private double ParallelRadius(double latitudeRadians)
+    private double ParallelRadius(double colatitudeRadians)
     {
-        double sine = eccentricity * Math.Sin(latitudeRadians);
-        return Math.Cos(latitudeRadians) / Math.Sqrt(1.0 - (sine * sine));
+        double sine = eccentricity * Math.Cos(colatitudeRadians);
+        return Math.Sin(colatitudeRadians) / Math.Sqrt(1.0 - (sine * sine));
     }
 
-    // [Snyder1987] eq. 15-9; the latitude is counted positive towards the pole of the map.
-    private double ConformalRadius(double latitudeRadians)
+    // [Snyder1987] eq. 15-9.
+    private double ConformalRadius(double colatitudeRadians)
     {
-        double sine = eccentricity * Math.Sin(latitudeRadians);
-        return Math.Tan((Math.PI / 4.0) - (latitudeRadians / 2.0))
-            / Math.Pow((1.0 - sine) / (1.0 + sine), eccentricity / 2.0);
+        double sine = eccentricity * Math.Cos(colatitudeRadians);
+        return Math.Tan(0.5 * colatitudeRadians) / Math.Pow((1.0 - sine) / (1.0 + sine), 0.5 * eccentricity);
     }
 
     // [Snyder1987] eq. 7-9, iterated; it gains more than two digits a round.
-    private double LatitudeOfConformalRadius(double conformal)
+    private double ColatitudeOfConformalRadius(double conformal)
     {
         const int MostRounds = 12;
-        double latitude = (Math.PI / 2.0) - (2.0 * Math.Atan(conformal));
+        double colatitude = 2.0 * Math.Atan(conformal);
         for (int round = 0; round < MostRounds; round++)
         {
-            double sine = eccentricity * Math.Sin(latitude);
-            double next = (Math.PI / 2.0) - (2.0 * Math.Atan(
-                conformal * Math.Pow((1.0 - sine) / (1.0 + sine), eccentricity / 2.0)));
-            if (Math.Abs(next - latitude) < 1e-15)
+            double sine = eccentricity * Math.Cos(colatitude);
+            double next = 2.0 * Math.Atan(conformal * Math.Pow((1.0 - sine) / (1.0 + sine), 0.5 * eccentricity));
+            if (Math.Abs(next - colatitude) <= 4e-16 * next)
             {
                 return next;
             }
 
-            latitude = next;
+            colatitude = next;
         }
 
-        return latitude;
+        return colatitude;
     }
 }

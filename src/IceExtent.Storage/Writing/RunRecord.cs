@@ -1,0 +1,98 @@
+using System.Text.Json.Serialization;
+using IceExtent.Grids;
+using IceExtent.Storage.Faults;
+
+namespace IceExtent.Storage.Writing;
+
+/// <summary>What one run did. Written to <c>runs/</c> as JSON; the fields are documented in docs/DATA.md.</summary>
+public sealed record RunRecord
+{
+    /// <summary>The version of this shape; it rises when a field changes its meaning or goes.</summary>
+    public const int CurrentSchemaVersion = 1;
+
+    /// <summary>The version of the shape this record has.</summary>
+    public int SchemaVersion { get; init; } = CurrentSchemaVersion;
+
+    /// <summary>The version of the program.</summary>
+    public required string ProgramVersion { get; init; }
+
+    /// <summary>When the run began, UTC.</summary>
+    public required DateTimeOffset Started { get; init; }
+
+    /// <summary>When the run ended, UTC.</summary>
+    public required DateTimeOffset Finished { get; init; }
+
+    /// <summary>The run file.</summary>
+    public required DigestedFile RunFile { get; init; }
+
+    /// <summary>SHA-256 of everything that rules the numbers: the run file and the files it names. Hexadecimal, lower case.</summary>
+    public required string ConfigurationDigest { get; init; }
+
+    /// <summary>The options of the command line, as given.</summary>
+    public required IReadOnlyList<string> CommandLine { get; init; }
+
+    /// <summary>How many days went which way.</summary>
+    public required RunCounts Counts { get; init; }
+
+    /// <summary>Every day the run covered, in date order, then by hemisphere.</summary>
+    public required IReadOnlyList<DayRecord> Days { get; init; }
+
+    /// <summary>Faults that belong to no single day, such as an archive file that could not be read.</summary>
+    public required IReadOnlyList<Fault> Faults { get; init; }
+
+    /// <summary>The input files that were read, in the order of their paths.</summary>
+    public required IReadOnlyList<string> FilesRead { get; init; }
+
+    /// <summary>What the process returned.</summary>
+    public required int ExitCode { get; init; }
+}
+
+/// <summary>A file and what it held.</summary>
+/// <param name="Path">Its full path.</param>
+/// <param name="Sha256">SHA-256 of its bytes, hexadecimal, lower case.</param>
+public sealed record DigestedFile(string Path, string Sha256);
+
+/// <summary>How many days went which way. A day counts once for each hemisphere.</summary>
+/// <param name="DaysDone">Days with numbers.</param>
+/// <param name="Gaps">Days without input, or with input that could not be used.</param>
+/// <param name="Rejected">Of the gaps, those whose input was there and could not be used.</param>
+public sealed record RunCounts(int DaysDone, int Gaps, int Rejected);
+
+/// <summary>How one day of one hemisphere went.</summary>
+public enum DayOutcome
+{
+    /// <summary>It has numbers.</summary>
+    Done,
+
+    /// <summary>There was no input.</summary>
+    Gap,
+
+    /// <summary>There was input, and it could not be used.</summary>
+    Rejected,
+}
+
+/// <summary>One day of one hemisphere in a run.</summary>
+/// <param name="Date">The day, UTC.</param>
+/// <param name="Hemisphere">The hemisphere.</param>
+/// <param name="Outcome">How it went.</param>
+/// <param name="Cells">What befell its cells, one entry a method in the order of the run file; empty where there are no numbers.</param>
+/// <param name="Faults">Why it is not, or not wholly, done.</param>
+public sealed record DayRecord(
+    DateOnly Date, Hemisphere Hemisphere, DayOutcome Outcome, IReadOnlyList<CellCounts> Cells, IReadOnlyList<Fault> Faults);
+
+/// <summary>How many cells of one day fell under each condition with one method. A cell may count under several.</summary>
+/// <param name="Method">The method.</param>
+/// <param name="OutOfRange">A brightness temperature was not believed.</param>
+/// <param name="ClippedBelow">The concentration was below 0.</param>
+/// <param name="ClippedAbove">The concentration was above 1.</param>
+/// <param name="Screened3719">The 37/19 screen found open water.</param>
+/// <param name="Screened2219">The 22/19 screen found open water.</param>
+/// <param name="NoSolution">The method had no answer.</param>
+public sealed record CellCounts(
+    string Method,
+    int OutOfRange,
+    int ClippedBelow,
+    int ClippedAbove,
+    [property: JsonPropertyName("screened_37_19")] int Screened3719,
+    [property: JsonPropertyName("screened_22_19")] int Screened2219,
+    int NoSolution);
