@@ -8,14 +8,18 @@ public static class Clipping
     /// <summary>Clips a run of cells.</summary>
     /// <param name="totalFraction">All ice; becomes 0 to 1, NaN stays.</param>
     /// <param name="multiyearFraction">Multiyear ice; becomes 0 to the clipped total, so that first-year ice, the rest, is never negative.</param>
+    /// <param name="firstYearFraction">Receives first-year ice: the clipped total less the clipped multiyear ice.</param>
     /// <param name="conditions">Receives <see cref="CellConditions.ClippedBelow"/> or <see cref="CellConditions.ClippedAbove"/> where the total was moved.</param>
     /// <returns>The numbers of totals raised to 0 and lowered to 1.</returns>
     /// <exception cref="ArgumentException">The spans differ in length.</exception>
     public static (int Below, int Above) Apply(
-        Span<float> totalFraction, Span<float> multiyearFraction, Span<CellConditions> conditions)
+        Span<float> totalFraction,
+        Span<float> multiyearFraction,
+        Span<float> firstYearFraction,
+        Span<CellConditions> conditions)
     {
         int cells = totalFraction.Length;
-        if (multiyearFraction.Length != cells || conditions.Length != cells)
+        if (multiyearFraction.Length != cells || firstYearFraction.Length != cells || conditions.Length != cells)
         {
             throw new ArgumentException("All planes must have the same number of cells.", nameof(totalFraction));
         }
@@ -27,8 +31,8 @@ public static class Clipping
         for (; cell <= cells - Vector<ushort>.Count; cell += Vector<ushort>.Count)
         {
             int half = cell + Vector<float>.Count;
-            (Vector<int> low1, Vector<int> high1) = Clip(totalFraction[cell..], multiyearFraction[cell..]);
-            (Vector<int> low2, Vector<int> high2) = Clip(totalFraction[half..], multiyearFraction[half..]);
+            (Vector<int> low1, Vector<int> high1) = Clip(totalFraction[cell..], multiyearFraction[cell..], firstYearFraction[cell..]);
+            (Vector<int> low2, Vector<int> high2) = Clip(totalFraction[half..], multiyearFraction[half..], firstYearFraction[half..]);
             below -= CellMasks.Set(low1, low2, (ushort)CellConditions.ClippedBelow, masks[cell..]);
             above -= CellMasks.Set(high1, high2, (ushort)CellConditions.ClippedAbove, masks[cell..]);
         }
@@ -50,13 +54,15 @@ public static class Clipping
             float clipped = total < 0f ? 0f : total > 1f ? 1f : total;
             float multi = multiyearFraction[cell];
             totalFraction[cell] = clipped;
-            multiyearFraction[cell] = float.IsNaN(clipped) ? float.NaN : multi < 0f ? 0f : multi > clipped ? clipped : multi;
+            multi = float.IsNaN(clipped) ? float.NaN : multi < 0f ? 0f : multi > clipped ? clipped : multi;
+            multiyearFraction[cell] = multi;
+            firstYearFraction[cell] = clipped - multi;
         }
 
         return (below, above);
     }
 
-    private static (Vector<int> Below, Vector<int> Above) Clip(Span<float> totals, Span<float> multiyears)
+    private static (Vector<int> Below, Vector<int> Above) Clip(Span<float> totals, Span<float> multiyears, Span<float> firstYears)
     {
         Vector<float> total = new(totals);
         Vector<float> multi = new(multiyears);
@@ -67,7 +73,9 @@ public static class Clipping
 
         Vector<float> lifted = Vector.ConditionalSelect(Vector.LessThan(multi, Vector<float>.Zero), Vector<float>.Zero, multi);
         Vector<float> bounded = Vector.ConditionalSelect(Vector.GreaterThan(lifted, clipped), clipped, lifted);
-        Vector.ConditionalSelect(Vector.Equals(clipped, clipped), bounded, clipped).CopyTo(multiyears);
+        Vector<float> kept = Vector.ConditionalSelect(Vector.Equals(clipped, clipped), bounded, clipped);
+        kept.CopyTo(multiyears);
+        (clipped - kept).CopyTo(firstYears);
         return (below, above);
     }
 }

@@ -1,3 +1,5 @@
+using System.Runtime.InteropServices;
+
 namespace IceExtent.Retrieval;
 
 /// <summary>What one method says of one day on one grid. Reused from day to day.</summary>
@@ -7,7 +9,8 @@ public sealed class ConcentrationPlanes
     private readonly float[] total;
     private readonly float[] multiyear;
     private readonly float[] standardError;
-    private readonly CellConditions[] conditions;
+    private readonly float[] firstYear;
+    private readonly ushort[] conditions;
 
     /// <summary>Makes room for one grid.</summary>
     /// <param name="cellCount">The number of cells, 1 or more.</param>
@@ -17,7 +20,8 @@ public sealed class ConcentrationPlanes
         total = new float[cellCount];
         multiyear = new float[cellCount];
         standardError = new float[cellCount];
-        conditions = new CellConditions[cellCount];
+        firstYear = new float[cellCount];
+        conditions = new ushort[cellCount];
     }
 
     /// <summary>The number of cells.</summary>
@@ -26,14 +30,17 @@ public sealed class ConcentrationPlanes
     /// <summary>Sea-ice concentration of all ice. Unit: 1.</summary>
     public Span<float> Total => total;
 
-    /// <summary>Concentration of multiyear ice (type B in the south). Unit: 1. First-year ice is the rest of the total.</summary>
+    /// <summary>Concentration of multiyear ice (type B in the south). Unit: 1. NaN everywhere for a method that cannot tell types apart.</summary>
     public Span<float> Multiyear => multiyear;
+
+    /// <summary>Concentration of first-year ice (type A in the south): what is left of the total. Unit: 1.</summary>
+    public Span<float> FirstYear => firstYear;
 
     /// <summary>Standard error of <see cref="Total"/>. Unit: 1.</summary>
     public Span<float> StandardError => standardError;
 
     /// <summary>Why each cell is what it is.</summary>
-    public Span<CellConditions> Conditions => conditions;
+    public Span<CellConditions> Conditions => MemoryMarshal.Cast<ushort, CellConditions>(conditions.AsSpan());
 
     /// <summary>The total as memory, for writers.</summary>
     public ReadOnlyMemory<float> TotalMemory => total;
@@ -41,9 +48,12 @@ public sealed class ConcentrationPlanes
     /// <summary>Multiyear ice as memory, for writers.</summary>
     public ReadOnlyMemory<float> MultiyearMemory => multiyear;
 
+    /// <summary>First-year ice as memory, for writers.</summary>
+    public ReadOnlyMemory<float> FirstYearMemory => firstYear;
+
     /// <summary>The standard error as memory, for writers.</summary>
     public ReadOnlyMemory<float> StandardErrorMemory => standardError;
 
-    /// <summary>The conditions as memory, for writers.</summary>
-    public ReadOnlyMemory<CellConditions> ConditionMemory => conditions;
+    /// <summary>The conditions as bit masks, for writers.</summary>
+    public ReadOnlyMemory<ushort> ConditionMemory => conditions;
 }

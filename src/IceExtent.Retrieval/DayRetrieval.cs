@@ -29,8 +29,8 @@ public sealed class DayRetrieval
         (this.method, this.screens, this.scatter, this.mask) = (method, screens, scatter, mask);
     }
 
-    /// <summary>The method's name.</summary>
-    public string MethodName => method.Name;
+    /// <summary>The tuned method.</summary>
+    public IConcentrationMethod Method => method;
 
     /// <summary>Makes impossible temperatures of every channel missing. Call it once a day, before any <see cref="Retrieve"/>.</summary>
     /// <param name="observed">Changed in place.</param>
@@ -80,7 +80,7 @@ public sealed class DayRetrieval
             MissingCells.Mark(cells.Of(mask.Conditions), new(observed, method.Channels, cells), total, conditions);
         int screened3719 = Screen(Channel.V37, screens.Gradient3719Limit, CellConditions.WeatherGradient3719);
         int screened2219 = Screen(Channel.V22, screens.Gradient2219Limit, CellConditions.WeatherGradient2219);
-        (int below, int above) = Clipping.Apply(total, cells.Of(into.Multiyear), conditions);
+        (int below, int above) = Clipping.Apply(total, cells.Of(into.Multiyear), cells.Of(into.FirstYear), conditions);
         CellScatter.Apply(total, scatter, cells.Of(into.StandardError));
         return new(0, screened3719, screened2219, below, above, noObservation, noSolution);
 

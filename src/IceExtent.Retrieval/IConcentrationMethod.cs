@@ -13,6 +13,9 @@ public interface IConcentrationMethod
     /// <summary>The channels without which a cell has no concentration.</summary>
     IReadOnlyList<Channel> Channels { get; }
 
+    /// <summary>Whether the method tells first-year from multiyear ice.</summary>
+    bool SeparatesIceTypes { get; }
+
     /// <summary>Writes the unclipped concentrations of a run of cells.</summary>
     /// <param name="observed">Holds every channel of <see cref="Channels"/>, in K; NaN is missing.</param>
     /// <param name="cells">The cells to handle.</param>

@@ -23,6 +23,9 @@ public sealed class NasaTeam : IConcentrationMethod
     public IReadOnlyList<Channel> Channels { get; } = [Channel.V19, Channel.H19, Channel.V37];
 
     /// <inheritdoc/>
+    public bool SeparatesIceTypes => true;
+
+    /// <inheritdoc/>
     public void Retrieve(BrightnessPlanes observed, CellRange cells, ConcentrationPlanes into)
     {
         ArgumentNullException.ThrowIfNull(observed);

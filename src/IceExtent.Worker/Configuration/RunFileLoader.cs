@@ -1,0 +1,118 @@
+using IceExtent.Grids;
+using IceExtent.Retrieval;
+using IceExtent.Statistics;
+using IceExtent.Storage.Faults;
+using IceExtent.Storage.Reading;
+
+namespace IceExtent.Worker.Configuration;
+
+/// <summary>Reads run files.</summary>
+internal static class RunFileLoader
+{
+    /// <summary>Reads and checks a run file and every file it names.</summary>
+    /// <exception cref="ConfigurationException">There are faults; all of them are in it.</exception>
+    public static RunSettings Load(string runFile, ConfigFolder config)
+    {
+        List<Fault> faults = [];
+        string path = Path.GetFullPath(runFile);
+        string folder = Path.GetDirectoryName(path)!;
+        ConfigTable? defaults = TomlFile.Read(config.Defaults, faults);
+        ConfigTable? table = TomlFile.Read(path, faults);
+        if (defaults is null || table is null)
+        {
+            throw new ConfigurationException(faults);
+        }
+
+        ConfigScope scope = new(table, string.Empty, faults);
+        string? output = scope.Text("output");
+        LoadedGrid? grid = scope.Text("grid") is { } gridName
+            && ConfigFolder.Resolve(scope, "grid", gridName, config.Grids, folder) is { } gridPath
+                ? GridLoader.Load(gridPath, faults)
+                : null;
+        IReadOnlyList<string> methods = Methods(scope);
+        bool? writeGrids = scope.Flag("write_grids", required: false);
+        string? notice = scope.Text("notice", required: false);
+        LayeredScope layered = new(scope, new(defaults, string.Empty, faults));
+        TotalsRules? rules = Rules(layered);
+        double? landLimit = layered.Number("land", "limit_fraction", 0.01, 1.0, string.Empty);
+        double? errorLength = layered.Number("standard_error", "correlation_length_km", 1.0, 3_000.0, "km");
+        layered.RefuseUnknown();
+        SourceLoader sources = new(folder, config, methods);
+        List<RunSource?> loaded = [.. scope.Tables("source").Select(source => sources.Load(source, grid?.Grid))];
+        scope.RefuseUnknown();
+        LandShare? land = grid is null ? null : Land(grid, faults);
+        if (faults.Count > 0)
+        {
+            throw new ConfigurationException(faults);
+        }
+
+        return new()
+        {
+            RunFile = path,
+            Output = Path.GetFullPath(output!, folder),
+            Grid = grid!.Grid,
+            ConfigPaths = [config.Defaults, grid.ConfigPath, grid.LandPath],
+            Ocean = land!.OceanBelow(landLimit!.Value),
+            Methods = methods,
+            WriteGrids = writeGrids ?? true,
+            Rules = rules!,
+            LandLimitFraction = landLimit.Value,
+            ErrorLengthMeters = errorLength!.Value * 1_000.0,
+            Notice = notice,
+            Sources = [.. loaded.OfType<RunSource>()],
+        };
+    }
+
+    private static IReadOnlyList<string> Methods(ConfigScope scope)
+    {
+        List<string> methods = [];
+        foreach ((string name, ConfigPosition at) in scope.Texts("methods") ?? [])
+        {
+            if (!ConcentrationMethods.Names.Contains(name))
+            {
+                scope.UnknownName("methods", at, name, [.. ConcentrationMethods.Names]);
+            }
+            else if (methods.Contains(name))
+            {
+                scope.Faults.Add(new("IE1003", scope.Where("methods", at), $"the method {name} a second time", "each method once", "Remove one of the two."));
+            }
+            else
+            {
+                methods.Add(name);
+            }
+        }
+
+        return methods;
+    }
+
+    private static TotalsRules? Rules(LayeredScope scope)
+    {
+        double? ice = scope.Number("totals", "ice_fraction", 0.01, 0.99, string.Empty);
+        double? pack = scope.Number("totals", "pack_fraction", 0.01, 1.0, string.Empty);
+        if (ice is null || pack is null)
+        {
+            return null;
+        }
+
+        if (pack <= ice)
+        {
+            scope.Refuse("totals", "pack_fraction", FormattableString.Invariant($"{pack}, not above ice_fraction = {ice}"), "a fraction above ice_fraction");
+            return null;
+        }
+
+        return new(ice.Value, pack.Value);
+    }
+
+    private static LandShare? Land(LoadedGrid grid, List<Fault> faults)
+    {
+        try
+        {
+            return LandShareFile.Read(grid.LandPath, grid.Grid);
+        }
+        catch (FaultException fault)
+        {
+            faults.Add(fault.Fault);
+            return null;
+        }
+    }
+}

@@ -1,0 +1,47 @@
+using IceExtent.Grids;
+using IceExtent.Retrieval;
+using IceExtent.Statistics;
+using IceExtent.Storage.Reading;
+
+namespace IceExtent.Worker.Configuration;
+
+/// <summary>One source of a run: a sensor and its files.</summary>
+/// <param name="Sensor">The sensor.</param>
+/// <param name="SensorPath">Its configuration file.</param>
+/// <param name="Description">Its files and how they are read.</param>
+/// <param name="Status">Whether its days may still change.</param>
+internal sealed record RunSource(Sensor Sensor, string SensorPath, SourceDescription Description, DayStatus Status);
+
+/// <summary>A checked run file. An instance is always valid.</summary>
+internal sealed record RunSettings
+{
+    /// <summary>The run file, absolute.</summary>
+    public required string RunFile { get; init; }
+
+    /// <summary>The archive's folder, absolute.</summary>
+    public required string Output { get; init; }
+
+    public required Grid Grid { get; init; }
+
+    /// <summary>The files beside the run file that decide numbers: defaults, grid, land.</summary>
+    public required IReadOnlyList<string> ConfigPaths { get; init; }
+
+    /// <summary>Whether each cell counts as ocean.</summary>
+    public required bool[] Ocean { get; init; }
+
+    public required IReadOnlyList<string> Methods { get; init; }
+
+    public required bool WriteGrids { get; init; }
+
+    public required TotalsRules Rules { get; init; }
+
+    public required double LandLimitFraction { get; init; }
+
+    public required double ErrorLengthMeters { get; init; }
+
+    /// <summary>A line that every output carries, or null.</summary>
+    public required string? Notice { get; init; }
+
+    /// <summary>In the order of the run file: where two have a day, the first rules.</summary>
+    public required IReadOnlyList<RunSource> Sources { get; init; }
+}

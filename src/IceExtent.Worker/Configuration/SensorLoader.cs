@@ -1,0 +1,144 @@
+using IceExtent.Retrieval;
+using IceExtent.Storage.Faults;
+
+namespace IceExtent.Worker.Configuration;
+
+/// <summary>Reads sensor files: config/sensors or a run's own.</summary>
+internal static class SensorLoader
+{
+    private static readonly Channel[] TiePointChannels = [Channel.V19, Channel.H19, Channel.V37];
+
+    /// <summary>Reads and checks one sensor.</summary>
+    /// <returns>The sensor, or null after adding to <paramref name="faults"/>.</returns>
+    public static Sensor? Load(string path, ICollection<Fault> faults)
+    {
+        int before = faults.Count;
+        if (TomlFile.Read(path, faults) is not { } table)
+        {
+            return null;
+        }
+
+        ConfigScope scope = new(table, string.Empty, faults);
+        string? title = scope.Text("title");
+        DateOnly? first = scope.Date("first_day");
+        DateOnly? last = scope.Date("last_day", required: false);
+        double? gap = scope.Number("polar_gap_latitude", 60.0, 90.0, "degrees", required: false);
+        double[]? range = scope.Numbers("range_k", 2, RangeScreen.Physical.LowestKelvins, RangeScreen.Physical.HighestKelvins, "K");
+        Dictionary<Channel, double> frequencies = Frequencies(scope);
+        RetrievalScatter? scatter = Scatter(scope.Table("scatter"));
+        HemisphereTuning? north = Tuning(scope.Table("north"));
+        HemisphereTuning? south = Tuning(scope.Table("south"));
+        scope.RefuseUnknown();
+        if (range is not null && !(range[0] < range[1]))
+        {
+            Refuse(scope, "range_k", "a lower end that is not below the upper one", "two rising temperatures in K");
+        }
+
+        if (first is not null && last is not null && last < first)
+        {
+            Refuse(scope, "last_day", "a day before first_day", "a day not before first_day");
+        }
+
+        return faults.Count > before ? null : new Sensor
+        {
+            Name = Path.GetFileNameWithoutExtension(path),
+            Title = title!,
+            FrequenciesGigahertz = frequencies,
+            FirstDay = first!.Value,
+            LastDay = last,
+            Range = new(range![0], range[1]),
+            PolarGapLatitudeDegrees = gap,
+            Scatter = scatter!,
+            North = north!,
+            South = south!,
+        };
+    }
+
+    private static void Refuse(ConfigScope scope, string key, string found, string allowed) =>
+        scope.Faults.Add(new("IE1011", scope.Where(key, scope.PositionOf(key)), found, allowed, "Correct the value."));
+
+    private static Dictionary<Channel, double> Frequencies(ConfigScope scope)
+    {
+        Dictionary<Channel, double> frequencies = [];
+        if (scope.Table("frequencies_ghz") is { } table)
+        {
+            foreach (Channel channel in ChannelNames.All)
+            {
+                if (table.Number(ChannelNames.NameOf(channel), 1.0, 200.0, "GHz", required: false) is { } frequency)
+                {
+                    frequencies[channel] = frequency;
+                }
+            }
+
+            table.RefuseUnknown();
+        }
+
+        return frequencies;
+    }
+
+    private static RetrievalScatter? Scatter(ConfigScope? scope)
+    {
+        double? water = scope?.Number("open_water", 0.001, 0.5, string.Empty);
+        double? ice = scope?.Number("closed_ice", 0.001, 0.5, string.Empty);
+        scope?.RefuseUnknown();
+        return water is null || ice is null ? null : new(water.Value, ice.Value);
+    }
+
+    private static HemisphereTuning? Tuning(ConfigScope? scope)
+    {
+        if (scope is null)
+        {
+            return null;
+        }
+
+        TiePoints? points = Points(scope);
+        WeatherScreens? screens = Screens(scope.Table("screens"));
+        scope.RefuseUnknown();
+        return points is null || screens is null ? null : new(points, screens);
+    }
+
+    private static TiePoints? Points(ConfigScope scope)
+    {
+        ConfigScope? table = scope.Table("tie_points_k");
+        TiePoint? water = Point(table?.Table("open_water"));
+        TiePoint? first = Point(table?.Table("first_year"));
+        TiePoint? multi = Point(table?.Table("multiyear"));
+        table?.RefuseUnknown();
+        if (water is null || first is null || multi is null)
+        {
+            return null;
+        }
+
+        TiePoints points = new(water, first, multi);
+        try
+        {
+            _ = NasaTeamCoefficients.From(points);
+            return points;
+        }
+        catch (ArgumentException)
+        {
+            Refuse(scope, "tie_points_k", "three surfaces on one line", "surfaces that form a triangle in polarisation and gradient ratio");
+            return null;
+        }
+    }
+
+    private static TiePoint? Point(ConfigScope? scope)
+    {
+        if (scope is null)
+        {
+            return null;
+        }
+
+        double?[] kelvins = Array.ConvertAll(TiePointChannels, channel => scope.Number(ChannelNames.NameOf(channel), 50.0, 350.0, "K"));
+        scope.RefuseUnknown();
+        return kelvins is [{ } v19, { } h19, { } v37] ? new(v19, h19, v37) : null;
+    }
+
+    private static WeatherScreens? Screens(ConfigScope? scope)
+    {
+        double? gradient3719 = scope?.Number("gradient_37_19", -0.5, 0.5, string.Empty);
+        double? gradient2219 = scope?.Number("gradient_22_19", -0.5, 0.5, string.Empty, required: false);
+        scope?.RefuseUnknown();
+        return gradient3719 is null ? null : new(gradient3719.Value, gradient2219);
+    }
+}

@@ -1,0 +1,131 @@
+using IceExtent.Grids;
+using IceExtent.Retrieval;
+using IceExtent.Statistics;
+using IceExtent.Storage.Faults;
+using IceExtent.Storage.Reading;
+
+namespace IceExtent.Worker.Configuration;
+
+/// <summary>Checks the [[source]] tables of a run file.</summary>
+internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadOnlyList<string> methods)
+{
+    private static readonly Dictionary<string, RawNumber> Numbers = new(StringComparer.Ordinal)
+    {
+        ["int16"] = RawNumber.SignedTwoBytes,
+        ["uint16"] = RawNumber.UnsignedTwoBytes,
+        ["int32"] = RawNumber.SignedFourBytes,
+        ["float32"] = RawNumber.RealFourBytes,
+        ["float64"] = RawNumber.RealEightBytes,
+    };
+
+    /// <summary>Checks one table.</summary>
+    /// <returns>The source, or null after adding faults.</returns>
+    public RunSource? Load(ConfigScope scope, Grid? grid)
+    {
+        int before = scope.Faults.Count;
+        string? sensorName = scope.Text("sensor");
+        string? sensorPath = sensorName is null ? null : ConfigFolder.Resolve(scope, "sensor", sensorName, config.Sensors, runFolder);
+        Sensor? sensor = sensorPath is null ? null : SensorLoader.Load(sensorPath, scope.Faults);
+        IReadOnlyList<string> files = Files(scope);
+        Dictionary<Channel, string> channels = Channels(scope);
+        string? status = scope.Name("status", ["final", "provisional"], required: false);
+        RawLayout? raw = scope.Has("raw") && scope.Table("raw") is { } table ? Raw(table) : null;
+        scope.RefuseUnknown();
+        if (sensor is not null && channels.Count > 0 && grid is not null)
+        {
+            CheckChannels(scope, sensor, channels, grid);
+        }
+
+        return scope.Faults.Count > before || grid is null ? null : new(
+            sensor!,
+            sensorPath!,
+            new(files, grid, channels, raw),
+            status == "provisional" ? DayStatus.Provisional : DayStatus.Final);
+    }
+
+    private IReadOnlyList<string> Files(ConfigScope scope)
+    {
+        List<string> files = [];
+        foreach ((string pattern, ConfigPosition at) in scope.Texts("files") ?? [])
+        {
+            IReadOnlyList<string> found = FileGlob.Find(pattern, runFolder);
+            if (found.Count == 0)
+            {
+                scope.Faults.Add(new("IE1008", scope.Where("files", at), $"no file for {pattern}", "a pattern that matches at least one file", $"Patterns start from {runFolder}; check the spelling."));
+            }
+
+            files.AddRange(found);
+        }
+
+        return [.. files.Distinct(StringComparer.Ordinal).Order(StringComparer.Ordinal)];
+    }
+
+    private static Dictionary<Channel, string> Channels(ConfigScope scope)
+    {
+        Dictionary<Channel, string> channels = [];
+        if (scope.Table("channels") is not { } table)
+        {
+            return channels;
+        }
+
+        foreach (Channel channel in ChannelNames.All)
+        {
+            if (table.Text(ChannelNames.NameOf(channel), required: false) is { } name)
+            {
+                channels[channel] = name;
+            }
+        }
+
+        table.RefuseUnknown();
+        return channels;
+    }
+
+    private void CheckChannels(ConfigScope scope, Sensor sensor, Dictionary<Channel, string> channels, Grid grid)
+    {
+        foreach (Channel channel in channels.Keys.Where(channel => !sensor.FrequenciesGigahertz.ContainsKey(channel)))
+        {
+            scope.Faults.Add(new(
+                "IE1009",
+                scope.Where("channels", scope.PositionOf("channels")),
+                $"the channel {ChannelNames.NameOf(channel)}, which {sensor.Name} does not have",
+                string.Join(", ", sensor.FrequenciesGigahertz.Keys.Select(ChannelNames.NameOf)),
+                "Remove the channel or choose another sensor."));
+        }
+
+        foreach (string name in methods)
+        {
+            IConcentrationMethod method = ConcentrationMethods.Create(name, sensor.In(grid.Hemisphere));
+            foreach (Channel channel in method.Channels.Where(channel => !channels.ContainsKey(channel)))
+            {
+                scope.Faults.Add(new(
+                    "IE1009",
+                    scope.Where("channels", scope.PositionOf("channels")),
+                    $"no {ChannelNames.NameOf(channel)}, which the method {name} needs",
+                    string.Join(", ", method.Channels.Select(ChannelNames.NameOf)),
+                    "Map the channel to its variable, or leave the method out."));
+            }
+        }
+    }
+
+    private static RawLayout? Raw(ConfigScope scope)
+    {
+        int before = scope.Faults.Count;
+        string? pattern = scope.Text("name");
+        string? number = scope.Name("number", Numbers.Keys);
+        string? order = scope.Name("byte_order", ["little", "big"]);
+        double? scale = scope.Number("scale_k", -1e6, 1e6, "K per stored unit");
+        double? offset = scope.Number("offset_k", -1e6, 1e6, "K", required: false);
+        double? missing = scope.Number("missing", double.MinValue, double.MaxValue, string.Empty, required: false);
+        int? header = scope.WholeNumber("header_bytes", 0, 1 << 20, required: false);
+        bool? topFirst = scope.Flag("top_row_first", required: false);
+        scope.RefuseUnknown();
+        if (pattern is not null && !(pattern.Contains("{date:", StringComparison.Ordinal) && pattern.Contains("{channel}", StringComparison.Ordinal)))
+        {
+            scope.Faults.Add(new("IE1006", scope.Where("name", scope.PositionOf("name")), pattern, "a name with {date:yyyyMMdd} and {channel} in it", "Write the file's name with the date and the channel replaced."));
+        }
+
+        return scope.Faults.Count > before
+            ? null
+            : new(pattern!, Numbers[number!], order == "big", scale!.Value, offset ?? 0.0, missing, header ?? 0, topFirst ?? true);
+    }
+}

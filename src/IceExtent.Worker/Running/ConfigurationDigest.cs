@@ -1,0 +1,37 @@
+using System.Security.Cryptography;
+using System.Text;
+using IceExtent.Retrieval;
+using IceExtent.Worker.Configuration;
+
+namespace IceExtent.Worker.Running;
+
+/// <summary>One number for everything that decides the numbers of an archive, apart from the input files.</summary>
+internal static class ConfigurationDigest
+{
+    /// <summary>SHA-256 over the configuration files, the run's own settings and the program's version, in hexadecimal.</summary>
+    public static string Of(RunSettings settings)
+    {
+        using IncrementalHash hash = IncrementalHash.CreateHash(HashAlgorithmName.SHA256);
+        foreach (string path in settings.ConfigPaths.Concat(settings.Sources.Select(source => source.SensorPath)))
+        {
+            hash.AppendData(SHA256.HashData(File.ReadAllBytes(path)));
+        }
+
+        hash.AppendData(Encoding.UTF8.GetBytes(string.Join('\n', SettingsText(settings))));
+        return Convert.ToHexStringLower(hash.GetHashAndReset());
+    }
+
+    private static IEnumerable<string> SettingsText(RunSettings settings)
+    {
+        yield return ProgramVersion.Text;
+        yield return settings.Grid.Name;
+        yield return settings.Notice ?? string.Empty;
+        yield return FormattableString.Invariant(
+            $"{settings.Rules.IceFraction:R} {settings.Rules.PackFraction:R} {settings.LandLimitFraction:R} {settings.ErrorLengthMeters:R}");
+        foreach (RunSource source in settings.Sources)
+        {
+            string channels = string.Join(' ', source.Description.Channels.OrderBy(pair => pair.Key).Select(pair => $"{ChannelNames.NameOf(pair.Key)}={pair.Value}"));
+            yield return FormattableString.Invariant($"{source.Sensor.Name} {source.Status} {channels} {source.Description.Raw}");
+        }
+    }
+}

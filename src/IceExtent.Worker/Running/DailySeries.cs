@@ -1,0 +1,112 @@
+using IceExtent.Grids;
+using IceExtent.Statistics;
+using IceExtent.Storage.Faults;
+using IceExtent.Storage.Writing;
+
+namespace IceExtent.Worker.Running;
+
+/// <summary>Keeps the daily tables of an archive: one file a method and year, written when its year is over.</summary>
+/// <remarks>
+/// Days that a year's file already has and that this run did not touch stay as they are; days whose input turned out
+/// to be unusable are taken out of it, so the archive always is what its inputs make. Not shared between threads.
+/// </remarks>
+internal sealed class DailySeries(
+    ArchiveLayout layout,
+    Hemisphere hemisphere,
+    IReadOnlyList<string> methods,
+    Func<string, IReadOnlyList<KeyValuePair<string, string>>> metadataOf)
+{
+    /// <summary>The key of the configuration's digest in a table's metadata.</summary>
+    public const string DigestKey = "configuration_digest";
+
+    private readonly Dictionary<string, List<DailyRow>> rowsByMethod = methods.ToDictionary(method => method, _ => new List<DailyRow>(), StringComparer.Ordinal);
+    private readonly HashSet<DateOnly> lostDays = [];
+    private int? year;
+
+    /// <summary>Refuses an archive that was made with another configuration, before anything is computed.</summary>
+    /// <param name="years">The years the run touches.</param>
+    /// <param name="digest">The configuration's digest.</param>
+    /// <exception cref="FaultException">IE3001.</exception>
+    public void CheckSameConfiguration(IEnumerable<int> years, string digest)
+    {
+        foreach (string path in methods.SelectMany(_ => years, (method, touched) => layout.DailyTable(method, hemisphere, touched)).Where(File.Exists))
+        {
+            string? found = DailyTable.Read(path).Metadata.FirstOrDefault(pair => pair.Key == DigestKey).Value;
+            if (!string.Equals(found, digest, StringComparison.Ordinal))
+            {
+                throw new FaultException(new(
+                    "IE3001",
+                    path,
+                    $"days made with another configuration (digest {found?[..12] ?? "none"})",
+                    $"the digest {digest[..12]} of this run file, sensor files, grid, land and program version",
+                    "Choose another output folder, or move the old archive away and run again."));
+            }
+        }
+    }
+
+    /// <summary>Takes one day. Days come in date order.</summary>
+    public void Add(DayResult result)
+    {
+        Open(result.Day.Date);
+        foreach (MethodResult method in result.Methods)
+        {
+            rowsByMethod[method.Method].AddRange(method.Rows);
+        }
+
+        if (result.Fault is not null)
+        {
+            lostDays.Add(result.Day.Date);
+        }
+    }
+
+    /// <summary>Writes the year in hand.</summary>
+    /// <exception cref="FaultException">A table cannot be written.</exception>
+    public void Flush()
+    {
+        if (year is { } open)
+        {
+            foreach (string method in methods)
+            {
+                Write(layout.DailyTable(method, hemisphere, open), rowsByMethod[method], metadataOf(method));
+                rowsByMethod[method].Clear();
+            }
+        }
+
+        lostDays.Clear();
+        year = null;
+    }
+
+    /// <summary>Takes days out of the tables of their years, apart from any run of days.</summary>
+    /// <exception cref="FaultException">A table cannot be written.</exception>
+    public void Remove(IEnumerable<DateOnly> days)
+    {
+        foreach (DateOnly day in days.Order())
+        {
+            Open(day);
+            lostDays.Add(day);
+        }
+
+        Flush();
+    }
+
+    private void Open(DateOnly day)
+    {
+        if (year is { } open && day.Year != open)
+        {
+            Flush();
+        }
+
+        year = day.Year;
+    }
+
+    private void Write(string path, List<DailyRow> rows, IReadOnlyList<KeyValuePair<string, string>> metadata)
+    {
+        IReadOnlyList<DailyRow> before = File.Exists(path) ? DailyTable.Read(path).Rows : [];
+        HashSet<DateOnly> touched = [.. rows.Select(row => row.Date), .. lostDays];
+        DailyRow[] kept = [.. before.Where(row => !touched.Contains(row.Date))];
+        if (rows.Count > 0 || kept.Length < before.Count)
+        {
+            DailyTable.Write(path, [.. kept.Concat(rows).OrderBy(row => row.Date).ThenBy(row => row.Region, StringComparer.Ordinal)], metadata);
+        }
+    }
+}

@@ -1,0 +1,57 @@
+using IceExtent.Retrieval;
+using IceExtent.Storage.Writing;
+using IceExtent.Worker.Configuration;
+
+namespace IceExtent.Worker.Running;
+
+/// <summary>Writes one CF NetCDF-4 file a day and method. Safe to share between workers.</summary>
+internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IReadOnlyList<KeyValuePair<string, string>> attributes)
+{
+    private static readonly (ushort Mask, string Meaning)[] Meanings =
+    [
+        ((ushort)CellConditions.Land, "land"),
+        ((ushort)CellConditions.PolarGap, "polar_gap"),
+        ((ushort)CellConditions.NoObservation, "no_observation"),
+        ((ushort)CellConditions.OutOfRange, "brightness_temperature_out_of_range"),
+        ((ushort)CellConditions.WeatherGradient3719, "weather_screened_by_gradient_37_19"),
+        ((ushort)CellConditions.WeatherGradient2219, "weather_screened_by_gradient_22_19"),
+        ((ushort)CellConditions.ClippedBelow, "clipped_from_below_0"),
+        ((ushort)CellConditions.ClippedAbove, "clipped_from_above_1"),
+        ((ushort)CellConditions.NoSolution, "no_solution"),
+    ];
+
+    private static readonly KeyValuePair<string, string>[] Nothing = [];
+    private static readonly KeyValuePair<string, string>[] Ancillary = [new("ancillary_variables", "concentration_se conditions")];
+
+    // Below a limit stays below it in the file, so totals can be recomputed from the grids.
+    private readonly Packing fraction = Packing.Fraction with { Limits = [settings.Rules.IceFraction, settings.Rules.PackFraction] };
+
+    /// <summary>Writes one day of one method.</summary>
+    public void Write(PlannedDay day, IConcentrationMethod method, ConcentrationPlanes planes)
+    {
+        List<GridVariable> variables =
+        [
+            new PackedVariable(
+                "concentration", "sea-ice concentration of all ice, screened for weather and clipped to 0-1", "sea_ice_area_fraction", Ancillary, "1", planes.TotalMemory, fraction),
+            new PackedVariable(
+                "concentration_se", "standard error of the sea-ice concentration", "sea_ice_area_fraction standard_error", Nothing, "1", planes.StandardErrorMemory, Packing.Fraction),
+        ];
+        if (method.SeparatesIceTypes)
+        {
+            (string first, string multi) = settings.Grid.Hemisphere == Grids.Hemisphere.North
+                ? ("first-year ice", "multiyear ice")
+                : ("type A ice (radiometrically like first-year ice)", "type B ice");
+            variables.Add(new PackedVariable("first_year_concentration", $"concentration of {first}", null, Nothing, "1", planes.FirstYearMemory, Packing.Fraction));
+            variables.Add(new PackedVariable("multiyear_concentration", $"concentration of {multi}", null, Nothing, "1", planes.MultiyearMemory, Packing.Fraction));
+        }
+
+        variables.Add(new MaskVariable(
+            "conditions", "why a cell's concentration is what it is", "sea_ice_area_fraction status_flag", Nothing, planes.ConditionMemory, Meanings));
+        GridFile.Write(
+            layout.GridFile(method.Name, settings.Grid.Hemisphere, day.Date),
+            settings.Grid,
+            day.Date,
+            variables,
+            [.. attributes, new("method", method.Name), new("method_source", method.Source), new("sensor", day.Source.Settings.Sensor.Name)]);
+    }
+}

@@ -1,0 +1,11 @@
+namespace IceExtent.Worker.Running;
+
+/// <summary>Watches a run.</summary>
+internal interface IRunObserver
+{
+    /// <summary>The plan is made.</summary>
+    void Planned(RunPlan plan);
+
+    /// <summary>A day is done. Called in date order, on one thread at a time.</summary>
+    void DayDone(DayResult result);
+}

@@ -1,0 +1,35 @@
+using IceExtent.Storage.Faults;
+using IceExtent.Storage.Reading;
+using IceExtent.Worker.Configuration;
+
+namespace IceExtent.Worker.Running;
+
+/// <summary>One day that will be processed.</summary>
+/// <param name="Order">Its place in the run, from 0.</param>
+/// <param name="Source">The source that rules it.</param>
+/// <param name="Input">The day in that source.</param>
+internal sealed record PlannedDay(int Order, OpenedSource Source, SourceDay Input)
+{
+    public DateOnly Date => Input.Date;
+}
+
+/// <summary>A source of the run with its reader.</summary>
+internal sealed record OpenedSource(int Index, RunSource Settings, IBrightnessSource Reader);
+
+/// <summary>A day that has input which cannot be used, or a file that belongs to no day.</summary>
+/// <param name="Date">The day, or null where it cannot be told.</param>
+/// <param name="Fault">Why.</param>
+internal sealed record Gap(DateOnly? Date, Fault Fault);
+
+/// <summary>What a run will do.</summary>
+/// <param name="Days">In date order; each date once.</param>
+/// <param name="Gaps">What cannot be used, as far as it shows before a plane is read; in date order.</param>
+/// <param name="Superseded">The number of days left to a source that stands earlier in the run file.</param>
+internal sealed record RunPlan(IReadOnlyList<PlannedDay> Days, IReadOnlyList<Gap> Gaps, int Superseded)
+{
+    /// <summary>Calendar days between the first and the last planned day for which there is no input at all.</summary>
+    public int DaysWithoutInput => Days.Count == 0
+        ? 0
+        : Days[^1].Date.DayNumber - Days[0].Date.DayNumber + 1
+            - Days.Count - Gaps.Select(gap => gap.Date).OfType<DateOnly>().Where(day => day > Days[0].Date && day < Days[^1].Date).Distinct().Count();
+}

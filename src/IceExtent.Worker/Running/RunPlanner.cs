@@ -1,0 +1,67 @@
+using IceExtent.Storage.Faults;
+using IceExtent.Storage.Reading;
+using IceExtent.Worker.Configuration;
+
+namespace IceExtent.Worker.Running;
+
+/// <summary>Decides which days a run processes, and from which source.</summary>
+internal static class RunPlanner
+{
+    /// <summary>Lists all sources and settles duplicates, service periods and the order of preference.</summary>
+    /// <param name="settings">The run.</param>
+    /// <param name="from">The first day wanted, or null.</param>
+    /// <param name="to">The last day wanted, or null.</param>
+    /// <param name="cancellation">Stops the listing.</param>
+    public static RunPlan Plan(RunSettings settings, DateOnly? from, DateOnly? to, CancellationToken cancellation)
+    {
+        List<Gap> gaps = [];
+        SortedDictionary<DateOnly, (OpenedSource Source, SourceDay Input)> chosen = [];
+        int superseded = 0;
+        for (int index = 0; index < settings.Sources.Count; index++)
+        {
+            RunSource source = settings.Sources[index];
+            OpenedSource opened = new(index, source, BrightnessSources.Open(source.Description));
+            SourceInventory inventory = opened.Reader.List(cancellation);
+            gaps.AddRange(inventory.Faults.Select(fault => new Gap(null, fault)));
+            foreach (IGrouping<DateOnly, SourceDay> day in inventory.Days.Where(day => Wanted(day.Date)).GroupBy(day => day.Date))
+            {
+                if (Refusal(day, source) is { } fault)
+                {
+                    gaps.Add(new(day.Key, fault));
+                }
+                else if (!chosen.TryAdd(day.Key, (opened, day.First())))
+                {
+                    superseded++;
+                }
+            }
+        }
+
+        PlannedDay[] days = [.. chosen.Values.Select((day, order) => new PlannedDay(order, day.Source, day.Input))];
+        return new(days, [.. gaps.OrderBy(gap => gap.Date ?? DateOnly.MinValue)], superseded);
+
+        bool Wanted(DateOnly day) => (from is not { } first || day >= first) && (to is not { } last || day <= last);
+    }
+
+    private static Fault? Refusal(IGrouping<DateOnly, SourceDay> day, RunSource source)
+    {
+        SourceDay first = day.First();
+        string file = first.Files[0];
+        if (!source.Sensor.Serves(day.Key))
+        {
+            string last = source.Sensor.LastDay is { } end ? $"{end:yyyy-MM-dd}" : "today";
+            return new(
+                "IE2302",
+                file,
+                $"a day of {day.Key:yyyy-MM-dd}",
+                $"{source.Sensor.FirstDay:yyyy-MM-dd} to {last}, the service of {source.Sensor.Name}",
+                "Name the sensor that measured the file, or correct the file's time.");
+        }
+
+        return day.Count() == 1 ? null : new(
+            "IE2301",
+            file,
+            $"{day.Count()} files for {day.Key:yyyy-MM-dd} ({string.Join(", ", day.Select(input => Path.GetFileName(input.Files[0])))})",
+            "one file a day and sensor",
+            "Remove all but one, or give the better one a source of its own above this one.");
+    }
+}
