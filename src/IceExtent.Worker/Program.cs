@@ -1,1 +1,3 @@
-return 0;
+using IceExtent.Worker.Commands;
+
+return await CommandLine.RunAsync(args, CommandConsole.System);

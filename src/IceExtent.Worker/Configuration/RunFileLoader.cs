@@ -29,7 +29,7 @@ internal static class RunFileLoader
             && ConfigFolder.Resolve(scope, "grid", gridName, config.Grids, folder) is { } gridPath
                 ? GridLoader.Load(gridPath, faults)
                 : null;
-        IReadOnlyList<string> methods = Methods(scope);
+        List<string> methods = Methods(scope);
         bool? writeGrids = scope.Flag("write_grids", required: false);
         string? notice = scope.Text("notice", required: false);
         LayeredScope layered = new(scope, new(defaults, string.Empty, faults));
@@ -63,7 +63,7 @@ internal static class RunFileLoader
         };
     }
 
-    private static IReadOnlyList<string> Methods(ConfigScope scope)
+    private static List<string> Methods(ConfigScope scope)
     {
         List<string> methods = [];
         foreach ((string name, ConfigPosition at) in scope.Texts("methods") ?? [])

@@ -29,9 +29,9 @@ internal sealed class DailySeries(
     /// <exception cref="FaultException">IE3001.</exception>
     public void CheckSameConfiguration(IEnumerable<int> years, string digest)
     {
-        foreach (string path in methods.SelectMany(_ => years, (method, touched) => layout.DailyTable(method, hemisphere, touched)).Where(File.Exists))
+        foreach (string path in methods.SelectMany(_ => years, (method, touched) => layout.DailyFile(method, hemisphere, touched)).Where(File.Exists))
         {
-            string? found = DailyTable.Read(path).Metadata.FirstOrDefault(pair => pair.Key == DigestKey).Value;
+            string? found = DailyTable.Read(path).Metadata.GetValueOrDefault(DigestKey);
             if (!string.Equals(found, digest, StringComparison.Ordinal))
             {
                 throw new FaultException(new(
@@ -67,7 +67,7 @@ internal sealed class DailySeries(
         {
             foreach (string method in methods)
             {
-                Write(layout.DailyTable(method, hemisphere, open), rowsByMethod[method], metadataOf(method));
+                Write(layout.DailyFile(method, hemisphere, open), rowsByMethod[method], metadataOf(method));
                 rowsByMethod[method].Clear();
             }
         }
@@ -106,7 +106,7 @@ internal sealed class DailySeries(
         DailyRow[] kept = [.. before.Where(row => !touched.Contains(row.Date))];
         if (rows.Count > 0 || kept.Length < before.Count)
         {
-            DailyTable.Write(path, [.. kept.Concat(rows).OrderBy(row => row.Date).ThenBy(row => row.Region, StringComparer.Ordinal)], metadata);
+            DailyTable.Write(path, kept.Concat(rows), metadata);
         }
     }
 }

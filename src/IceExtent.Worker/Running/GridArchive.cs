@@ -23,8 +23,7 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
     private static readonly KeyValuePair<string, string>[] Nothing = [];
     private static readonly KeyValuePair<string, string>[] Ancillary = [new("ancillary_variables", "concentration_se conditions")];
 
-    // Below a limit stays below it in the file, so totals can be recomputed from the grids.
-    private readonly Packing fraction = Packing.Fraction with { Limits = [settings.Rules.IceFraction, settings.Rules.PackFraction] };
+    private readonly Packing fraction = Packing.Fraction;
 
     /// <summary>Writes one day of one method.</summary>
     public void Write(PlannedDay day, IConcentrationMethod method, ConcentrationPlanes planes)

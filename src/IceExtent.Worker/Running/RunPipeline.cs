@@ -33,6 +33,7 @@ internal static class RunPipeline
         Channel<PlannedDay> todo = Channel.CreateBounded<PlannedDay>(new BoundedChannelOptions(workers) { SingleWriter = true });
         Channel<DayResult> done = Channel.CreateBounded<DayResult>(new BoundedChannelOptions(workers * DaysAheadPerWorker) { SingleReader = true });
 
+#pragma warning disable CA2025 // FirstFailureOf waits for every task, failed or not, before anything is disposed.
         Task[] handling = [.. Enumerable.Range(0, workers).Select(_ => Task.Run(() => WorkAsync(makeWorker(), todo.Reader, done.Writer, stop.Token), CancellationToken.None))];
         Task[] all =
         [
@@ -41,6 +42,7 @@ internal static class RunPipeline
             Guarded(CollectAsync(done.Reader, ahead, receive, stop.Token)),
             .. handling.Select(Guarded),
         ];
+#pragma warning restore CA2025
         await FirstFailureOf(all);
         cancellation.ThrowIfCancellationRequested();
 

@@ -1,0 +1,47 @@
+using System.CommandLine;
+using System.Globalization;
+
+namespace IceExtent.Worker.Commands;
+
+/// <summary>Arguments and options that several commands share.</summary>
+internal static class CommonOptions
+{
+    public static Argument<string> RunFile() => new("RUNFILE") { Description = "The run file (TOML)." };
+
+    public static Option<DateOnly?> Day(string name, string description) => new(name)
+    {
+        Description = description,
+        HelpName = "YYYY-MM-DD",
+        CustomParser = result =>
+        {
+            string written = result.Tokens.Count == 0 ? string.Empty : result.Tokens[0].Value;
+            if (DateOnly.TryParseExact(written, "yyyy-MM-dd", CultureInfo.InvariantCulture, DateTimeStyles.None, out DateOnly day))
+            {
+                return day;
+            }
+
+            result.AddError($"{name}: found {written}; allowed: a date such as 1984-12-25.");
+            return null;
+        },
+    };
+
+    public static Option<int> Workers()
+    {
+        Option<int> option = new("--workers")
+        {
+            Description = "How many days are processed at a time; results do not depend on it.",
+            HelpName = "N",
+            DefaultValueFactory = _ => Environment.ProcessorCount,
+        };
+        option.Validators.Add(result =>
+        {
+            if (result.Tokens.Count == 1 && (!int.TryParse(result.Tokens[0].Value, CultureInfo.InvariantCulture, out int workers) || workers is < 1 or > 256))
+            {
+                result.AddError($"--workers: found {result.Tokens[0].Value}; allowed: 1 to 256.");
+            }
+        });
+        return option;
+    }
+
+    public static Option<bool> Json() => new("--json") { Description = "Write the result as JSON." };
+}

@@ -1,0 +1,77 @@
+using System.CommandLine;
+using System.Globalization;
+using System.Text.Json;
+using IceExtent.Worker.Configuration;
+using IceExtent.Worker.Running;
+
+namespace IceExtent.Worker.Commands;
+
+/// <summary><c>plan</c>: what a run would do, doing nothing.</summary>
+internal static class PlanCommand
+{
+    private static readonly JsonSerializerOptions Indented = new() { WriteIndented = true, PropertyNamingPolicy = JsonNamingPolicy.SnakeCaseLower };
+
+    public static Command Make(CommandConsole console)
+    {
+        Argument<string> runFile = CommonOptions.RunFile();
+        Option<DateOnly?> from = CommonOptions.Day("--from", "Leave out days before this one.");
+        Option<DateOnly?> to = CommonOptions.Day("--to", "Leave out days after this one.");
+        Option<bool> json = CommonOptions.Json();
+        Command command = new("plan", "Show which days a run would process, from which sensor, and why others are left out.\n\nExample:\n  iceextent plan run.toml --json")
+        {
+            runFile, from, to, json,
+        };
+        command.SetAction((parsed, cancellation) =>
+        {
+            RunSettings settings = RunFileLoader.Load(parsed.GetValue(runFile)!, ConfigFolder.BesideProgram);
+            RunPlan plan = RunPlanner.Plan(settings, parsed.GetValue(from), parsed.GetValue(to), cancellation);
+            Write(settings, plan, parsed.GetValue(json), console);
+            return Task.FromResult(plan.Days.Count == 0 ? ExitCode.NoUsableInput : plan.Gaps.Count > 0 ? ExitCode.DoneWithGaps : ExitCode.Done);
+        });
+        return command;
+    }
+
+    private static void Write(RunSettings settings, RunPlan plan, bool json, CommandConsole console)
+    {
+        var spans = plan.Days
+            .GroupBy(day => day.Source.Index)
+            .Select(group => new
+            {
+                Sensor = group.First().Source.Settings.Sensor.Name,
+                Days = group.Count(),
+                First = group.First().Date,
+                Last = group.Last().Date,
+            })
+            .OrderBy(span => span.First)
+            .ToList();
+        if (json)
+        {
+            console.Print(JsonSerializer.Serialize(
+                new
+                {
+                    settings.Output,
+                    Grid = settings.Grid.Name,
+                    settings.Methods,
+                    settings.WriteGrids,
+                    Sources = spans,
+                    DaysLeftToAnEarlierSource = plan.Superseded,
+                    plan.DaysWithoutInput,
+                    Rejected = plan.Gaps.Select(gap => new { gap.Date, gap.Fault.Code, Text = gap.Fault.ToString() }),
+                },
+                Indented));
+            return;
+        }
+
+        console.Print($"Output:  {settings.Output}");
+        console.Print($"Grid:    {settings.Grid.Name}, methods {string.Join(", ", settings.Methods)}, grids {(settings.WriteGrids ? "written" : "not written")}");
+        foreach (var span in spans)
+        {
+            console.Print(string.Create(CultureInfo.InvariantCulture, $"Sensor:  {span.Sensor,-12} {span.Days,6} days, {span.First:yyyy-MM-dd} to {span.Last:yyyy-MM-dd}"));
+        }
+
+        console.Print(string.Create(
+            CultureInfo.InvariantCulture,
+            $"To do:   {plan.Days.Count} days; {plan.Gaps.Count} rejected, {plan.DaysWithoutInput} without input, {plan.Superseded} left to an earlier source"));
+        console.Tell(plan.Gaps.Select(gap => gap.Fault));
+    }
+}

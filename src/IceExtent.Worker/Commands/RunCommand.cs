@@ -1,0 +1,51 @@
+using System.CommandLine;
+using System.Globalization;
+using IceExtent.Worker.Configuration;
+using IceExtent.Worker.Running;
+
+namespace IceExtent.Worker.Commands;
+
+/// <summary><c>run</c>: brings an archive up to its inputs.</summary>
+internal static class RunCommand
+{
+    public static Command Make(CommandConsole console)
+    {
+        Argument<string> runFile = CommonOptions.RunFile();
+        Option<DateOnly?> from = CommonOptions.Day("--from", "Leave out days before this one.");
+        Option<DateOnly?> to = CommonOptions.Day("--to", "Leave out days after this one.");
+        Option<int> workers = CommonOptions.Workers();
+        Command command = new(
+            "run",
+            "Turn brightness temperatures into concentration grids and a daily series.\n\nExample:\n  iceextent run run.toml --from 1984-12-01 --to 1984-12-31")
+        {
+            runFile, from, to, workers,
+        };
+        command.SetAction((parsed, cancellation) => RunAsync(
+            parsed.GetValue(runFile)!,
+            new(parsed.GetValue(from), parsed.GetValue(to), parsed.GetValue(workers), [.. parsed.Tokens.Select(token => token.Value)]),
+            console,
+            cancellation));
+        return command;
+    }
+
+    /// <summary>Runs one run file and prints what came of it.</summary>
+    public static async Task<int> RunAsync(string runFile, RunOptions options, CommandConsole console, CancellationToken cancellation)
+    {
+        RunSettings settings = RunFileLoader.Load(runFile, ConfigFolder.BesideProgram);
+        RunProgress progress = new(console);
+        RunOutcome outcome = await progress.ShowAsync(() => new ArchiveRun(settings, options, TimeProvider.System).RunAsync(progress, cancellation));
+        console.Tell(outcome.Gaps.Select(gap => gap.Fault));
+        console.Print(string.Create(
+            CultureInfo.InvariantCulture,
+            $"{outcome.DaysDone} days done, {outcome.Gaps.Count} rejected, {outcome.Plan.DaysWithoutInput} days between without input."));
+        console.Print($"Archive: {settings.Output}");
+        console.Print($"Record:  {outcome.RecordPath}");
+        if (settings.Notice is { } notice)
+        {
+            console.Print(notice);
+        }
+
+        console.Print(Cautions.Text);
+        return outcome.ExitCode;
+    }
+}

@@ -1,0 +1,188 @@
+using System.Security.Cryptography;
+using IceExtent.Retrieval;
+using IceExtent.Storage.Faults;
+using IceExtent.Storage.Writing;
+using IceExtent.Worker.Configuration;
+
+namespace IceExtent.Worker.Running;
+
+/// <summary>What the person asked for beside the run file.</summary>
+/// <param name="From">The first day wanted, or null.</param>
+/// <param name="To">The last day wanted, or null.</param>
+/// <param name="Workers">How many days are handled at a time.</param>
+/// <param name="CommandLine">The command line as given, for the run record.</param>
+internal sealed record RunOptions(DateOnly? From, DateOnly? To, int Workers, IReadOnlyList<string> CommandLine);
+
+/// <summary>What a run came to.</summary>
+/// <param name="ExitCode">One of <see cref="Worker.ExitCode"/>.</param>
+/// <param name="Plan">What was planned.</param>
+/// <param name="DaysDone">Days with numbers.</param>
+/// <param name="Gaps">Everything that could not be used.</param>
+/// <param name="RecordPath">The run record.</param>
+internal sealed record RunOutcome(int ExitCode, RunPlan Plan, int DaysDone, IReadOnlyList<Gap> Gaps, string RecordPath);
+
+/// <summary>One run over an archive: plan, process, publish, record.</summary>
+internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeProvider clock)
+{
+    private readonly ArchiveLayout layout = new(settings.Output);
+    private readonly List<DayRecord> dayRecords = [];
+    private readonly List<Gap> gaps = [];
+    private readonly SortedSet<string> filesRead = new(StringComparer.Ordinal);
+
+    /// <summary>Runs.</summary>
+    /// <param name="observer">Watches.</param>
+    /// <param name="cancellation">Stops after the days in hand.</param>
+    /// <exception cref="FaultException">The archive cannot be used or written.</exception>
+    /// <exception cref="OperationCanceledException">It was stopped; what is in the archive is whole.</exception>
+    public async Task<RunOutcome> RunAsync(IRunObserver observer, CancellationToken cancellation)
+    {
+        DateTimeOffset started = clock.GetUtcNow();
+        using ArchiveLock held = ArchiveLock.Take(settings.Output, started);
+        PublishedFile.RemoveLeftovers(settings.Output);
+        string digest = ConfigurationDigest.Of(settings);
+        DailySeries series = new(layout, settings.Grid.Hemisphere, settings.Methods, method => TableMetadata(method, digest));
+        RunPlan plan = RunPlanner.Plan(settings, options.From, options.To, cancellation);
+        observer.Planned(plan);
+        series.CheckSameConfiguration(plan.Days.Select(day => day.Date.Year).Distinct(), digest);
+
+        gaps.AddRange(plan.Gaps);
+        DateOnly[] lost = [.. plan.Gaps.Select(gap => gap.Date).OfType<DateOnly>().Except(plan.Days.Select(day => day.Date)).Distinct()];
+        series.Remove(lost);
+        RemoveGrids(lost);
+        await ProcessAsync(plan, series, GlobalAttributes(digest), observer, cancellation);
+
+        int done = dayRecords.Count(day => day.Outcome == DayOutcome.Done);
+        int exitCode = done == 0 ? ExitCode.NoUsableInput : gaps.Count > 0 ? ExitCode.DoneWithGaps : ExitCode.Done;
+        string recordPath = WriteRecord(plan, started, digest, done, exitCode);
+        return new(exitCode, plan, done, gaps, recordPath);
+    }
+
+    private async Task ProcessAsync(
+        RunPlan plan,
+        DailySeries series,
+        IReadOnlyList<KeyValuePair<string, string>> attributes,
+        IRunObserver observer,
+        CancellationToken cancellation)
+    {
+        if (plan.Days.Count == 0)
+        {
+            return;
+        }
+
+        DayPreparation preparation = new(settings);
+        GridArchive? grids = settings.WriteGrids ? new(settings, layout, attributes) : null;
+        await RunPipeline.RunAsync(
+            plan.Days,
+            Math.Min(options.Workers, plan.Days.Count),
+            () => new DayWorker(preparation, grids),
+            result =>
+            {
+                series.Add(result);
+                Remember(result);
+                observer.DayDone(result);
+            },
+            cancellation);
+        series.Flush();
+    }
+
+    private void Remember(DayResult result)
+    {
+        filesRead.UnionWith(result.Day.Input.Files);
+        if (result.Fault is { } fault)
+        {
+            gaps.Add(new(result.Day.Date, fault));
+            RemoveGrids([result.Day.Date]);
+        }
+
+        dayRecords.Add(new(
+            result.Day.Date,
+            settings.Grid.Hemisphere,
+            result.Fault is null ? DayOutcome.Done : DayOutcome.Rejected,
+            [.. result.Methods.Select(method => Counts(method, result.OutOfRange))],
+            result.Fault is null ? [] : [result.Fault]));
+    }
+
+    private static CellCounts Counts(MethodResult method, int outOfRange) => new(
+        method.Method,
+        outOfRange,
+        method.Counts.ClippedBelow,
+        method.Counts.ClippedAbove,
+        method.Counts.Gradient3719,
+        method.Counts.Gradient2219,
+        method.Counts.NoSolution);
+
+    private void RemoveGrids(IEnumerable<DateOnly> days)
+    {
+        foreach (string path in days.SelectMany(_ => settings.Methods, (day, method) => layout.GridFile(method, settings.Grid.Hemisphere, day)).Where(File.Exists))
+        {
+            File.Delete(path);
+        }
+    }
+
+    private List<KeyValuePair<string, string>> GlobalAttributes(string digest)
+    {
+        List<KeyValuePair<string, string>> attributes =
+        [
+            new("title", $"Daily sea-ice concentration on the grid {settings.Grid.Name}"),
+            new("program", $"IceExtent {ProgramVersion.Text}"),
+            new(DailySeries.DigestKey, digest),
+            new("caution", Cautions.Text),
+        ];
+        if (settings.Notice is { } notice)
+        {
+            attributes.Insert(0, new("notice", notice));
+        }
+
+        return attributes;
+    }
+
+    private List<KeyValuePair<string, string>> TableMetadata(string method, string digest)
+    {
+        IConcentrationMethod tuned = ConcentrationMethods.Create(method, settings.Sources[0].Sensor.In(settings.Grid.Hemisphere));
+        List<KeyValuePair<string, string>> metadata =
+        [
+            new("method", method),
+            new("method_source", tuned.Source),
+            new("grid", settings.Grid.Name),
+            new("program_version", ProgramVersion.Text),
+            new(DailySeries.DigestKey, digest),
+            new("ice_fraction", settings.Rules.IceFraction.ToString("R", System.Globalization.CultureInfo.InvariantCulture)),
+            new("pack_fraction", settings.Rules.PackFraction.ToString("R", System.Globalization.CultureInfo.InvariantCulture)),
+            new("polar_gap_rule", "counted as ice for extent, left out of area, marginal zone and pack"),
+            new("caution", Cautions.Text),
+        ];
+        if (settings.Notice is { } notice)
+        {
+            metadata.Add(new("notice", notice));
+        }
+
+        return metadata;
+    }
+
+    private string WriteRecord(RunPlan plan, DateTimeOffset started, string digest, int done, int exitCode)
+    {
+        IEnumerable<DayRecord> unread = plan.Gaps
+            .Where(gap => gap.Date is not null)
+            .GroupBy(gap => gap.Date!.Value)
+            .Where(day => plan.Days.All(planned => planned.Date != day.Key))
+            .Select(day => new DayRecord(day.Key, settings.Grid.Hemisphere, DayOutcome.Rejected, [], [.. day.Select(gap => gap.Fault)]));
+        DayRecord[] days = [.. dayRecords.Concat(unread).OrderBy(day => day.Date)];
+        int rejected = days.Count(day => day.Outcome == DayOutcome.Rejected);
+        string path = layout.RunFile(started.UtcDateTime.ToString("yyyy-MM-dd'T'HH-mm-ss.fff'Z'", System.Globalization.CultureInfo.InvariantCulture));
+        RunRecordFile.Write(path, new()
+        {
+            ProgramVersion = ProgramVersion.Text,
+            Started = started,
+            Finished = clock.GetUtcNow(),
+            RunFile = new(settings.RunFile, Convert.ToHexStringLower(SHA256.HashData(File.ReadAllBytes(settings.RunFile)))),
+            ConfigurationDigest = digest,
+            CommandLine = options.CommandLine,
+            Counts = new(done, rejected + plan.DaysWithoutInput, rejected),
+            Days = days,
+            Faults = [.. plan.Gaps.Where(gap => gap.Date is null).Select(gap => gap.Fault)],
+            FilesRead = [.. filesRead],
+            ExitCode = exitCode,
+        });
+        return path;
+    }
+}
