@@ -1,0 +1,117 @@
+using IceExtent.Storage.Faults;
+using IceExtent.TestKit;
+using IceExtent.Worker.Configuration;
+
+namespace IceExtent.Worker.Tests;
+
+/// <summary>What a run file may say and how it is told when it may not.</summary>
+public sealed class RunFileTests : IDisposable
+{
+    private readonly TinyRun run = new();
+
+    public void Dispose() => run.Dispose();
+
+    [Fact]
+    public void Load_SmallestRunFile_TakesTheDefaults()
+    {
+        run.WriteDay(new(1990, 1, 1), _ => 0.5);
+
+        RunSettings settings = RunFileLoader.Load(run.RunFile, ConfigFolder.BesideProgram);
+
+        Assert.True(settings.WriteGrids);
+        Assert.Equal(0.15, settings.Rules.IceFraction);
+        Assert.Equal(0.80, settings.Rules.PackFraction);
+        Assert.Equal(run.PathOf("out"), settings.Output);
+        Assert.Equal(5, settings.Sources[0].Description.Files.Count);
+        Assert.Equal(16, settings.Ocean.Count(ocean => ocean));
+    }
+
+    public static TheoryData<string, string, string, string> Faults() => new()
+    {
+        // What stands before the source, what in it, the code, and words the message must hold.
+        { "ice_limit = 0.15", "", "IE1003", "ice_limit" },
+        { "write_grid = true", "", "IE1003", "Did you mean write_grids?" },
+        { "", "sensr = \"x\"", "IE1003", "Did you mean sensor?" },
+        { "write_grids = \"yes\"", "", "IE1005", "true or false" },
+        { "[totals]\nice_fraction = 15", "", "IE1006", "Write the fraction: 0.15, not 15." },
+        { "[totals]\nice_fraction = 0.9", "", "IE1011", "not above ice_fraction = 0.9" },
+        { "[land]\nlimit = 0.5", "", "IE1003", "limit_fraction" },
+        { "", "status = \"finl\"", "IE1007", "Did you mean final?" },
+        { "output = \"again\"", "", "IE1003", "a second time" },
+        { "notice = ", "", "IE1002", "not TOML" },
+    };
+
+    [Theory]
+    [MemberData(nameof(Faults))]
+    public void Load_FaultyRunFile_SaysWhereAndWhat(string head, string source, string code, string words)
+    {
+        run.WriteDay(new(1990, 1, 1), _ => 0.5);
+        run.WriteRunFile(head, source);
+
+        ConfigurationException faulty = Assert.Throws<ConfigurationException>(() => RunFileLoader.Load(run.RunFile, ConfigFolder.BesideProgram));
+
+        Fault fault = Assert.Single(faulty.Faults, candidate => candidate.Code == code);
+        Assert.Contains(words, fault.ToString(), StringComparison.Ordinal);
+        Assert.Contains("run.toml, line ", fault.Where, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Load_SeveralFaults_TellsAllAtOnce()
+    {
+        run.Write("run.toml", """
+            outptu = "out"
+            grid = "north-25"
+            methods = ["nasa-taem"]
+            [[source]]
+            sensor = "smrm"
+            files = "none/*.nc"
+            channels = { 19v = "a", 19x = "b" }
+            """);
+
+        ConfigurationException faulty = Assert.Throws<ConfigurationException>(() => RunFileLoader.Load(run.RunFile, ConfigFolder.BesideProgram));
+
+        string all = string.Join('\n', faulty.Faults);
+        Assert.Contains("Did you mean output?", all, StringComparison.Ordinal);
+        Assert.Contains("Did you mean north-25km?", all, StringComparison.Ordinal);
+        Assert.Contains("Did you mean nasa-team?", all, StringComparison.Ordinal);
+        Assert.Contains("Did you mean smmr?", all, StringComparison.Ordinal);
+        Assert.Contains("IE1008", all, StringComparison.Ordinal);
+        Assert.Contains("19x", all, StringComparison.Ordinal);
+        Assert.Contains("IE1004", all, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Load_MethodWithoutItsChannel_IsRefusedByName()
+    {
+        run.WriteDay(new(1990, 1, 1), _ => 0.5);
+        run.Write("run.toml", File.ReadAllText(run.RunFile).Replace("37v = \"v37\", ", string.Empty, StringComparison.Ordinal));
+
+        ConfigurationException faulty = Assert.Throws<ConfigurationException>(() => RunFileLoader.Load(run.RunFile, ConfigFolder.BesideProgram));
+
+        Fault fault = Assert.Single(faulty.Faults);
+        Assert.Equal("IE1009", fault.Code);
+        Assert.Contains("no 37v, which the method nasa-team needs", fault.Found, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Load_SensorWithSingularTiePoints_IsRefused()
+    {
+        run.WriteDay(new(1990, 1, 1), _ => 0.5);
+        string sensor = TinyRun.Sensor("1990-01-01", "1999-12-31");
+        run.Write("tiny.toml", sensor.Replace("multiyear = { 19v = 220.7, 19h = 196.0, 37v = 188.5 }", "multiyear = { 19v = 216.65, 19h = 172.7, 37v = 224.7 }", StringComparison.Ordinal));
+
+        ConfigurationException faulty = Assert.Throws<ConfigurationException>(() => RunFileLoader.Load(run.RunFile, ConfigFolder.BesideProgram));
+
+        Assert.Equal("IE1011", Assert.Single(faulty.Faults).Code);
+    }
+
+    [Theory]
+    [InlineData("mehtods", "methods")]
+    [InlineData("gridd", "grid")]
+    [InlineData("outptu", "output")]
+    public void NearestName_OneSlip_IsFound(string written, string meant) =>
+        Assert.Equal(meant, NearestName.Of(written, ["output", "grid", "methods", "write_grids"]));
+
+    [Fact]
+    public void NearestName_NothingClose_IsNone() => Assert.Null(NearestName.Of("zebra", ["output", "grid", "methods"]));
+}

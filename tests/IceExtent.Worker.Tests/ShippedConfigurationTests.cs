@@ -1,0 +1,69 @@
+using IceExtent.Grids;
+using IceExtent.Retrieval;
+using IceExtent.Storage.Faults;
+using IceExtent.Worker.Configuration;
+
+namespace IceExtent.Worker.Tests;
+
+/// <summary>Every file of config/ that is shipped can be read, and says what it must.</summary>
+public sealed class ShippedConfigurationTests
+{
+    public static TheoryData<string> Sensors() => [.. ConfigFolder.NamesIn(ConfigFolder.BesideProgram.Sensors)];
+
+    public static TheoryData<string> Grids() => [.. ConfigFolder.NamesIn(ConfigFolder.BesideProgram.Grids)];
+
+    [Fact]
+    public void Folder_HoldsTheNamedSensorsAndGrids()
+    {
+        Assert.Superset(
+            new HashSet<string>(["smmr", "ssmi-f08", "ssmi-f11", "ssmi-f13", "ssmis-f17"]), [.. ConfigFolder.NamesIn(ConfigFolder.BesideProgram.Sensors)]);
+        Assert.Equal(14, ConfigFolder.NamesIn(ConfigFolder.BesideProgram.Grids).Count);
+    }
+
+    [Theory]
+    [MemberData(nameof(Sensors))]
+    public void Sensor_Shipped_IsValidAndItsPureSurfacesAreTold(string name)
+    {
+        List<Fault> faults = [];
+
+        Sensor? sensor = SensorLoader.Load(Path.Combine(ConfigFolder.BesideProgram.Sensors, name + ".toml"), faults);
+
+        Assert.Empty(faults);
+        foreach (Hemisphere hemisphere in Enum.GetValues<Hemisphere>())
+        {
+            TiePoints points = sensor!.In(hemisphere).TiePoints;
+            NasaTeamCoefficients coefficients = NasaTeamCoefficients.From(points);
+            (double first, double multi) = NasaTeamPlain.Solve(coefficients, points.FirstYear.V19Kelvins, points.FirstYear.H19Kelvins, points.FirstYear.V37Kelvins);
+            Assert.Equal(1.0, first, 1e-9);
+            Assert.Equal(0.0, multi, 1e-9);
+        }
+    }
+
+    [Theory]
+    [MemberData(nameof(Grids))]
+    public void Grid_Shipped_IsValidAndHasLand(string name)
+    {
+        List<Fault> faults = [];
+
+        LoadedGrid? grid = GridLoader.Load(Path.Combine(ConfigFolder.BesideProgram.Grids, name + ".toml"), faults);
+
+        Assert.Empty(faults);
+        Assert.StartsWith(grid!.Grid.Hemisphere == Hemisphere.North ? "north-" : "south-", name, StringComparison.Ordinal);
+        Assert.True(File.Exists(grid.LandPath));
+    }
+
+    /// <summary>Every number in a sensor's file has a source in a comment above it.</summary>
+    [Theory]
+    [MemberData(nameof(Sensors))]
+    public void Sensor_Shipped_TellsItsSources(string name)
+    {
+        string[] lines = File.ReadAllLines(Path.Combine(ConfigFolder.BesideProgram.Sensors, name + ".toml"));
+        string comment = string.Empty;
+        foreach (string line in lines)
+        {
+            comment = line.StartsWith('#') ? comment + line : line.Length == 0 ? string.Empty : comment;
+            bool holdsNumber = line.Contains('=', StringComparison.Ordinal) && !line.StartsWith('#') && !line.StartsWith("title", StringComparison.Ordinal);
+            Assert.False(holdsNumber && comment.Length == 0, $"{name}: no source above {line}");
+        }
+    }
+}
