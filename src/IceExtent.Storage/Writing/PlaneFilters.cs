@@ -1,4 +1,3 @@
-using System.IO.Compression;
 using PureHDF.Filters;
 
 namespace IceExtent.Storage.Writing;
@@ -13,8 +12,8 @@ namespace IceExtent.Storage.Writing;
 /// </remarks>
 internal static class PlaneFilters
 {
-    // As recorded in the file; it tells a reader nothing that it needs.
-    private const int Level = 1;
+    /// <summary>The deflate level; the file records it, though no reader needs it.</summary>
+    public const int Level = 1;
 
     // Shuffling single bytes changes nothing.
     private static readonly List<H5Filter> ForBytes = [DeflateOf(Level)];
@@ -31,74 +30,4 @@ internal static class PlaneFilters
     public static List<H5Filter> Of(int elementBytes) => elementBytes == 1 ? ForBytes : ForWords;
 
     private static H5Filter DeflateOf(int level) => new(DeflateFilter.Id, new() { [DeflateFilter.COMPRESSION_LEVEL] = level });
-
-    /// <summary>Shuffles 16-bit numbers into a buffer that the next call on the same thread uses again.</summary>
-    private sealed class ThreadShuffle : IH5Filter
-    {
-        private static readonly ShuffleFilter Library = new();
-
-        [ThreadStatic]
-        private static byte[]? shuffled;
-
-        public ushort FilterId => ShuffleFilter.Id;
-
-        public string Name => Library.Name;
-
-        public uint[] GetParameters(uint[] chunkDimensions, uint typeSize, Dictionary<string, object>? options) =>
-            Library.GetParameters(chunkDimensions, typeSize, options);
-
-        public Memory<byte> Filter(FilterInfo info)
-        {
-            if (info.Flags.HasFlag(H5FilterFlags.Decompress) || info.Parameters[0] != sizeof(ushort))
-            {
-                return Library.Filter(info);
-            }
-
-            if (shuffled is null || shuffled.Length < info.Buffer.Length)
-            {
-                shuffled = GC.AllocateUninitializedArray<byte>(info.Buffer.Length);
-            }
-
-            ByteShuffle.Words(info.Buffer.Span, shuffled.AsSpan(0, info.Buffer.Length));
-            return shuffled.AsMemory(0, info.Buffer.Length);
-        }
-    }
-
-    /// <summary>Deflates into a buffer that the next call on the same thread uses again.</summary>
-    private sealed class ThreadDeflate : IH5Filter
-    {
-        private static readonly DeflateFilter Library = new();
-        private static readonly ZLibCompressionOptions ByRunLength = new()
-        {
-            CompressionLevel = Level,
-            CompressionStrategy = ZLibCompressionStrategy.RunLengthEncoding,
-        };
-
-        [ThreadStatic]
-        private static MemoryStream? deflated;
-
-        public ushort FilterId => DeflateFilter.Id;
-
-        public string Name => Library.Name;
-
-        public uint[] GetParameters(uint[] chunkDimensions, uint typeSize, Dictionary<string, object>? options) =>
-            Library.GetParameters(chunkDimensions, typeSize, options);
-
-        public Memory<byte> Filter(FilterInfo info)
-        {
-            if (info.Flags.HasFlag(H5FilterFlags.Decompress))
-            {
-                return Library.Filter(info);
-            }
-
-            MemoryStream output = deflated ??= new MemoryStream(info.Buffer.Length / 4);
-            output.SetLength(0);
-            using (ZLibStream deflater = new(output, ByRunLength, leaveOpen: true))
-            {
-                deflater.Write(info.Buffer.Span);
-            }
-
-            return output.GetBuffer().AsMemory(0, (int)output.Length);
-        }
-    }
 }
