@@ -91,7 +91,7 @@ public static class TableFile
             CompressionLevel = CompressionLevel.Optimal,
             UseDateOnlyTypeForDates = true,
         };
-        foreach (TableColumn<TRow> column in columns.Where(column => column.Field.ClrType == typeof(string)))
+        foreach (TableColumn<TRow> column in columns.Where(column => StoredColumn.IsText(column.Field)))
         {
             options.ColumnEncodingHints[column.Name] = EncodingHint.Dictionary;
         }
