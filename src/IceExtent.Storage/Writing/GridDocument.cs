@@ -5,10 +5,12 @@ using PureHDF;
 
 namespace IceExtent.Storage.Writing;
 
-/// <summary>The content of one grid file while it is put together.</summary>
+/// <summary>The content of one grid file while it is put together. Its planes lie in pooled memory until it is disposed.</summary>
 internal sealed class GridDocument : IDisposable
 {
+    private const string Conventions = "Conventions";
     private const string MappingName = "crs";
+    private const string BoundsName = "time_bnds";
     private static readonly DateOnly Epoch = new(1970, 1, 1);
 
     private readonly Grid grid;
@@ -21,26 +23,28 @@ internal sealed class GridDocument : IDisposable
     public GridDocument(Grid grid, DateOnly day)
     {
         this.grid = grid;
-        file.Attributes["Conventions"] = text.Of("CF-1.11");
+        file.Attributes[Conventions] = text.Of("CF-1.11");
 
         double start = day.DayNumber - Epoch.DayNumber;
-        NetcdfDimension time = Coordinate(0, "time", [start], "time", "start of the UTC day", "days since 1970-01-01 00:00:00", "T");
-        NetcdfDimension y = Coordinate(1, "y", Centers(grid.Rows, grid.RowCenterMeters), "projection_y_coordinate", "y of the cell's center, up from the pole", "m", "Y");
-        NetcdfDimension x = Coordinate(2, "x", Centers(grid.Columns, grid.ColumnCenterMeters), "projection_x_coordinate", "x of the cell's center, right from the pole", "m", "X");
+        NetcdfDimension time = NetcdfDimension.WithCoordinate(text, 0, "time", [start]);
+        NetcdfDimension y = NetcdfDimension.WithCoordinate(text, 1, "y", Centers(grid.Rows, grid.RowCenterMeters));
+        NetcdfDimension x = NetcdfDimension.WithCoordinate(text, 2, "x", Centers(grid.Columns, grid.ColumnCenterMeters));
         NetcdfDimension ends = NetcdfDimension.Bare(text, 3, "nv", 2);
         planeDimensions = [time, y, x];
-
-        time.Scale.Attributes["calendar"] = text.Of("standard");
-        time.Scale.Attributes["bounds"] = text.Of("time_bnds");
-        H5Dataset bounds = new(new[] { start, start + 1.0 }, fileDims: [1, 2]);
-        NetcdfDimension.Attach(bounds, [time, ends]);
-
         foreach (NetcdfDimension dimension in (NetcdfDimension[])[time, y, x, ends])
         {
             file[dimension.Name] = dimension.Scale;
         }
 
-        file["time_bnds"] = bounds;
+        Describe(time, "time", "start of the UTC day", "days since 1970-01-01 00:00:00", "T");
+        time.Scale.Attributes["calendar"] = text.Of("standard");
+        time.Scale.Attributes["bounds"] = text.Of(BoundsName);
+        Describe(y, "projection_y_coordinate", "y of the center of the cell", "m", "Y");
+        Describe(x, "projection_x_coordinate", "x of the center of the cell", "m", "X");
+
+        H5Dataset bounds = new(new[] { start, start + 1.0 }, fileDims: [1, 2]);
+        NetcdfDimension.Attach(bounds, [time, ends]);
+        file[BoundsName] = bounds;
         file[MappingName] = Mapping();
     }
 
@@ -48,10 +52,13 @@ internal sealed class GridDocument : IDisposable
     public void Describe(string name, string value)
     {
         ArgumentException.ThrowIfNullOrEmpty(name);
-        file.Attributes[name] = text.Of(value);
+        if (!file.Attributes.TryAdd(name, text.Of(value)))
+        {
+            throw new ArgumentException($"The attribute {name} comes twice.", nameof(name));
+        }
     }
 
-    /// <summary>Adds a variable.</summary>
+    /// <summary>Adds a variable: packs its plane, which is not needed afterwards.</summary>
     public void Add(GridVariable variable)
     {
         H5Dataset plane = variable switch
@@ -59,8 +66,17 @@ internal sealed class GridDocument : IDisposable
             PackedVariable packed when packed.Values.Length == grid.CellCount => Packed(packed),
             BytePackedVariable packed when packed.Values.Length == grid.CellCount => Packed(packed),
             MaskVariable mask when mask.Values.Length == grid.CellCount => Mask(mask),
-            _ => throw new ArgumentException($"The plane of {variable.Name} does not have the {grid.CellCount} cells of the grid {grid.Name}.", nameof(variable)),
+            _ => throw new ArgumentException(
+                $"The plane of {variable.Name} does not have the {grid.CellCount} cells of the grid {grid.Name}.", nameof(variable)),
         };
+        foreach (KeyValuePair<string, string> attribute in variable.Attributes)
+        {
+            if (!plane.Attributes.TryAdd(attribute.Key, text.Of(attribute.Value)))
+            {
+                throw new ArgumentException($"The attribute {variable.Name}:{attribute.Key} comes twice.", nameof(variable));
+            }
+        }
+
         plane.Attributes["grid_mapping"] = text.Of(MappingName);
         NetcdfDimension.Attach(plane, planeDimensions);
         if (!file.TryAdd(variable.Name, plane))
@@ -81,44 +97,35 @@ internal sealed class GridDocument : IDisposable
 
     private H5Dataset<short[]> Packed(PackedVariable variable)
     {
-        H5Dataset<short[]> plane = Plane(variable, out Span<short> stored);
+        H5Dataset<short[]> plane = Plane(variable, variable.Units, out Span<short> stored);
         StoredRange range = variable.Packing.Range;
         PlanePacker.Pack(variable.Values.Span, range, stored);
-        DescribePacking(plane, variable.Units, Packing.Fill, variable.Packing.Scale, variable.Packing.Offset);
+        DescribePacking(plane, Packing.Fill, variable.Packing.Scale, variable.Packing.Offset);
         plane.Attributes["valid_range"] = new[] { (short)range.Lowest, (short)range.Highest };
         return plane;
     }
 
     private H5Dataset<byte[]> Packed(BytePackedVariable variable)
     {
-        H5Dataset<byte[]> plane = Plane(variable, out Span<byte> stored);
+        H5Dataset<byte[]> plane = Plane(variable, variable.Units, out Span<byte> stored);
         StoredRange range = variable.Packing.Range;
         PlanePacker.Pack(variable.Values.Span, range, stored);
-        DescribePacking(plane, variable.Units, BytePacking.Fill, variable.Packing.Scale, variable.Packing.Offset);
+        DescribePacking(plane, BytePacking.Fill, variable.Packing.Scale, variable.Packing.Offset);
         plane.Attributes["valid_range"] = new[] { (byte)range.Lowest, (byte)range.Highest };
         return plane;
     }
 
-    private void DescribePacking<T>(H5Dataset plane, string units, T fill, double scale, double offset)
-        where T : unmanaged
-    {
-        plane.Attributes["units"] = text.Of(units);
-        plane.Attributes["_FillValue"] = fill;
-        plane.Attributes["scale_factor"] = scale;
-        plane.Attributes["add_offset"] = offset;
-    }
-
     private H5Dataset<ushort[]> Mask(MaskVariable variable)
     {
-        H5Dataset<ushort[]> plane = Plane(variable, out Span<ushort> stored);
+        H5Dataset<ushort[]> plane = Plane(variable, units: null, out Span<ushort> stored);
         variable.Values.Span.CopyTo(stored);
         plane.Attributes["flag_masks"] = variable.Meanings.Select(flag => flag.Mask).ToArray();
         plane.Attributes["flag_meanings"] = text.Of(string.Join(' ', variable.Meanings.Select(flag => flag.Meaning)));
         return plane;
     }
 
-    // The plane's memory is filled by the caller and read when the file is encoded.
-    private unsafe H5Dataset<T[]> Plane<T>(GridVariable variable, out Span<T> stored)
+    // The caller fills the plane's memory; it is read when the file is encoded.
+    private unsafe H5Dataset<T[]> Plane<T>(GridVariable variable, string? units, out Span<T> stored)
         where T : unmanaged
     {
         int length = grid.CellCount * sizeof(T);
@@ -135,35 +142,45 @@ internal sealed class GridDocument : IDisposable
             plane.Attributes["standard_name"] = text.Of(standardName);
         }
 
-        foreach (KeyValuePair<string, string> attribute in variable.Attributes)
+        if (units is not null)
         {
-            plane.Attributes[attribute.Key] = text.Of(attribute.Value);
+            plane.Attributes["units"] = text.Of(units);
         }
 
         return plane;
     }
 
+    private static void DescribePacking<T>(H5Dataset plane, T fill, double scale, double offset)
+        where T : unmanaged
+    {
+        plane.Attributes["_FillValue"] = fill;
+        plane.Attributes["scale_factor"] = scale;
+        plane.Attributes["add_offset"] = offset;
+    }
+
+    // The variable holds nothing: its attributes are what counts.
     private H5Dataset Mapping()
     {
-        H5Dataset mapping = new(0);
-        foreach (KeyValuePair<string, object> attribute in GridMapping.AttributesOf(grid))
+        GridMapping mapping = CoordinateSystemText.Mapping(grid);
+        H5Dataset variable = new(0);
+        variable.Attributes["grid_mapping_name"] = text.Of(mapping.Name);
+        foreach (KeyValuePair<string, double> number in mapping.Numbers)
         {
-            mapping.Attributes[attribute.Key] = attribute.Value is string words ? text.Of(words) : attribute.Value;
+            variable.Attributes[number.Key] = number.Value;
         }
 
-        return mapping;
+        variable.Attributes["crs_wkt"] = text.Of(CoordinateSystemText.WellKnownText(grid));
+        return variable;
     }
 
-    private NetcdfDimension Coordinate(int id, string name, double[] values, string standardName, string longName, string units, string axis)
+    private void Describe(NetcdfDimension dimension, string standardName, string longName, string units, string axis)
     {
-        NetcdfDimension dimension = NetcdfDimension.WithCoordinate(text, id, name, values);
-        dimension.Scale.Attributes["standard_name"] = text.Of(standardName);
-        dimension.Scale.Attributes["long_name"] = text.Of(longName);
-        dimension.Scale.Attributes["units"] = text.Of(units);
-        dimension.Scale.Attributes["axis"] = text.Of(axis);
-        return dimension;
+        Dictionary<string, object> attributes = dimension.Scale.Attributes;
+        attributes["standard_name"] = text.Of(standardName);
+        attributes["long_name"] = text.Of(longName);
+        attributes["units"] = text.Of(units);
+        attributes["axis"] = text.Of(axis);
     }
 
-    private static double[] Centers(int count, Func<int, double> center) =>
-        [.. Enumerable.Range(0, count).Select(center)];
+    private static double[] Centers(int count, Func<int, double> center) => [.. Enumerable.Range(0, count).Select(center)];
 }

@@ -26,13 +26,19 @@ internal static class StoredColumn
         return whole;
     }
 
-    private static Type ElementTypeOf(DataField field) => field.ClrType == typeof(string) || !field.IsNullable
-        ? field.ClrType
-        : typeof(Nullable<>).MakeGenericType(field.ClrType);
+    /// <summary>Whether a column holds text; the library's own type for it is a piece of characters.</summary>
+    public static bool IsText(DataField field) => field.ClrType == typeof(ReadOnlyMemory<char>);
+
+    private static Type ElementTypeOf(DataField field) => (IsText(field), field.IsNullable) switch
+    {
+        (true, _) => typeof(string),
+        (false, true) => typeof(Nullable<>).MakeGenericType(field.ClrType),
+        _ => field.ClrType,
+    };
 
     private static Task<Array> ReadAsync(ParquetRowGroupReader group, DataField field) => field.ClrType switch
     {
-        Type type when type == typeof(string) => TextsAsync(group, field),
+        _ when IsText(field) => TextsAsync(group, field),
         Type type when type == typeof(DateOnly) => ValuesAsync<DateOnly>(group, field),
         Type type when type == typeof(int) => ValuesAsync<int>(group, field),
         Type type when type == typeof(double) => ValuesAsync<double>(group, field),

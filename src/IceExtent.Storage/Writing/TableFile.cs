@@ -54,7 +54,7 @@ public static class TableFile
                 new(
                     "IE3120", path, $"something that cannot be read ({cause.Message.TrimEnd('.')})",
                     "a Parquet table that this program wrote",
-                    "Move the file away; the run writes it anew from the days it covers."),
+                    "Move the file away and run its days anew."),
                 cause);
         }
     }
@@ -91,7 +91,7 @@ public static class TableFile
             CompressionLevel = CompressionLevel.Optimal,
             UseDateOnlyTypeForDates = true,
         };
-        foreach (TableColumn<TRow> column in columns.Where(column => column.Field.ClrType == typeof(string)))
+        foreach (TableColumn<TRow> column in columns.Where(column => StoredColumn.IsText(column.Field)))
         {
             options.ColumnEncodingHints[column.Name] = EncodingHint.Dictionary;
         }

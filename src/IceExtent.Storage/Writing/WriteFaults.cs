@@ -47,7 +47,7 @@ internal static class WriteFaults
                 "Choose an output folder with a shorter path or shorter names in the run file."),
             (_, NoSpaceLeft or QuotaExceeded or WindowsDiskFull or WindowsHandleDiskFull) => new(
                 "IE3102", path, "no room left on the disk or in the quota", "room for the whole file",
-                "Make room, then start the run again: it goes on with the days that are missing."),
+                "Make room, then start the run again."),
             (_, ReadOnlyFileSystem or WindowsWriteProtect) => new(
                 "IE3106", path, "a file system that is mounted read-only", "one that can be written",
                 "Mount it for writing or choose another output folder."),
