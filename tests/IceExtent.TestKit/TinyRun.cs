@@ -47,7 +47,7 @@ public sealed class TinyRun : IDisposable
             PathOf("land.nc"),
             Grid,
             new DateOnly(2000, 1, 1),
-            [new ByteVariable("land_area_fraction", "share of land", "land_area_fraction", [], "1", land, BytePacking.Fraction)],
+            [new BytePackedVariable("land_area_fraction", "share of land", "land_area_fraction", [], "1", land, BytePacking.Fraction)],
             [new("title", "Invented land")]);
         WriteRunFile();
     }

@@ -100,6 +100,7 @@ internal sealed class GridDocument : IDisposable
         H5Dataset<short[]> plane = Plane(variable, variable.Units, out Span<short> stored);
         StoredRange range = variable.Packing.Range;
         PlanePacker.Pack(variable.Values.Span, range, stored);
+        KeptLimits.Apply(variable.Values.Span, variable.Limits, range, stored);
         DescribePacking(plane, Packing.Fill, variable.Packing.Scale, variable.Packing.Offset);
         plane.Attributes["valid_range"] = new[] { (short)range.Lowest, (short)range.Highest };
         return plane;

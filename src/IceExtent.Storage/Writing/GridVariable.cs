@@ -24,7 +24,11 @@ public sealed record PackedVariable(
     string Units,
     ReadOnlyMemory<float> Values,
     Packing Packing)
-    : GridVariable(Name, LongName, StandardName, Attributes);
+    : GridVariable(Name, LongName, StandardName, Attributes)
+{
+    /// <summary>Limits that readers will compare with, in the variable's unit: a value below one is never rounded up to it.</summary>
+    public IReadOnlyList<double> Limits { get; init; } = [];
+}
 
 /// <summary>A plane of real numbers stored as scaled unsigned bytes; NaN becomes <c>_FillValue</c>.</summary>
 /// <param name="Name">The variable's name.</param>

@@ -23,7 +23,7 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
     private static readonly KeyValuePair<string, string>[] Nothing = [];
     private static readonly KeyValuePair<string, string>[] Ancillary = [new("ancillary_variables", "concentration_se conditions")];
 
-    private readonly Packing fraction = Packing.Fraction;
+    private readonly double[] limits = [settings.Rules.IceFraction, settings.Rules.PackFraction];
 
     /// <summary>Writes one day of one method.</summary>
     public void Write(PlannedDay day, IConcentrationMethod method, ConcentrationPlanes planes)
@@ -31,7 +31,10 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
         List<GridVariable> variables =
         [
             new PackedVariable(
-                "concentration", "sea-ice concentration of all ice, screened for weather and clipped to 0-1", "sea_ice_area_fraction", Ancillary, "1", planes.TotalMemory, fraction),
+                "concentration", "sea-ice concentration of all ice, screened for weather and clipped to 0-1", "sea_ice_area_fraction", Ancillary, "1", planes.TotalMemory, Packing.Fraction)
+            {
+                Limits = limits, // So that totals can be recomputed from the grids.
+            },
             new PackedVariable(
                 "concentration_se", "standard error of the sea-ice concentration", "sea_ice_area_fraction standard_error", Nothing, "1", planes.StandardErrorMemory, Packing.Fraction),
         ];
