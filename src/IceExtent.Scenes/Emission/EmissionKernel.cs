@@ -7,7 +7,7 @@ namespace IceExtent.Scenes.Emission;
 /// <summary>The fast version of <see cref="SurfaceEmission"/>: one band, whole planes, several cells at a time.</summary>
 /// <remarks>
 /// In place of the Fresnel formulas a polynomial in the sea's temperature is evaluated; everything else is the same
-/// arithmetic in single precision. Accuracy: within 0.02 K of the plain version over all states that a scene can
+/// arithmetic in single precision. Accuracy: within 0.002 K of the plain version over all states that a scene can
 /// hold (see <c>EmissionKernelTests</c>).
 /// </remarks>
 internal sealed class EmissionKernel

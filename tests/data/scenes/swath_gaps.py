@@ -8,21 +8,24 @@ import numpy as np
 SWATH_KM, ORBITS, INCLINATION, RADIUS_KM = 1394.0, 14.1, np.radians(98.8), 6371.0
 
 
-def track(days):
-    """Unit vectors below the satellite, in a frame that turns with the Earth (sun-synchronous: once a day)."""
-    u = 2 * np.pi * ORBITS * days
-    x, y, z = np.cos(u), np.sin(u) * np.cos(INCLINATION), np.sin(u) * np.sin(INCLINATION)
+def turned(vectors, days):
+    """Into a frame that turns with the Earth (sun-synchronous: once a day)."""
     turn = -2 * np.pi * days
+    x, y, z = vectors
     return np.stack([x * np.cos(turn) - y * np.sin(turn), x * np.sin(turn) + y * np.cos(turn), z], axis=-1)
+
+
+def orbit(days):
+    """Unit vectors below the satellite and along its flight in space: the scan reaches out across the latter."""
+    u = 2 * np.pi * ORBITS * days
+    below = np.cos(u), np.sin(u) * np.cos(INCLINATION), np.sin(u) * np.sin(INCLINATION)
+    flight = -np.sin(u), np.cos(u) * np.cos(INCLINATION), np.cos(u) * np.sin(INCLINATION)
+    return turned(below, days), turned(flight, days)
 
 
 if __name__ == "__main__":
     days = np.arange(0, 1, 1 / (14.1 * 600))
-    at = track(days)
-    ahead = track(days + 1e-6)
-    motion = ahead - at
-    motion -= np.sum(motion * at, axis=-1, keepdims=True) * at
-    motion /= np.linalg.norm(motion, axis=-1, keepdims=True)
+    at, motion = orbit(days)
     print("latitude_degrees,share_lost")
     for latitude in (20, 30, 35, 40, 45, 50, 55, 60, 65):
         lon = np.radians(np.arange(0, 360, 0.25))
