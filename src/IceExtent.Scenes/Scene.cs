@@ -12,7 +12,8 @@ namespace IceExtent.Scenes;
 /// <remarks>
 /// Everything follows from the parameters and the seed. A day does not depend on any other day being made, so days
 /// may be made in any order and on any number of threads, each with its own <see cref="SceneWorkspace"/>, and come
-/// out the same to the last bit. What the sea looks like does not depend on the sensor: two sensors see one truth.
+/// out the same to the last bit (on one kind of processor: exponentials may round differently on another). What the
+/// sea looks like does not depend on the sensor: two sensors see one truth.
 /// </remarks>
 public sealed class Scene
 {

@@ -125,6 +125,37 @@ public sealed class SceneTruthTests
     }
 
     [Fact]
+    public void Truth_WarmInflow_OpensWaterThereAndNotFarAway()
+    {
+        SceneParameters north = Shipped.Scene("north");
+        WarmInflow inflow = new() { LatitudeDegrees = 84, LongitudeDegrees = 30, ReachKilometers = 300, StrengthDegrees = 40 };
+        float[] without = TestWorld.Make(north).TruthOf(new(2001, 3, 10)).Concentration;
+        float[] with = TestWorld.Make(north with { Ice = north.Ice with { WarmInflows = [inflow] } }).TruthOf(new(2001, 3, 10)).Concentration;
+        int inside = TestWorld.North.CellAt(new GeoPosition(84, 30))!.Value, far = TestWorld.North.CellAt(new GeoPosition(84, 210))!.Value;
+
+        Assert.Equal(0f, with[inside]);
+        Assert.True(without[inside] > 0.8f);
+        Assert.Equal(without[far], with[far], 1e-3f);
+    }
+
+    [Fact]
+    public void Truth_CoastThatFreezesEarly_HasMoreIceInWinterOnly()
+    {
+        Grid grid = TestWorld.North;
+        LandShare land = new([.. Enumerable.Range(0, grid.CellCount).Select(cell => cell % grid.Columns < 8 ? 1f : 0f)]);
+        SceneParameters north = Shipped.Scene("north");
+        double Coastal(double winterDegrees, DateOnly day)
+        {
+            IceParameters ice = north.Ice with { CoastReachKilometers = 200, CoastWinterDegrees = winterDegrees, CoastSummerDegrees = 0 };
+            float[] found = new Scene(north with { Ice = ice }, grid, land, TestWorld.Sensor, 1).TruthOf(day).Concentration;
+            return Enumerable.Range(0, grid.CellCount).Where(cell => cell % grid.Columns is >= 8 and < 11).Average(cell => (double)found[cell]);
+        }
+
+        Assert.True(Coastal(12, new(2001, 12, 1)) > Coastal(0, new(2001, 12, 1)) + 0.1);
+        Assert.Equal(Coastal(0, new(2001, 9, 15)), Coastal(12, new(2001, 9, 15)), 0.02);
+    }
+
+    [Fact]
     public void Truth_WorkspaceOfAnotherScene_IsRefused()
     {
         Scene scene = Make("north"), other = Make("north");

@@ -79,7 +79,8 @@ internal sealed class SwathGaps
         bool Reaches(double degrees)
         {
             double orbit = Math.Floor(degrees / spacing);
-            return degrees - (orbit * spacing) <= width && orbit + passage.OrbitShare < orbitsPerDay;
+            double flown = orbit + passage.OrbitShare;
+            return degrees - (orbit * spacing) <= width && flown >= 0.0 && flown < orbitsPerDay;
         }
     }
 

@@ -20,6 +20,10 @@ internal sealed class IceCover
     // This share of the open water is spread in patches, the rest lies in cracks.
     private const float PatchyShare = 0.4f;
 
+    private const double StirLifeDays = 60.0;
+    private const double LeadDriftMetersPerDay = 4_000.0;
+    private const double DaysPerYear = 365.25;
+
     private readonly IceParameters parameters;
     private readonly SmoothField yearly;
     private readonly SmoothField wander;
@@ -33,12 +37,12 @@ internal sealed class IceCover
         this.parameters = parameters;
         Clock = clock;
         GridFrame frame = grid.Frame;
-        yearly = new(new(parameters.YearlyNodeKilometers * KilometersToMeters, 365.25, 1, 1.0), Draws.Key(key, 1), frame);
+        yearly = new(new(parameters.YearlyNodeKilometers * KilometersToMeters, DaysPerYear, 1, 1.0), Draws.Key(key, 1), frame);
         wander = new(
             new(parameters.WanderNodeKilometers * KilometersToMeters, parameters.WanderLifeDays, 4, 0.6), Draws.Key(key, 2), frame);
         leads = new(
-            new(parameters.LeadNodeKilometers * KilometersToMeters, parameters.LeadLifeDays, 2, 0.5, 4_000.0), Draws.Key(key, 3), frame);
-        stirring = new(new(parameters.WanderNodeKilometers * KilometersToMeters, 60.0, 4, 0.6), Draws.Key(key, 4), frame);
+            new(parameters.LeadNodeKilometers * KilometersToMeters, parameters.LeadLifeDays, 2, 0.5, LeadDriftMetersPerDay), Draws.Key(key, 3), frame);
+        stirring = new(new(parameters.WanderNodeKilometers * KilometersToMeters, StirLifeDays, 4, 0.6), Draws.Key(key, 4), frame);
         standing = Standing(grid, Draws.Key(key, 5));
         coast = Coast(grid, land);
     }

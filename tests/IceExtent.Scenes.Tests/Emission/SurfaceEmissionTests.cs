@@ -69,6 +69,45 @@ public sealed class SurfaceEmissionTests
             }
         });
 
+    // Laws of the mixture: ponds emit like water, wet snow hides the kind of ice, land hides the sea.
+    [Fact]
+    public void Brightness_PondsWetSnowAndLand_HideWhatIsBelow() =>
+        States.Any.Sample(state =>
+        {
+            SurfaceEmission emission = Make(TestWorld.TiePoints);
+            foreach (Channel channel in emission.Channels)
+            {
+                double Of(CellState cell) => emission.BrightnessKelvins(channel, cell);
+                Assert.Equal(Of(state with { FirstYear = 0, Multiyear = 0 }), Of(state with { PondShare = 1 }), 1e-9);
+                Assert.Equal(
+                    Of(state with { Wetness = 1, FirstYear = 0.8, Multiyear = 0 }),
+                    Of(state with { Wetness = 1, FirstYear = 0, Multiyear = 0.8 }),
+                    1e-9);
+                Assert.Equal(
+                    Of(state with { LandShare = 1, FirstYear = 0, Multiyear = 0 }),
+                    Of(state with { LandShare = 1, FirstYear = 0.3, Multiyear = 0.7 }),
+                    1e-9);
+            }
+        });
+
+    // Law: dry ice in clear air gets brighter by its emissivity times the warming times the transmittance, so more in
+    // first-year than in multiyear ice.
+    [Fact]
+    public void Brightness_WarmerIce_RisesWithItsEmissivity()
+    {
+        SurfaceEmission emission = Make(TestWorld.TiePoints);
+        double Rise(double firstYear, double multiyear)
+        {
+            CellState cell = AtReference(firstYear, multiyear);
+            return emission.BrightnessKelvins(Channel.V37, cell with { IceKelvins = cell.IceKelvins + 1.0 })
+                - emission.BrightnessKelvins(Channel.V37, cell);
+        }
+
+        ChannelSurfaces surfaces = emission.SurfacesIn(Channel.V37);
+        Assert.Equal(surfaces.FirstYear / surfaces.Multiyear, Rise(1, 0) / Rise(0, 1), 1e-9);
+        Assert.InRange(Rise(1, 0), 0.8, 1.0);
+    }
+
     [Fact]
     public void Channels_SensorWith89_LeavesThemOut()
     {
