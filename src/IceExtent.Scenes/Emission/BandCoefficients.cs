@@ -1,6 +1,6 @@
 namespace IceExtent.Scenes.Emission;
 
-/// <summary>The constants of the ocean and air model in one frequency band; symbols as in [WentzMeissner2000].</summary>
+/// <summary>The constants of the ocean and air model in one frequency band; symbols as in [Wentz2000].</summary>
 public sealed record BandCoefficients
 {
     /// <summary>The frequency the constants were fitted at, in GHz.</summary>

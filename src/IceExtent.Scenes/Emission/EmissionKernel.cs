@@ -12,7 +12,7 @@ namespace IceExtent.Scenes.Emission;
 /// </remarks>
 internal sealed class EmissionKernel
 {
-    private const float MostVapor = 48f;      // [WentzMeissner2000]: TV is constant above.
+    private const float MostVapor = 48f;      // [Wentz2000]: TV is constant above.
     private const float LargestContrast = 20f; // ζ is constant beyond.
 
     private readonly BandCoefficients band;

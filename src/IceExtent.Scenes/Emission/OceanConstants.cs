@@ -4,7 +4,7 @@ namespace IceExtent.Scenes.Emission;
 
 /// <summary>Every physical constant of the ocean and air model, in one place.</summary>
 /// <remarks>
-/// Source: [WentzMeissner2000], sections 2.3 to 2.6. <b>All of them are values from memory</b>: none was read in
+/// Source: [Wentz2000], sections 2.3 to 2.6. <b>All of them are values from memory</b>: none was read in
 /// print while this was written. They are checked only through what they give (see <c>OceanModelReferenceTests</c>):
 /// open-water brightness temperatures that agree with published tie points to a few K. They belong to a published
 /// formula, so they stand here and not in config/.

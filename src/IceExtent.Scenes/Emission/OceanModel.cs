@@ -4,7 +4,7 @@ namespace IceExtent.Scenes.Emission;
 
 /// <summary>The brightness temperature of the open sea through the air, one state at a time.</summary>
 /// <remarks>
-/// Source: [WentzMeissner2000], sections 2.3 to 2.6, constants in <see cref="OceanConstants"/>. This is the plain
+/// Source: [Wentz2000], sections 2.3 to 2.6, constants in <see cref="OceanConstants"/>. This is the plain
 /// version that the fast one (<c>SceneEmission</c>) is measured against. Accuracy: 0.01 K against an
 /// independent program (see <c>OceanModelReferenceTests</c>). Nothing checks its arguments.
 /// </remarks>

@@ -2,7 +2,7 @@ using System.Numerics;
 
 namespace IceExtent.Scenes.Emission;
 
-/// <summary>How sea water answers to microwaves. Source: [WentzMeissner2000] section 2.4; values from memory.</summary>
+/// <summary>How sea water answers to microwaves. Source: [Wentz2000] section 2.4; values from memory.</summary>
 public static class SeaWater
 {
     private const double OpticalLimit = 4.44;   // Permittivity at infinite frequency.

@@ -6,7 +6,7 @@ namespace IceExtent.Scenes.Emission;
 /// <summary>The brightness temperature of a mixed cell, one cell at a time.</summary>
 /// <remarks>
 /// The emissivities follow from the sensor's tie points: at the reference state, a cell of one pure surface gives
-/// exactly that surface's tie point. Away from it, water follows [WentzMeissner2000] and ice its temperature, both
+/// exactly that surface's tie point. Away from it, water follows [Wentz2000] and ice its temperature, both
 /// through the same air. At one state of air and surfaces the result is linear in the shares. This is the plain
 /// version that <see cref="EmissionKernel"/> is measured against.
 /// </remarks>

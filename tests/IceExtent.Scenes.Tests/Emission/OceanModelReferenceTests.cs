@@ -4,7 +4,7 @@ using IceExtent.Scenes.Tests.Kit;
 
 namespace IceExtent.Scenes.Tests.Emission;
 
-[Trait("Reference", "WentzMeissner2000")]
+[Trait("Reference", "Wentz2000")]
 public sealed class OceanModelReferenceTests
 {
     private const double Salinity = 33.0;

@@ -8,7 +8,7 @@ public sealed class SeaWaterReferenceTests
     // Origin: independent. NumPy working of the same formulas (tests/data/README-d.md), printed to 0.001. It shows that
     // the formula is coded as written down, not that its constants, which are from memory, are right.
     [Theory]
-    [Trait("Reference", "WentzMeissner2000")]
+    [Trait("Reference", "Wentz2000")]
     [InlineData(18.7, 0.0, 33.0, 20.787, -32.763)]
     [InlineData(36.5, 0.0, 33.0, 9.818, -19.936)]
     [InlineData(18.7, 20.0, 35.0, 37.141, -37.819)]
