@@ -1,0 +1,172 @@
+using IceExtent.Grids;
+using IceExtent.Retrieval;
+using IceExtent.Scenes.Emission;
+using IceExtent.Scenes.Fields;
+using IceExtent.Scenes.Observation;
+using IceExtent.Scenes.Parameters;
+using IceExtent.Scenes.World;
+
+namespace IceExtent.Scenes;
+
+/// <summary>An invented sea with ice whose truth is known, seen by a real or invented radiometer.</summary>
+/// <remarks>
+/// Everything follows from the parameters and the seed. A day does not depend on any other day being made, so days
+/// may be made in any order and on any number of threads, each with its own <see cref="SceneWorkspace"/>, and come
+/// out the same to the last bit (on one kind of processor: exponentials may round differently on another). What the
+/// sea looks like does not depend on the sensor: two sensors see one truth.
+/// </remarks>
+public sealed class Scene
+{
+    private readonly IceCover ice;
+    private readonly Weather weather;
+    private readonly Instrument instrument;
+    private readonly Coverage coverage;
+    private readonly EmissionKernel[] kernels;
+    private readonly float[] landShare;
+
+    /// <summary>Sets a scene up; no day is made yet.</summary>
+    /// <param name="parameters">Season, ice, weather, surfaces, instrument and coverage.</param>
+    /// <param name="grid">The grid.</param>
+    /// <param name="land">The share of land of every cell of the grid.</param>
+    /// <param name="sensor">The radiometer; its tie points in the hemisphere of the grid are the pure surfaces.</param>
+    /// <param name="seed">Another seed, another sea.</param>
+    /// <exception cref="ArgumentException">
+    /// A parameter is out of range (see <see cref="SceneCheck.FindProblems"/>), the land shares belong to another grid,
+    /// or no emissivity fits a tie point.
+    /// </exception>
+    public Scene(SceneParameters parameters, Grid grid, LandShare land, Sensor sensor, long seed)
+    {
+        ArgumentNullException.ThrowIfNull(parameters);
+        ArgumentNullException.ThrowIfNull(grid);
+        ArgumentNullException.ThrowIfNull(land);
+        ArgumentNullException.ThrowIfNull(sensor);
+        if (SceneCheck.FindProblems(parameters) is [SceneProblem first, ..])
+        {
+            throw new ArgumentException(first.ToString(), nameof(parameters));
+        }
+
+        if (land.Fraction.Length != grid.CellCount)
+        {
+            throw new ArgumentException(
+                $"There are land shares of {land.Fraction.Length} cells; the grid has {grid.CellCount}.", nameof(land));
+        }
+
+        (Grid, Sensor) = (grid, sensor);
+        ulong key = Draws.Mix((ulong)seed);
+        SeasonClock clock = new(parameters.Season, Draws.Key(key, 1));
+        ice = new(parameters.Ice, clock, grid, land, Draws.Key(key, 2));
+        weather = new(parameters.Weather, parameters.Surfaces, grid, Draws.Key(key, 3));
+        instrument = new(parameters.Instrument, sensor.FirstDay, grid.Frame.CellMeters, Draws.Key(key, 4));
+        coverage = new(parameters.Coverage, sensor.FirstDay, sensor.PolarGapLatitudeDegrees, grid, Draws.Key(key, 5));
+
+        SurfaceEmission surfaces = new(
+            parameters.Surfaces, parameters.Instrument.IncidenceDegrees, sensor, sensor.In(grid.Hemisphere).TiePoints);
+        Channels = surfaces.Channels;
+        kernels = [.. Channels.Select(channel => OceanConstants.BandOf(channel)!).Distinct().Select(band =>
+            new EmissionKernel(surfaces, band, parameters.Weather.FreezingKelvins, parameters.Weather.WarmestSeaKelvins))];
+        landShare = new float[PlaneMath.PaddedLength(grid.CellCount)];
+        land.Fraction.CopyTo(landShare);
+    }
+
+    /// <summary>The grid of every plane.</summary>
+    public Grid Grid { get; }
+
+    /// <summary>The radiometer.</summary>
+    public Sensor Sensor { get; }
+
+    /// <summary>The channels that can be made: those of the sensor that the ocean model knows.</summary>
+    public IReadOnlyList<Channel> Channels { get; }
+
+    /// <summary>Makes room for a thread.</summary>
+    public SceneWorkspace CreateWorkspace() => new(this);
+
+    /// <summary>Whether a whole day is missing; days outside the sensor's service count as missing.</summary>
+    public bool IsMissing(DateOnly day) => !Sensor.Serves(day) || coverage.IsMissing(day);
+
+    /// <summary>Writes the true ice of a day, missing days included.</summary>
+    /// <param name="day">The day, UTC; the state is that of noon.</param>
+    /// <param name="workspace">Room of this scene.</param>
+    /// <param name="truth">Receives the ice.</param>
+    /// <exception cref="ArgumentException">The workspace belongs to another scene, or a plane has another length.</exception>
+    public void Truth(DateOnly day, SceneWorkspace workspace, SceneTruth truth)
+    {
+        Check(workspace);
+        ArgumentNullException.ThrowIfNull(truth);
+        if (truth.Concentration.Length != Grid.CellCount)
+        {
+            throw new ArgumentException($"The truth has {truth.Concentration.Length} cells; the grid has {Grid.CellCount}.", nameof(truth));
+        }
+
+        ice.Fill(TimeOf(day), workspace.Scratch, (workspace.First, workspace.Second), workspace.Cells);
+        float[] firstYear = workspace.Cells.FirstYear;
+        float[] multiyear = workspace.Cells.Multiyear;
+        for (int cell = 0; cell < truth.Concentration.Length; cell++)
+        {
+            bool sea = landShare[cell] < 1f;
+            truth.FirstYear[cell] = sea ? firstYear[cell] : float.NaN;
+            truth.Multiyear[cell] = sea ? multiyear[cell] : float.NaN;
+            truth.Concentration[cell] = sea ? firstYear[cell] + multiyear[cell] : float.NaN;
+        }
+    }
+
+    /// <summary>Writes what the radiometer reports for a day.</summary>
+    /// <param name="day">The day, UTC.</param>
+    /// <param name="workspace">Room of this scene.</param>
+    /// <param name="into">
+    /// Receives every channel that it holds and the scene can make, in K; NaN where nothing was observed, everywhere
+    /// on a missing day, and in channels that the scene cannot make.
+    /// </param>
+    /// <exception cref="ArgumentException">The workspace belongs to another scene, or the planes have another length.</exception>
+    public void Observe(DateOnly day, SceneWorkspace workspace, BrightnessPlanes into)
+    {
+        Check(workspace);
+        ArgumentNullException.ThrowIfNull(into);
+        if (into.CellCount != Grid.CellCount)
+        {
+            throw new ArgumentException($"The planes have {into.CellCount} cells; the grid has {Grid.CellCount}.", nameof(into));
+        }
+
+        into.Clear();
+        if (IsMissing(day))
+        {
+            return;
+        }
+
+        double time = TimeOf(day);
+        CellPlanes cells = workspace.Cells;
+        ice.Fill(time, workspace.Scratch, (workspace.First, workspace.Second), cells);
+        weather.Fill(time, ice.Clock.Summerness(time), workspace.Scratch, (workspace.First, workspace.Second), workspace.Storms, cells);
+        foreach (EmissionKernel kernel in kernels)
+        {
+            kernel.Paint(cells, landShare, workspace.PlaneOf);
+        }
+
+        coverage.MarkLost(day, workspace.Lost);
+        foreach (Channel channel in Channels.Where(into.Has))
+        {
+            Span<float> observed = into.Kelvins(channel);
+            instrument.Observe(
+                day, channel, workspace.PlaneOf(channel).AsSpan(0, Grid.CellCount), Grid.Columns, workspace.First, observed);
+            Blank(workspace.Lost, observed);
+        }
+    }
+
+    private static double TimeOf(DateOnly day) => day.DayNumber + 0.5;
+
+    private static void Blank(ReadOnlySpan<bool> lost, Span<float> kelvins)
+    {
+        for (int cell = 0; cell < kelvins.Length; cell++)
+        {
+            kelvins[cell] = lost[cell] ? float.NaN : kelvins[cell];
+        }
+    }
+
+    private void Check(SceneWorkspace workspace)
+    {
+        ArgumentNullException.ThrowIfNull(workspace);
+        if (!ReferenceEquals(workspace.Owner, this))
+        {
+            throw new ArgumentException("The workspace belongs to another scene.", nameof(workspace));
+        }
+    }
+}
