@@ -41,6 +41,9 @@ internal static class KelvinDecoder
             case StoredNumber.UnsignedEightBytes:
                 Compute<ulong>(stored, order, rule.Encoding, kelvins);
                 break;
+            case StoredNumber.RealFourBytes when RealLine.Suits(rule.Encoding):
+                DecodeRows(MemoryMarshal.Cast<byte, float>(stored), order, new PlainLine(rule.Encoding), kelvins);
+                break;
             case StoredNumber.RealFourBytes:
                 Compute<float>(stored, order, rule.Encoding, kelvins);
                 break;
@@ -105,6 +108,11 @@ internal static class KelvinDecoder
                 kelvins[cell] = entries[int.CreateTruncating(stored[cell])];
             }
         }
+    }
+
+    private readonly struct PlainLine(KelvinEncoding encoding) : ILine<float>
+    {
+        public void Decode(ReadOnlySpan<float> stored, Span<float> kelvins) => RealLine.Decode(stored, encoding, kelvins);
     }
 
     private readonly struct ComputedLine<T>(KelvinEncoding encoding) : ILine<T>

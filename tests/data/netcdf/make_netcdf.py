@@ -1,7 +1,7 @@
 #!/usr/bin/python3
 """Writes the small files that the readers are tested with, and what netCDF4-python reads from them.
 
-Run it in this folder: it writes *.nc, kelvins.csv and times.csv. Versions: ../README-b.md.
+Run it in this folder: it writes *.nc, *.h5, kelvins.csv, times.csv and chunks.csv. Versions: ../README-b.md.
 Every plane has 6 rows and 5 columns of 25 km on EPSG:3411, x from -50 to 50 km, y from 62.5 to -62.5 km.
 The stored number of cell c (row-major from the top) is STORED[c] or a simple function of it.
 """
@@ -245,5 +245,17 @@ def times():
             out.writerow([units, calendar, repr(value), f"{moment.year:04d}-{moment.month:02d}-{moment.day:02d}"])
 
 
-for make in (packing, storage, axes, grids, days, expected, times):
+def chunks():
+    """Where the first chunk of some variables lies, for tests that damage it."""
+    with open("chunks.csv", "w", newline="") as f:
+        out = csv.writer(f, lineterminator="\n")
+        out.writerow(["file", "variable", "start", "bytes"])
+        for name in ("deflated", "unshuffled", "checked", "checked_wide"):
+            with h5py.File("storage-fixed.nc") as h:
+                info = h[name].id.get_chunk_info(0)
+                assert info.chunk_offset == (0, 0, 0)
+                out.writerow(["storage-fixed.nc", name, info.byte_offset, info.size])
+
+
+for make in (packing, storage, axes, grids, days, expected, times, chunks):
     make()

@@ -33,6 +33,7 @@ internal static class CellReader
         }
 
         file.ReadingCellsOf = structure.Name;
+        file.Stream.Guard.Chunks = structure.Chunk is { } whole ? (shape.Lengths, whole) : null;
         ulong[] start = shape.StartOf(step);
         long? chunkBytes = ChunkLimits.BytesOf(variable);
         if (chunkBytes is { } bytes && structure.Chunk is { } chunk && shape.IsHeldBy(chunk))
@@ -48,6 +49,7 @@ internal static class CellReader
         }
 
         file.ReadingCellsOf = null;
+        file.Stream.Guard.Chunks = null;
     }
 
     // The plane lies in one chunk: ask for one number, keep the chunk that comes with it and decode it where it is.

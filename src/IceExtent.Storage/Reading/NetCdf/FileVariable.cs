@@ -62,9 +62,11 @@ internal sealed class FileVariable
             return null;
         }
 
-        ChunkLimits.BytesOf(this);
+        bool isChunked = ChunkLimits.BytesOf(this) is not null;
+        File.Stream.Guard.Chunks = isChunked ? (Lengths, Dataset.Layout.Chunks) : null;
         byte[] stored = new byte[(int)count * StoredNumbers.BytesOf(number)];
         Read(default, stored, null);
+        File.Stream.Guard.Chunks = null;
         return StoredNumbers.ToDoubles(number, stored);
     }
 

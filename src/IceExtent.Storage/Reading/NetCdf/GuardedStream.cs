@@ -1,6 +1,4 @@
-using System.Buffers;
 using System.Runtime.CompilerServices;
-using Microsoft.Win32.SafeHandles;
 using PureHDF;
 
 namespace IceExtent.Storage.Reading.NetCdf;
@@ -8,33 +6,28 @@ namespace IceExtent.Storage.Reading.NetCdf;
 /// <summary>A file as a stream that a damaged structure cannot turn into an endless walk.</summary>
 /// <remarks>
 /// Every read past the end ends in <see cref="EndOfStreamException"/>; the number of reads is bounded by the
-/// file's length, so pointers that lead in circles come to an end; deep nesting ends before the stack does.
-/// Small reads go through a few pages, because a file's structure is read in pieces of a few bytes.
+/// file's length, so pointers that lead in circles come to an end; deep nesting ends before the stack does; and
+/// every block of the structure is checked by <see cref="StructureGuard"/> when its signature is read.
 /// </remarks>
 internal sealed class GuardedStream : Stream, IDatasetStream
 {
-    private const int PageBytes = 16 * 1024;
-    private const int PageCount = 16;
     private const long ReadsOfAnyFile = 100_000;
     private const long BytesPerFurtherRead = 4;
 
-    private readonly SafeFileHandle handle;
-    private readonly byte[] pages;
-    private readonly long[] pageNumbers = new long[PageCount];
-    private readonly long length;
+    private readonly FilePages pages;
     private long position;
     private long readsLeft;
-    private bool closed;
 
     /// <summary>Opens a file.</summary>
     public GuardedStream(string path)
     {
-        handle = File.OpenHandle(path);
-        length = RandomAccess.GetLength(handle);
-        readsLeft = ReadsOfAnyFile + (length / BytesPerFurtherRead);
-        pages = ArrayPool<byte>.Shared.Rent(PageBytes * PageCount);
-        Array.Fill(pageNumbers, -1);
+        pages = new(path);
+        Guard = new(pages);
+        readsLeft = ReadsOfAnyFile + (pages.Length / BytesPerFurtherRead);
     }
+
+    /// <summary>Checks blocks of the structure.</summary>
+    public StructureGuard Guard { get; }
 
     /// <inheritdoc/>
     public override bool CanRead => true;
@@ -46,7 +39,7 @@ internal sealed class GuardedStream : Stream, IDatasetStream
     public override bool CanWrite => false;
 
     /// <inheritdoc/>
-    public override long Length => length;
+    public override long Length => pages.Length;
 
     /// <inheritdoc/>
     public override long Position
@@ -62,7 +55,7 @@ internal sealed class GuardedStream : Stream, IDatasetStream
         {
             SeekOrigin.Begin => offset,
             SeekOrigin.Current => position + offset,
-            _ => length + offset,
+            _ => Length + offset,
         };
         position = target >= 0 ? target : throw new EndOfStreamException("A position lies before the start of the file.");
         return position;
@@ -75,35 +68,22 @@ internal sealed class GuardedStream : Stream, IDatasetStream
     public override int Read(Span<byte> buffer)
     {
         Watch();
-        if (buffer.Length >= PageBytes)
-        {
-            int direct = RandomAccess.Read(handle, buffer, position);
-            position += direct;
-            return direct;
-        }
-
-        int done = 0;
-        while (done < buffer.Length && position < length)
-        {
-            ReadOnlySpan<byte> rest = RestOfPage();
-            int count = Math.Min(rest.Length, buffer.Length - done);
-            rest[..count].CopyTo(buffer[done..]);
-            done += count;
-            position += count;
-        }
-
-        return done;
+        int count = position < Length ? pages.Read(position, buffer) : 0;
+        Guard.Seen(position, buffer[..count]);
+        position += count;
+        return count;
     }
 
-    /// <summary>Reads cells; they stand outside the pages, as nothing reads them twice.</summary>
+    /// <summary>Reads cells.</summary>
     public void ReadDataset(Span<byte> buffer)
     {
-        if (buffer.Length > length - position)
+        Watch();
+        if (buffer.Length > Length - position || pages.Read(position, buffer) != buffer.Length)
         {
             throw new EndOfStreamException("Cells lie past the end of the file.");
         }
 
-        ReadExactly(buffer);
+        position += buffer.Length;
     }
 
     /// <inheritdoc/>
@@ -121,11 +101,9 @@ internal sealed class GuardedStream : Stream, IDatasetStream
     /// <inheritdoc/>
     protected override void Dispose(bool disposing)
     {
-        if (disposing && !closed)
+        if (disposing)
         {
-            closed = true;
-            handle.Dispose();
-            ArrayPool<byte>.Shared.Return(pages);
+            pages.Dispose();
         }
 
         base.Dispose(disposing);
@@ -137,31 +115,6 @@ internal sealed class GuardedStream : Stream, IDatasetStream
         if (--readsLeft < 0)
         {
             throw new InvalidDataException("The structure of the file leads in circles.");
-        }
-    }
-
-    private Span<byte> RestOfPage()
-    {
-        (long number, long within) = Math.DivRem(position, PageBytes);
-        int slot = (int)(number % PageCount);
-        Span<byte> page = pages.AsSpan(slot * PageBytes, (int)Math.Min(PageBytes, length - (number * PageBytes)));
-        if (pageNumbers[slot] != number)
-        {
-            pageNumbers[slot] = -1;
-            Fill(page, number * PageBytes);
-            pageNumbers[slot] = number;
-        }
-
-        return page[(int)within..];
-    }
-
-    private void Fill(Span<byte> page, long start)
-    {
-        int done = 0;
-        while (done < page.Length)
-        {
-            int count = RandomAccess.Read(handle, page[done..], start + done);
-            done += count > 0 ? count : throw new EndOfStreamException("The file grew shorter while it was read.");
         }
     }
 }

@@ -1,5 +1,4 @@
 using System.IO.Compression;
-using System.Runtime.InteropServices;
 using PureHDF.Filters;
 
 namespace IceExtent.Storage.Reading.NetCdf;
@@ -42,9 +41,19 @@ internal sealed class InflateFilter : IH5Filter
     // Asking for one byte too many makes the stream read on to its checksum and verify it.
     private static int Inflate(ReadOnlyMemory<byte> deflated, Span<byte> into)
     {
-        ArraySegment<byte> bytes = MemoryMarshal.TryGetArray(deflated, out ArraySegment<byte> segment) ? segment : deflated.ToArray();
-        using MemoryStream source = new(bytes.Array!, bytes.Offset, bytes.Count, writable: false);
+        using DeflatedBytes source = new(deflated);
         using ZLibStream stream = new(source, CompressionMode.Decompress);
-        return stream.ReadAtLeast(into, into.Length, throwOnEndOfStream: false);
+        int count;
+        try
+        {
+            count = stream.ReadAtLeast(into, into.Length, throwOnEndOfStream: false);
+        }
+        catch (IOException)
+        {
+            // No file is read here: this is how the stream reports some of the damage it finds.
+            throw new InvalidDataException("A chunk cannot be inflated.");
+        }
+
+        return source.RanDry ? throw new InvalidDataException("A chunk ends before its deflated data do.") : count;
     }
 }
