@@ -1,3 +1,6 @@
+using IceExtent.Storage.Reading.NetCdf;
+using IceExtent.Storage.Reading.RawGrids;
+
 namespace IceExtent.Storage.Reading;
 
 /// <summary>Chooses the reader of a source.</summary>
@@ -7,6 +10,6 @@ public static class BrightnessSources
     public static IBrightnessSource Open(SourceDescription description)
     {
         ArgumentNullException.ThrowIfNull(description);
-        throw new InvalidOperationException("No reader is registered.");
+        return description.Raw is null ? new NetCdfSource(description) : new RawGridSource(description, description.Raw);
     }
 }
