@@ -46,6 +46,18 @@ public sealed class AxesTests
     }
 
     [Theory]
+    [InlineData("lzf", "a compression that is not read")]
+    [InlineData("lzf_skipped", "a chunk that skips some of its filters")]
+    public void Read_CompressionThatIsNotRead_IsRefused(string variable, string found)
+    {
+        Fault fault = SmallFiles.FaultOf(SmallFiles.Source("plain-20200131.h5", variable));
+
+        Assert.Equal(("IE2106", found), (fault.Code, fault.Found));
+        Assert.EndsWith($"variable {variable}", fault.Where, StringComparison.Ordinal);
+        Assert.Contains("nccopy -d 4 -s", fault.Remedy, StringComparison.Ordinal);
+    }
+
+    [Theory]
     [InlineData("grid-shifted.nc", "IE2108", "x is shifted by half a cell")]
     [InlineData("grid-spacing.nc", "IE2108", "column spacing 12500 m")]
     [InlineData("grid-degrees.nc", "IE2108", "the unit 'degrees'")]

@@ -85,6 +85,26 @@ public sealed class StorageLayoutTests
             Assert.Equal(alone[round % 2], SmallFiles.Read(source, days[round % 2])));
     }
 
+    // What is remembered of a file holds only while the file stays as it was. Worked: the rows of
+    // the one file run up and those of the other down, so each needs its own turn to start with 100 K.
+    [Fact]
+    public void Read_FileReplacedByAnother_IsTakenApartAgain()
+    {
+        using TemporaryFolder folder = new();
+        string path = folder.Write("tb.nc", File.ReadAllBytes(SmallFiles.PathOf("bottom-up.nc")));
+        File.SetLastWriteTimeUtc(path, new(2020, 2, 1));
+        IBrightnessSource source = SmallFiles.Source([path], "tb");
+        SourceDay day = Assert.Single(SmallFiles.Days(source));
+        float[] first = SmallFiles.Read(source, day);
+
+        folder.Write("tb.nc", File.ReadAllBytes(SmallFiles.PathOf("kilometers.nc")));
+        File.SetLastWriteTimeUtc(path, new(2020, 2, 2));
+        float[] second = SmallFiles.Read(source, day);
+
+        Assert.Equal(100f, first[0]);
+        Assert.Equal(first, second);
+    }
+
     [Fact]
     public void Read_PlanesOfAnotherGrid_AreRefused()
     {

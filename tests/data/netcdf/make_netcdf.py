@@ -146,6 +146,9 @@ def axes():
     with h5py.File("plain-20200131.h5", "w") as h:
         d = h.create_dataset("swath/tb", data=STORED.astype("u2"))
         d.attrs["scale_factor"], d.attrs["_FillValue"] = 0.1, np.uint16(1053)
+        h.create_dataset("lzf", data=np.full((ROWS, COLUMNS), 1000, "u2"), chunks=(ROWS, COLUMNS), compression="lzf")
+        # What a filter cannot make smaller is stored as it is, with a mark that the filter was skipped.
+        h.create_dataset("lzf_skipped", data=STORED.astype("u2"), chunks=(ROWS, COLUMNS), compression="lzf")
         h.create_dataset("transposed", data=STORED.T.astype("u2"))
         d = h.create_dataset("stack", data=np.stack([STORED, STORED + 7]).astype("u2"))
         d.attrs["scale_factor"] = np.float16(0.1)

@@ -9,6 +9,9 @@ namespace IceExtent.Storage.Reading.NetCdf;
 /// </remarks>
 internal static class ChunkTreeCheck
 {
+    /// <summary>What the error says of a chunk that skips filters.</summary>
+    public const string SkipsFilters = "a chunk that skips some of its filters";
+
     private const int HeadBytes = 24;
 
     /// <summary>Verifies a node.</summary>
@@ -52,7 +55,7 @@ internal static class ChunkTreeCheck
         // The library takes the mask of skipped filters one bit off, and would put bytes together wrongly.
         if (BinaryPrimitives.ReadUInt32LittleEndian(key[4..]) != 0)
         {
-            throw new InvalidDataException("A chunk skips some of its filters, which cannot be read.");
+            throw new InvalidDataException(SkipsFilters);
         }
 
         blocks.MustHold(BinaryPrimitives.ReadInt64LittleEndian(key[keyBytes..]), BinaryPrimitives.ReadUInt32LittleEndian(key));

@@ -39,7 +39,7 @@ internal sealed class HdfFile : IDisposable
         {
             using GuardedStream stream = new(path);
             FileSignature.Check(path, stream);
-            ChunkFilters.Register();
+            ChunkUnpacking.Use();
             file = new(path, stream);
             return read(file);
         }

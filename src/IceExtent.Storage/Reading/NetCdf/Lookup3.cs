@@ -3,7 +3,7 @@ using System.Numerics;
 
 namespace IceExtent.Storage.Reading.NetCdf;
 
-/// <summary>The checksum that HDF5 puts on the blocks of its structure: Jenkins' lookup3, in its form for bytes [HDF5].</summary>
+/// <summary>The checksum that HDF5 puts on the blocks of its structure: lookup3 of [Jenkins2006], in its form for bytes, as [HDF5] has it.</summary>
 internal static class Lookup3
 {
     /// <summary>The checksum of some bytes.</summary>

@@ -105,11 +105,14 @@ internal static class NetCdfFaults
                 new("IE2101", path, Sentence(root), "a file that can be read", "Check that the file is there and may be read."), cause),
             _ when root.Message.Contains("Byte order", StringComparison.Ordinal) => new(
                 new("IE2106", where, "numbers in big-endian order", "numbers in little-endian order", "Rewrite the file in little-endian order."), cause),
-            _ when root.Message.StartsWith("Could not find filter", StringComparison.Ordinal) => new(
-                new("IE2106", where, "a compression that is not read", "deflate, shuffle and fletcher32, or none", "Rewrite the file, for instance with nccopy -d 4 -s."), cause),
+            _ when root.Message.StartsWith("Could not find filter", StringComparison.Ordinal) => Packed(where, "a compression that is not read", cause),
+            _ when root.Message == ChunkTreeCheck.SkipsFilters => Packed(where, root.Message, cause),
             _ => Damaged(cells, where, Sentence(root), cause),
         };
     }
+
+    private static FaultException Packed(string where, string found, Exception cause) => new(
+        new("IE2106", where, found, "deflate, shuffle and fletcher32 for all chunks, or none", "Rewrite the file, for instance with nccopy -d 4 -s."), cause);
 
     private static FaultException Damaged(string? cells, string where, string found, Exception cause) => cells is null
         ? new(new("IE2103", where, $"a damaged structure ({found})", "a whole NetCDF-4 file", FetchAgain), cause)
