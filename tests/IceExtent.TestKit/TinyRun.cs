@@ -43,10 +43,9 @@ public sealed class TinyRun : IDisposable
             land[row * Columns] = 1f;
         }
 
-        GridFile.Write(
+        GridFile.WriteUndated(
             PathOf("land.nc"),
             Grid,
-            new DateOnly(2000, 1, 1),
             [new BytePackedVariable("land_area_fraction", "share of land", "land_area_fraction", [], "1", land, BytePacking.Fraction)],
             [new("title", "Invented land")]);
         WriteRunFile();

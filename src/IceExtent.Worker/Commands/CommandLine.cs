@@ -15,9 +15,11 @@ internal static class CommandLine
     {
         RootCommand root = new("Sea-ice concentration, extent and area from passive-microwave brightness temperatures.")
         {
+            DemoCommand.Make(console),
             RunCommand.Make(console),
             PlanCommand.Make(console),
             CheckCommand.Make(console),
+            SceneCommand.Make(console),
         };
         ParseResult parsed = root.Parse(args);
         if (parsed.Errors.Count > 0)

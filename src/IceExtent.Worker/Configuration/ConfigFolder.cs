@@ -11,6 +11,10 @@ internal sealed record ConfigFolder(string Path)
 
     public string Grids => System.IO.Path.Combine(Path, "grids");
 
+    public string Scenes => System.IO.Path.Combine(Path, "scenes");
+
+    public string Demo => System.IO.Path.Combine(Path, "demo");
+
     public string Sensors => System.IO.Path.Combine(Path, "sensors");
 
     /// <summary>The names that files of one kind have, in ordinal order.</summary>

@@ -194,7 +194,7 @@ internal sealed class ConfigScope(ConfigTable table, string path, ICollection<Fa
             return [];
         }
 
-        if (node is ConfigList { Items.Count: > 0 } list && list.Items.TrueForAll(item => item is ConfigTable))
+        if (node is ConfigList list && (list.Items.Count > 0 || !required) && list.Items.TrueForAll(item => item is ConfigTable))
         {
             return [.. list.Items.Cast<ConfigTable>().Select((item, index) => new ConfigScope(item, $"{FullKey(key)}[{index + 1}]", faults))];
         }

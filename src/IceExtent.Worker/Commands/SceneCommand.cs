@@ -1,0 +1,115 @@
+using System.CommandLine;
+using System.Globalization;
+using IceExtent.Grids;
+using IceExtent.Retrieval;
+using IceExtent.Scenes;
+using IceExtent.Scenes.Parameters;
+using IceExtent.Storage.Faults;
+using IceExtent.Storage.Reading;
+using IceExtent.Storage.Writing;
+using IceExtent.Worker.Configuration;
+using IceExtent.Worker.Running;
+
+namespace IceExtent.Worker.Commands;
+
+/// <summary><c>scene</c>: invented brightness temperatures on any grid, for any sensor, with a run file that reads them.</summary>
+internal static class SceneCommand
+{
+    /// <summary>What every output of invented data says.</summary>
+    public const string Notice = "Invented data: no real sea, no real observations.";
+
+    public static Command Make(CommandConsole console)
+    {
+        Option<string> grid = new("--grid") { Description = "A grid of config/grids, or a path ending in .toml.", HelpName = "GRID", DefaultValueFactory = _ => "north-25km" };
+        Option<string> sensor = new("--sensor") { Description = "A sensor of config/sensors, or a path ending in .toml.", HelpName = "SENSOR", DefaultValueFactory = _ => "ssmis-f17" };
+        Option<string?> parameters = new("--scene") { Description = "A scene of config/scenes, or a path ending in .toml; the default is the one of the grid's hemisphere.", HelpName = "SCENE" };
+        Option<DateOnly?> from = CommonOptions.Day("--from", "The first day.");
+        Option<DateOnly?> to = CommonOptions.Day("--to", "The last day.");
+        Option<long> seed = new("--seed") { Description = "Another number gives other ice and weather.", HelpName = "N", DefaultValueFactory = _ => 1 };
+        Option<bool> noTruth = new("--no-truth") { Description = "Leave out the files of the true concentration." };
+        Option<string> output = new("--out") { Description = "The folder to write to.", HelpName = "DIR", Required = true };
+        Option<int> workers = CommonOptions.Workers();
+        (from.Required, to.Required) = (true, true);
+        Command command = new(
+            "scene",
+            "Write invented brightness temperatures with a known truth, and a run file for them.\n\nExample:\n  iceextent scene --grid north-25km --sensor ssmi-f13 --from 2000-01-01 --to 2000-01-31 --out scene")
+        {
+            grid, sensor, parameters, from, to, seed, noTruth, output, workers,
+        };
+        command.SetAction((parsed, cancellation) =>
+        {
+            (DateOnly first, DateOnly last) = (parsed.GetValue(from)!.Value, parsed.GetValue(to)!.Value);
+            string folder = Path.GetFullPath(parsed.GetValue(output)!);
+            (Scene scene, string gridName, string sensorName) = Load(
+                parsed.GetValue(grid)!, parsed.GetValue(sensor)!, parsed.GetValue(parameters), parsed.GetValue(seed), first, last);
+            int days = new SceneFiles(scene, folder, Notice).Write(first, last, !parsed.GetValue(noTruth), parsed.GetValue(workers), cancellation);
+            string runFile = Path.Combine(folder, "run.toml");
+            PublishedFile.WriteText(runFile, RunFileText(gridName, sensorName, scene.Channels, Notice));
+            console.Print(string.Create(CultureInfo.InvariantCulture, $"{days} days of {scene.Sensor.Name} on {scene.Grid.Name}, {last.DayNumber - first.DayNumber + 1 - days} left out as the radiometer would."));
+            console.Print($"Run file: {runFile}");
+            console.Print(Notice);
+            return Task.FromResult(days == 0 ? ExitCode.NoUsableInput : ExitCode.Done);
+        });
+        return command;
+    }
+
+    /// <summary>The run file for a folder that <see cref="SceneFiles"/> filled.</summary>
+    public static string RunFileText(string grid, string sensor, IEnumerable<Channel> channels, string notice) => string.Create(CultureInfo.InvariantCulture, $$"""
+        # {{notice}}
+        output  = "archive"
+        grid    = "{{grid}}"
+        methods = ["nasa-team"]
+        notice  = "{{notice}}"
+
+        [[source]]
+        sensor   = "{{sensor}}"
+        files    = "{{SceneFiles.TemperatureFolder}}/*.nc"
+        channels = { {{string.Join(", ", channels.Select(channel => $"{ChannelNames.NameOf(channel)} = \"{SceneFiles.VariableOf(channel)}\""))}} }
+
+        """);
+
+    private static (Scene Scene, string Grid, string Sensor) Load(
+        string grid, string sensor, string? parameters, long seed, DateOnly from, DateOnly to)
+    {
+        List<Fault> faults = [];
+        ConfigFolder config = ConfigFolder.BesideProgram;
+        string? gridPath = Resolve("--grid", grid, config.Grids, faults);
+        string? sensorPath = Resolve("--sensor", sensor, config.Sensors, faults);
+        LoadedGrid? loaded = gridPath is null ? null : GridLoader.Load(gridPath, faults);
+        Sensor? radiometer = sensorPath is null ? null : SensorLoader.Load(sensorPath, faults);
+        string sceneName = parameters ?? (loaded?.Grid.Hemisphere == Hemisphere.South ? "south" : "north");
+        string? scenePath = Resolve("--scene", sceneName, config.Scenes, faults);
+        SceneParameters? scene = scenePath is null ? null : SceneLoader.Load(scenePath, faults);
+        if (to < from)
+        {
+            faults.Add(new("IE1012", "command line", "--to before --from", "a period of at least one day", "Swap the two dates."));
+        }
+
+        if (faults.Count > 0)
+        {
+            throw new ConfigurationException(faults);
+        }
+
+        LandShare land = LandShareFile.Read(loaded!.LandPath, loaded.Grid);
+        return (new Scene(scene!, loaded.Grid, land, radiometer!, seed), Named(grid, gridPath!), Named(sensor, sensorPath!));
+    }
+
+    private static string Named(string written, string path) => written.EndsWith(".toml", StringComparison.Ordinal) ? path : written;
+
+    private static string? Resolve(string option, string written, string folder, List<Fault> faults)
+    {
+        if (written.EndsWith(".toml", StringComparison.Ordinal))
+        {
+            return Path.GetFullPath(written);
+        }
+
+        IReadOnlyList<string> names = ConfigFolder.NamesIn(folder);
+        if (names.Contains(written))
+        {
+            return Path.Combine(folder, written + ".toml");
+        }
+
+        faults.Add(new("IE1007", $"command line ({option})", $"the unknown name {written}", string.Join(", ", names), NearestName.Suggestion(written, [.. names])));
+        return null;
+    }
+}
