@@ -4,8 +4,10 @@ namespace IceExtent.Retrieval;
 /// <param name="observed">The planes.</param>
 /// <param name="channels">The channels.</param>
 /// <param name="cells">The run.</param>
-public readonly ref struct ChannelSet(BrightnessPlanes observed, IReadOnlyList<Channel> channels, CellRange cells)
+public readonly ref struct ChannelSet(BrightnessPlanes observed, ReadOnlySpan<Channel> channels, CellRange cells)
 {
+    private readonly ReadOnlySpan<Channel> channels = channels;
+
     /// <summary>Whether every channel has a value at a cell, counted from the start of the run.</summary>
     public bool AllPresentAt(int cell)
     {

@@ -14,6 +14,7 @@ public sealed class DayRetrieval
     private readonly WeatherScreens screens;
     private readonly RetrievalScatter scatter;
     private readonly CellMask mask;
+    private readonly Channel[] needed;
 
     /// <summary>Prepares the retrieval of one sensor on one grid.</summary>
     /// <param name="method">The tuned method.</param>
@@ -27,6 +28,7 @@ public sealed class DayRetrieval
         ArgumentNullException.ThrowIfNull(scatter);
         ArgumentNullException.ThrowIfNull(mask);
         (this.method, this.screens, this.scatter, this.mask) = (method, screens, scatter, mask);
+        needed = [.. method.Channels];
     }
 
     /// <summary>The tuned method.</summary>
@@ -77,7 +79,7 @@ public sealed class DayRetrieval
 
         method.Retrieve(observed, cells, into);
         (int noObservation, int noSolution) =
-            MissingCells.Mark(cells.Of(mask.Conditions), new(observed, method.Channels, cells), total, conditions);
+            MissingCells.Mark(cells.Of(mask.Conditions), new(observed, needed, cells), total, conditions);
         int screened3719 = Screen(Channel.V37, screens.Gradient3719Limit, CellConditions.WeatherGradient3719);
         int screened2219 = Screen(Channel.V22, screens.Gradient2219Limit, CellConditions.WeatherGradient2219);
         (int below, int above) = Clipping.Apply(total, cells.Of(into.Multiyear), cells.Of(into.FirstYear), conditions);

@@ -19,6 +19,7 @@ public sealed class TotalsUncertainty
     private readonly double[] areaWeights;
     private readonly double[][] extentWeights;
     private readonly double[] scratch;
+    private readonly double[] terms = new double[ErrorCorrelation.MostPowers];
 
     /// <summary>Makes the working memory.</summary>
     /// <param name="correlation">The correlation of cell errors on the grid.</param>
@@ -70,6 +71,7 @@ public sealed class TotalsUncertainty
         }
 
         float limit = (float)iceFraction;
+        (float knownFraction, float knownError, bool nearLimit) = (float.NaN, float.NaN, false);
         ReadOnlySpan<int> blocks = correlation.BlockOfCell;
         ReadOnlySpan<int> cells = region.Cells;
         ReadOnlySpan<double> areas = region.AreasSquareMeters;
@@ -77,31 +79,47 @@ public sealed class TotalsUncertainty
         {
             int cell = cells[index];
             float fraction = totalFraction[cell];
-            double error = standardErrorFraction[cell];
-            if (!(error > 0.0))
+            float error = standardErrorFraction[cell];
+            if (!(error > 0f))
             {
                 continue; // Missing, or known exactly.
             }
 
+            if (fraction != knownFraction || error != knownError) // Most cells are plain water or full ice like their neighbour.
+            {
+                (knownFraction, knownError) = (fraction, error);
+                nearLimit = ComputeTerms((fraction - iceFraction) / error);
+            }
+
             int block = blocks[cell];
             areaWeights[block] += fraction >= limit ? areas[index] * error : 0.0;
-            double z = (fraction - iceFraction) / error;
-            if (Math.Abs(z) < FarFromLimit)
+            if (nearLimit)
             {
-                AddExtentTerms(block, areas[index], z);
+                for (int term = 0; term < terms.Length; term++)
+                {
+                    extentWeights[term][block] += areas[index] * terms[term];
+                }
             }
         }
     }
 
-    private void AddExtentTerms(int block, double area, double z)
+    // Fills terms for a cell that is z standard errors above the limit; false where it is too far from it to matter.
+    private bool ComputeTerms(double z)
     {
+        if (Math.Abs(z) >= FarFromLimit)
+        {
+            return false;
+        }
+
         double density = InverseRootTwoPi * Math.Exp(-0.5 * z * z);
         double before = 0.0;
         double hermite = 1.0; // He0; then He(n+1) = z·He(n) − n·He(n−1).
-        for (int term = 0; term < extentWeights.Length; term++)
+        for (int term = 0; term < terms.Length; term++)
         {
-            extentWeights[term][block] += area * density * hermite * InverseRootFactorials[term + 1];
+            terms[term] = density * hermite * InverseRootFactorials[term + 1];
             (before, hermite) = (hermite, (z * hermite) - (term * before));
         }
+
+        return true;
     }
 }

@@ -37,7 +37,7 @@ public sealed class RunFileTests : IDisposable
         { "[totals]\nice_fraction = 0.9", "", "IE1011", "not above ice_fraction = 0.9" },
         { "[land]\nlimit = 0.5", "", "IE1003", "limit_fraction" },
         { "", "status = \"finl\"", "IE1007", "Did you mean final?" },
-        { "output = \"again\"", "", "IE1003", "a second time" },
+        { "output = \"again\"", "", "IE1002", "already defined" },
         { "notice = ", "", "IE1002", "not TOML" },
     };
 

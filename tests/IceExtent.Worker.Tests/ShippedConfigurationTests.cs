@@ -15,8 +15,7 @@ public sealed class ShippedConfigurationTests
     [Fact]
     public void Folder_HoldsTheNamedSensorsAndGrids()
     {
-        Assert.Superset(
-            new HashSet<string>(["smmr", "ssmi-f08", "ssmi-f11", "ssmi-f13", "ssmis-f17"]), [.. ConfigFolder.NamesIn(ConfigFolder.BesideProgram.Sensors)]);
+        Assert.Equal(["smmr", "ssmi-f08", "ssmi-f11", "ssmi-f13", "ssmis-f17"], ConfigFolder.NamesIn(ConfigFolder.BesideProgram.Sensors));
         Assert.Equal(14, ConfigFolder.NamesIn(ConfigFolder.BesideProgram.Grids).Count);
     }
 

@@ -11,7 +11,7 @@ internal static class TomlFile
 {
     /// <summary>Reads a file.</summary>
     /// <param name="path">The file.</param>
-    /// <param name="faults">Receives IE1001 when it cannot be read, IE1002 for each syntax error, IE1003 for a key written twice.</param>
+    /// <param name="faults">Receives IE1001 when it cannot be read, IE1002 for each syntax error, a key written twice among them.</param>
     /// <returns>The table of the whole file, or null where there are faults.</returns>
     public static ConfigTable? Read(string path, ICollection<Fault> faults)
     {
@@ -45,17 +45,15 @@ internal static class TomlFile
             return null;
         }
 
-        Builder builder = new(path, faults);
-        return builder.Build(document);
+        return new Builder(path).Build(document);
     }
 
     private static ConfigPosition At(SourceSpan span, string path) => new(path, span.Start.Line + 1, span.Start.Column + 1);
 
-    private sealed class Builder(string path, ICollection<Fault> faults)
+    // The parser has refused keys that come twice or mean two things.
+    private sealed class Builder(string path)
     {
-        private int duplicates;
-
-        public ConfigTable? Build(DocumentSyntax document)
+        public ConfigTable Build(DocumentSyntax document)
         {
             ConfigTable root = new(new ConfigPosition(path, 0, 0));
             AddAll(document.KeyValues, root);
@@ -65,7 +63,7 @@ internal static class TomlFile
                 AddAll(section.Items, target);
             }
 
-            return duplicates == 0 ? root : null;
+            return root;
         }
 
         private ConfigTable Section(ConfigTable root, TableSyntaxBase section)
@@ -76,26 +74,16 @@ internal static class TomlFile
             if (section is TableArraySyntax)
             {
                 ConfigTable item = new(at);
-                if (!parent.Entries.TryGetValue(last, out ConfigNode? existing))
-                {
-                    parent.Entries[last] = new ConfigList(at, [item]);
-                }
-                else if (existing is ConfigList list)
+                if (parent.Entries.TryGetValue(last, out ConfigNode? existing) && existing is ConfigList list)
                 {
                     list.Items.Add(item);
                 }
                 else
                 {
-                    Duplicate(last, at, existing.At);
+                    parent.Entries[last] = new ConfigList(at, [item]);
                 }
 
                 return item;
-            }
-
-            if (parent.Entries.TryGetValue(last, out ConfigNode? known) && known is not ConfigTable)
-            {
-                Duplicate(last, at, known.At);
-                return new ConfigTable(at);
             }
 
             return Descend(parent, [names[^1]]);
@@ -128,22 +116,8 @@ internal static class TomlFile
             {
                 List<(string Name, ConfigPosition At)> names = Names(pair.Key!);
                 ConfigTable owner = Descend(target, names[..^1]);
-                (string last, ConfigPosition at) = names[^1];
-                if (owner.Entries.TryGetValue(last, out ConfigNode? first))
-                {
-                    Duplicate(last, at, first.At);
-                }
-                else
-                {
-                    owner.Entries[last] = Value(pair.Value!);
-                }
+                owner.Entries[names[^1].Name] = Value(pair.Value!);
             }
-        }
-
-        private void Duplicate(string name, ConfigPosition at, ConfigPosition first)
-        {
-            duplicates++;
-            faults.Add(new("IE1003", at.ToString(), $"the key {name} a second time", $"each key once; the first stands in line {first.Line}", "Remove one of the two."));
         }
 
         private List<(string Name, ConfigPosition At)> Names(KeySyntax key)
