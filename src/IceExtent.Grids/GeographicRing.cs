@@ -13,9 +13,9 @@ internal sealed class GeographicRing
         (Vertices, EnclosedPole) = (vertices, enclosedPole);
 
     /// <summary>
-    /// The vertices, the first not repeated at the end. Longitudes run on from vertex to vertex without a jump.
-    /// Between neighbours longitude and latitude change evenly; from the last to the first they do so too, in the
-    /// turn nearer to the last.
+    /// The vertices, with the first one again at the end. Longitudes run on from vertex to vertex without a jump, so
+    /// that the last is whole turns away from the first; between neighbours longitude and latitude change evenly.
+    /// Empty for a ring of less than three places.
     /// </summary>
     public IReadOnlyList<GeoPosition> Vertices { get; }
 
@@ -28,26 +28,23 @@ internal sealed class GeographicRing
     {
         List<GeoPosition> written = WithoutRepeats(ring.CoordinateSequence);
         List<GeoPosition> meridional = WithMeridiansToPoles(written);
-        List<GeoPosition> vertices = new(meridional.Count);
-        double longitude = 0.0;
+        if (meridional.Count < 3)
+        {
+            return new([], null);
+        }
+
+        List<GeoPosition> vertices = new(meridional.Count + 1) { meridional[0] };
         bool wholeTurns = false;
-        for (int index = 0; index < meridional.Count; index++)
+        for (int index = 1; index <= meridional.Count; index++)
         {
-            GeoPosition vertex = meridional[index];
-            GeoPosition before = meridional[(index + meridional.Count - 1) % meridional.Count];
-            double step = ShortWay(before, vertex);
-            wholeTurns |= Math.Abs(vertex.LongitudeDegrees - before.LongitudeDegrees) - Math.Abs(step) > 359.0;
-            longitude = index == 0 ? vertex.LongitudeDegrees : longitude + step;
-            vertices.Add(new(vertex.LatitudeDegrees, longitude));
+            GeoPosition from = meridional[index - 1];
+            GeoPosition to = meridional[index % meridional.Count];
+            double step = ShortWay(from, to);
+            wholeTurns |= Math.Abs(to.LongitudeDegrees - from.LongitudeDegrees) - Math.Abs(step) > 359.0;
+            vertices.Add(to with { LongitudeDegrees = vertices[^1].LongitudeDegrees + step });
         }
 
-        if (vertices.Count == 0)
-        {
-            return new(vertices, null);
-        }
-
-        double turn = vertices[^1].LongitudeDegrees - vertices[0].LongitudeDegrees + ShortWay(meridional[^1], meridional[0]);
-        bool roundTheEarth = Math.Abs(turn) > 180.0;
+        bool roundTheEarth = Math.Abs(vertices[^1].LongitudeDegrees - vertices[0].LongitudeDegrees) > 180.0;
         if (wholeTurns && !roundTheEarth && PlanarArea(vertices) < 1e-12 && !vertices.TrueForAll(IsPole))
         {
             throw Refusal(vertices[0], "has edges that span a whole turn and come back on themselves");
@@ -56,8 +53,8 @@ internal sealed class GeographicRing
         return new(vertices, roundTheEarth ? PoleInside(vertices) : null);
     }
 
-    /// <summary>The change of longitude from one vertex to the next, −180 to 180 degrees.</summary>
-    public static double ShortWay(GeoPosition from, GeoPosition to)
+    // The change of longitude from one vertex to the next, −180 to 180 degrees.
+    private static double ShortWay(GeoPosition from, GeoPosition to)
     {
         double step = Math.IEEERemainder(to.LongitudeDegrees - from.LongitudeDegrees, 360.0);
         return Math.Abs(step) <= MostEdgeDegrees + 1e-9 || (IsPole(from) && IsPole(to))
@@ -68,7 +65,7 @@ internal sealed class GeographicRing
     private static Hemisphere PoleInside(List<GeoPosition> vertices)
     {
         int pole = vertices.FindIndex(IsPole);
-        double latitude = pole >= 0 ? vertices[pole].LatitudeDegrees : vertices.Average(vertex => vertex.LatitudeDegrees);
+        double latitude = pole >= 0 ? vertices[pole].LatitudeDegrees : vertices.Skip(1).Average(vertex => vertex.LatitudeDegrees);
         return latitude >= 0.0 ? Hemisphere.North : Hemisphere.South;
     }
 
@@ -136,11 +133,11 @@ internal sealed class GeographicRing
     private static double PlanarArea(List<GeoPosition> vertices)
     {
         double twice = 0.0;
-        GeoPosition before = vertices[^1];
-        foreach (GeoPosition vertex in vertices)
+        for (int index = 1; index < vertices.Count; index++)
         {
-            twice += (before.LongitudeDegrees * vertex.LatitudeDegrees) - (vertex.LongitudeDegrees * before.LatitudeDegrees);
-            before = vertex;
+            (double fromLatitude, double fromLongitude) = vertices[index - 1];
+            (double toLatitude, double toLongitude) = vertices[index];
+            twice += (fromLongitude * toLatitude) - (toLongitude * fromLatitude);
         }
 
         return 0.5 * Math.Abs(twice);

@@ -38,16 +38,10 @@ public static class MapPlanePolygons
             frame.TopMeters - (frame.Rows * frame.CellMeters),
             frame.TopMeters);
 
-        List<Geometry> parts = [];
-        foreach (Geometry part in PolygonExtracter.GetPolygons(longitudeLatitude))
-        {
-            Geometry projected = ProjectOne(rings, (Polygon)part);
-            if (projected.EnvelopeInternal.Intersects(extent))
-            {
-                parts.Add(projected);
-            }
-        }
-
+        // Repairs may leave pieces along the limit; only those that reach the grid are kept.
+        List<Geometry> parts = [.. PolygonExtracter.GetPolygons(longitudeLatitude)
+            .SelectMany(part => PolygonExtracter.GetPolygons(ProjectOne(rings, (Polygon)part)))
+            .Where(part => part.EnvelopeInternal.Intersects(extent))];
         return parts.Count switch
         {
             0 => GeometryFactory.Default.CreatePolygon(),

@@ -10,13 +10,14 @@ internal sealed class MapPlaneRings
 {
     private const double CourseShare = 0.001;
     private const double MarginCells = 2.0;
-    private const double DiscStepDegrees = 90.0;
 
     private readonly IMapProjection map;
     private readonly double toleranceMeters;
     private readonly double limitDegrees;
     private readonly double sign;
     private readonly Lazy<Geometry> disc;
+
+    private static readonly Polygon Nothing = GeometryFactory.Default.CreatePolygon();
 
     public MapPlaneRings(Grid grid)
     {
@@ -35,60 +36,74 @@ internal sealed class MapPlaneRings
     public Geometry AreaOf(LinearRing written)
     {
         GeographicRing ring = GeographicRing.Read(written);
-        Geometry inside = Inside(ring.Vertices);
-        return ring.EnclosedPole is { } pole && pole != map.Hemisphere
-            ? OverlayNGRobust.Overlay(disc.Value, inside, SpatialFunction.Difference)
-            : inside;
-    }
-
-    private Geometry Inside(IReadOnlyList<GeoPosition> vertices)
-    {
-        if (vertices.Count < 3)
+        List<GeoPosition> kept = Kept(ring.Vertices);
+        bool otherPole = ring.EnclosedPole is { } pole && pole != map.Hemisphere;
+        if (kept.Count == 0)
         {
-            return GeometryFactory.Default.CreatePolygon();
+            return ring.EnclosedPole == map.Hemisphere ? disc.Value : Nothing;
         }
 
-        CoordinateList course = [];
+        Geometry inside = Inside(kept);
+        return otherPole ? OverlayNGRobust.Overlay(disc.Value, inside, SpatialFunction.Difference) : inside;
+    }
+
+    // Leaves out the vertices beyond the limit and puts in the places where edges cross it, so that what lies beyond
+    // shrinks to an arc along it. Longitudes still run on, so the arc goes the way the ring went.
+    private List<GeoPosition> Kept(IReadOnlyList<GeoPosition> vertices)
+    {
+        List<GeoPosition> kept = new(vertices.Count);
         for (int index = 0; index < vertices.Count; index++)
         {
-            AddEdge(course, vertices[index], vertices[(index + 1) % vertices.Count]);
+            GeoPosition vertex = vertices[index];
+            double above = (sign * vertex.LatitudeDegrees) - limitDegrees;
+            if (index > 0)
+            {
+                GeoPosition before = vertices[index - 1];
+                double aboveBefore = (sign * before.LatitudeDegrees) - limitDegrees;
+                if (above * aboveBefore < 0.0)
+                {
+                    double share = aboveBefore / (aboveBefore - above);
+                    kept.Add(new(
+                        sign * limitDegrees,
+                        before.LongitudeDegrees + (share * (vertex.LongitudeDegrees - before.LongitudeDegrees))));
+                }
+            }
+
+            if (above >= 0.0)
+            {
+                kept.Add(vertex);
+            }
+        }
+
+        if (kept.Count > 0)
+        {
+            double turns = vertices[^1].LongitudeDegrees - vertices[0].LongitudeDegrees;
+            kept.Add(kept[0] with { LongitudeDegrees = kept[0].LongitudeDegrees + turns });
+        }
+
+        return kept;
+    }
+
+    private Geometry Inside(List<GeoPosition> vertices)
+    {
+        CoordinateList course = [];
+        for (int index = 1; index < vertices.Count; index++)
+        {
+            AddEdge(course, vertices[index - 1], vertices[index]);
         }
 
         course.CloseRing();
         if (course.Count < 4)
         {
-            return GeometryFactory.Default.CreatePolygon();
+            return Nothing;
         }
 
         Polygon polygon = GeometryFactory.Default.CreatePolygon(course.ToCoordinateArray());
         return polygon.IsValid ? polygon : GeometryFixer.Fix(polygon);
     }
 
-    // Cuts the edge where it crosses the limit, so that its course inside does not bend.
-    private void AddEdge(CoordinateList course, GeoPosition from, GeoPosition to)
-    {
-        to = to with { LongitudeDegrees = from.LongitudeDegrees + GeographicRing.ShortWay(from, to) };
-        double fromAbove = (sign * from.LatitudeDegrees) - limitDegrees;
-        double toAbove = (sign * to.LatitudeDegrees) - limitDegrees;
-        if (fromAbove * toAbove < 0.0)
-        {
-            double share = fromAbove / (fromAbove - toAbove);
-            GeoPosition crossing = new(
-                sign * limitDegrees, from.LongitudeDegrees + (share * (to.LongitudeDegrees - from.LongitudeDegrees)));
-            AddPiece(course, Inward(from), crossing);
-            AddPiece(course, crossing, Inward(to));
-        }
-        else
-        {
-            AddPiece(course, Inward(from), Inward(to));
-        }
-    }
-
-    private GeoPosition Inward(GeoPosition vertex) =>
-        sign * vertex.LatitudeDegrees < limitDegrees ? vertex with { LatitudeDegrees = sign * limitDegrees } : vertex;
-
     // Adds the start and the points between, not the end: the next edge starts there.
-    private void AddPiece(CoordinateList course, GeoPosition from, GeoPosition to)
+    private void AddEdge(CoordinateList course, GeoPosition from, GeoPosition to)
     {
         double longitudes = to.LongitudeDegrees - from.LongitudeDegrees;
         double latitudes = to.LatitudeDegrees - from.LatitudeDegrees;
@@ -129,14 +144,5 @@ internal sealed class MapPlaneRings
         return new(position.XMeters, position.YMeters);
     }
 
-    private Geometry Disc()
-    {
-        List<GeoPosition> circle = [];
-        for (double longitude = 0.0; longitude < 360.0; longitude += DiscStepDegrees)
-        {
-            circle.Add(new(sign * limitDegrees, longitude));
-        }
-
-        return Inside(circle);
-    }
+    private Geometry Disc() => Inside([new(sign * limitDegrees, -180.0), new(sign * limitDegrees, 180.0)]);
 }

@@ -1,4 +1,5 @@
 using NetTopologySuite.Geometries;
+using NetTopologySuite.Geometries.Utilities;
 
 namespace IceExtent.Grids;
 
@@ -26,23 +27,9 @@ public static class PolygonShares
         ArgumentNullException.ThrowIfNull(frame);
         ArgumentNullException.ThrowIfNull(polygons);
         Accumulator accumulator = new(frame);
-        for (int part = 0; part < polygons.NumGeometries; part++)
+        foreach (Geometry part in PolygonExtracter.GetPolygons(polygons))
         {
-            switch (polygons.GetGeometryN(part))
-            {
-                case Polygon polygon:
-                    Add(accumulator, polygon);
-                    break;
-                case GeometryCollection nested:
-                    foreach (Polygon inner in nested.Geometries.OfType<Polygon>())
-                    {
-                        Add(accumulator, inner);
-                    }
-
-                    break;
-                default:
-                    break;
-            }
+            Add(accumulator, (Polygon)part);
         }
 
         return accumulator.Shares();

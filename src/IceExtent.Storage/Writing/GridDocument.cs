@@ -20,31 +20,28 @@ internal sealed class GridDocument : IDisposable
     private readonly List<byte[]> rented = [];
 
     /// <summary>Starts a file with its coordinates and its map.</summary>
-    public GridDocument(Grid grid, DateOnly day)
+    /// <param name="grid">The grid.</param>
+    /// <param name="day">The day, UTC, or null for what holds on every day: the file then has no time.</param>
+    public GridDocument(Grid grid, DateOnly? day)
     {
         this.grid = grid;
         file.Attributes[Conventions] = text.Of("CF-1.11");
 
-        double start = day.DayNumber - Epoch.DayNumber;
-        NetcdfDimension time = NetcdfDimension.WithCoordinate(text, 0, "time", [start]);
-        NetcdfDimension y = NetcdfDimension.WithCoordinate(text, 1, "y", Centers(grid.Rows, grid.RowCenterMeters));
-        NetcdfDimension x = NetcdfDimension.WithCoordinate(text, 2, "x", Centers(grid.Columns, grid.ColumnCenterMeters));
-        NetcdfDimension ends = NetcdfDimension.Bare(text, 3, "nv", 2);
-        planeDimensions = [time, y, x];
-        foreach (NetcdfDimension dimension in (NetcdfDimension[])[time, y, x, ends])
-        {
-            file[dimension.Name] = dimension.Scale;
-        }
-
-        Describe(time, "time", "start of the UTC day", "days since 1970-01-01 00:00:00", "T");
-        time.Scale.Attributes["calendar"] = text.Of("standard");
-        time.Scale.Attributes["bounds"] = text.Of(BoundsName);
+        int timeDimensions = day is null ? 0 : 1;
+        NetcdfDimension y = NetcdfDimension.WithCoordinate(text, timeDimensions, "y", Centers(grid.Rows, grid.RowCenterMeters));
+        NetcdfDimension x = NetcdfDimension.WithCoordinate(text, timeDimensions + 1, "x", Centers(grid.Columns, grid.ColumnCenterMeters));
         Describe(y, "projection_y_coordinate", "y of the center of the cell", "m", "Y");
         Describe(x, "projection_x_coordinate", "x of the center of the cell", "m", "X");
+        if (day is { } dated)
+        {
+            planeDimensions = [AddTime(dated, y, x), y, x];
+        }
+        else
+        {
+            planeDimensions = [y, x];
+            AddScales(y, x);
+        }
 
-        H5Dataset bounds = new(new[] { start, start + 1.0 }, fileDims: [1, 2]);
-        NetcdfDimension.Attach(bounds, [time, ends]);
-        file[BoundsName] = bounds;
         file[MappingName] = Mapping();
     }
 
@@ -134,8 +131,8 @@ internal sealed class GridDocument : IDisposable
         rented.Add(memory);
         stored = MemoryMarshal.Cast<byte, T>(memory.AsSpan(0, length));
         H5Dataset<T[]> plane = new(
-            fileDims: [1, (ulong)grid.Rows, (ulong)grid.Columns],
-            chunks: [1, (uint)grid.Rows, (uint)grid.Columns],
+            fileDims: [.. planeDimensions.Select(dimension => (ulong)dimension.Length)],
+            chunks: [.. planeDimensions.Select(dimension => (uint)dimension.Length)],
             datasetCreation: new(new WholePlane(memory.AsMemory(0, length)), PlaneFilters.Of(sizeof(T))));
         plane.Attributes["long_name"] = text.Of(variable.LongName);
         if (variable.StandardName is { } standardName)
@@ -157,6 +154,30 @@ internal sealed class GridDocument : IDisposable
         plane.Attributes["_FillValue"] = fill;
         plane.Attributes["scale_factor"] = scale;
         plane.Attributes["add_offset"] = offset;
+    }
+
+    private NetcdfDimension AddTime(DateOnly day, NetcdfDimension y, NetcdfDimension x)
+    {
+        double start = day.DayNumber - Epoch.DayNumber;
+        NetcdfDimension time = NetcdfDimension.WithCoordinate(text, 0, "time", [start]);
+        NetcdfDimension ends = NetcdfDimension.Bare(text, 3, "nv", 2);
+        AddScales(time, y, x, ends);
+        Describe(time, "time", "start of the UTC day", "days since 1970-01-01 00:00:00", "T");
+        time.Scale.Attributes["calendar"] = text.Of("standard");
+        time.Scale.Attributes["bounds"] = text.Of(BoundsName);
+
+        H5Dataset bounds = new(new[] { start, start + 1.0 }, fileDims: [1, 2]);
+        NetcdfDimension.Attach(bounds, [time, ends]);
+        file[BoundsName] = bounds;
+        return time;
+    }
+
+    private void AddScales(params ReadOnlySpan<NetcdfDimension> dimensions)
+    {
+        foreach (NetcdfDimension dimension in dimensions)
+        {
+            file[dimension.Name] = dimension.Scale;
+        }
     }
 
     // The variable holds nothing: its attributes are what counts.

@@ -33,6 +33,26 @@ public static class GridFile
         Grid grid,
         DateOnly day,
         IReadOnlyList<GridVariable> variables,
+        IReadOnlyList<KeyValuePair<string, string>> attributes) => Write(path, grid, (DateOnly?)day, variables, attributes);
+
+    /// <summary>Writes one file of what holds on every day, such as land: the same but for <c>time</c>, which it has not.</summary>
+    /// <param name="path">The file; its folder is made when it is missing.</param>
+    /// <param name="grid">The grid of every variable.</param>
+    /// <param name="variables">The variables.</param>
+    /// <param name="attributes">Global text attributes, none empty, in the order they are written after <c>Conventions</c>.</param>
+    /// <exception cref="FaultException">IE3101 to IE3107: the file cannot be written.</exception>
+    /// <exception cref="ArgumentException">A plane has another size than the grid, or a name is taken or empty.</exception>
+    public static void WriteUndated(
+        string path,
+        Grid grid,
+        IReadOnlyList<GridVariable> variables,
+        IReadOnlyList<KeyValuePair<string, string>> attributes) => Write(path, grid, null, variables, attributes);
+
+    private static void Write(
+        string path,
+        Grid grid,
+        DateOnly? day,
+        IReadOnlyList<GridVariable> variables,
         IReadOnlyList<KeyValuePair<string, string>> attributes)
     {
         ArgumentNullException.ThrowIfNull(grid);
