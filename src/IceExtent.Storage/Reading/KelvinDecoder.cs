@@ -1,5 +1,6 @@
 using System.Buffers;
 using System.Numerics;
+using System.Runtime.CompilerServices;
 using System.Runtime.InteropServices;
 
 namespace IceExtent.Storage.Reading;
@@ -100,6 +101,8 @@ internal static class KelvinDecoder
     private readonly struct TableLine<T>(float[] table) : ILine<T>
         where T : unmanaged, IBinaryInteger<T>
     {
+        // Compiled in full at once: a run of one year is over before the runtime would get round to it.
+        [MethodImpl(MethodImplOptions.AggressiveOptimization)]
         public void Decode(ReadOnlySpan<T> stored, Span<float> kelvins)
         {
             ReadOnlySpan<float> entries = table;

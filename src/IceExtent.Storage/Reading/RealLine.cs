@@ -1,4 +1,5 @@
 using System.Numerics;
+using System.Runtime.CompilerServices;
 
 namespace IceExtent.Storage.Reading;
 
@@ -17,6 +18,7 @@ internal static class RealLine
         && Array.TrueForAll(encoding.Missing, mark => mark.Equals((double)(float)mark));
 
     /// <summary>Writes the kelvins of some cells; both spans have one length.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // As in KelvinDecoder.
     public static void Decode(ReadOnlySpan<float> stored, KelvinEncoding encoding, Span<float> kelvins)
     {
         float lowest = (float)LimitOf(encoding.Lowest);

@@ -85,6 +85,13 @@ public sealed class DayTests
     public void List_OneDay_HasItsDate(string file, int year, int month, int day) =>
         Assert.Equal(new DateOnly(year, month, day), Assert.Single(SmallFiles.Days(SmallFiles.Source(file, "tb"))).Date);
 
+    // Worked: the times are the ends of 31 January and 1 February, and the bounds say so.
+    [Fact]
+    public void List_TimesAtTheEndOfTheirDays_AreTakenByTheirBounds() =>
+        Assert.Equal(
+            [new DateOnly(2020, 1, 31), new DateOnly(2020, 2, 1)],
+            SmallFiles.Days(SmallFiles.Source("bounds.nc", "tb")).Select(day => day.Date));
+
     [Fact]
     public void List_PlainHdf5Stack_TakesTheTimeVariableOfTheSameLength() =>
         Assert.Equal(

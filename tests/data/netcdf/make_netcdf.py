@@ -185,6 +185,12 @@ def days():
         nc = start(f"time-{name}.nc", **options)
         put(nc, "tb", "u2", STORED, expect=False, **tenths)
         nc.close()
+    nc = start("bounds.nc", time=[DAY + 1, DAY + 2])
+    nc["time"].bounds = "span"
+    nc.createDimension("two", 2)
+    nc.createVariable("span", "f8", ("time", "two"))[:] = [[DAY, DAY + 1], [DAY + 1, DAY + 2]]
+    put(nc, "tb", "u2", np.stack([STORED, STORED + 7]), **tenths)
+    nc.close()
     nc = start("scalar-time.nc", time=None)
     t = nc.createVariable("when", "i4")
     t.units, t[...] = "seconds since 2020-01-31 23:59:59 -01:00", 0

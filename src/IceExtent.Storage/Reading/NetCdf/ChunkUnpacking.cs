@@ -69,6 +69,7 @@ internal static class ChunkUnpacking
         return source.RanDry ? throw new InvalidDataException("A chunk ends before its deflated data do.") : count;
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // As in KelvinDecoder.
     private static void Join(ReadOnlySpan<byte> low, ReadOnlySpan<byte> high, Span<ushort> numbers)
     {
         int at = 0;

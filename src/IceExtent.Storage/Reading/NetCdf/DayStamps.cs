@@ -73,6 +73,11 @@ internal sealed record DayStamps(IReadOnlyList<(DateOnly Day, int Step)> Days, F
             ? values
             : throw new FaultException(NetCdfFaults.Time(time.Where, $"{NumberTypes.NameOf(time.Dataset.Type)}, not one number a step"));
 
+        if (MiddlesOf(time, times.Length) is { } middles)
+        {
+            times = middles;
+        }
+
         List<(DateOnly, int)> days = new(times.Length);
         List<int> untold = [];
         double? fill = time.Attributes.Number("_FillValue");
@@ -89,6 +94,23 @@ internal sealed record DayStamps(IReadOnlyList<(DateOnly Day, int Step)> Days, F
         }
 
         return new(days, untold.Count == 0 ? null : NetCdfFaults.Time(time.Where, Describe(untold, times)));
+    }
+
+    // Many writers put the time of a daily mean at the end of its day. Where the file says over which span a mean was
+    // taken, the middle of the span tells the day. Source: [CF] section 7.1.
+    private static double[]? MiddlesOf(FileVariable time, int steps)
+    {
+        if (time.Attributes.Text("bounds") is not { } name
+            || time.File.Find(name) is not { } bounds
+            || bounds.Attributes.Has("units")
+            || bounds.Lengths is not [.., 2]
+            || bounds.ReadAll(2 * MostSteps) is not { } ends
+            || ends.Length != 2 * steps)
+        {
+            return null;
+        }
+
+        return [.. Enumerable.Range(0, steps).Select(step => (ends[2 * step] + ends[(2 * step) + 1]) / 2.0)];
     }
 
     private static string Describe(List<int> untold, double[] times) => string.Create(
