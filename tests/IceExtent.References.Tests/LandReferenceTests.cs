@@ -89,7 +89,7 @@ public sealed class LandReferenceTests
     }
 
     /// <summary>
-    /// Origin: printed; value from memory. Fretwell et al. 2013 give 13.924 million km² for the ice sheet of Antarctica
+    /// Origin: printed; value from memory. [Fretwell2013] gives 13.924 million km² for the ice sheet of Antarctica
     /// with its ice shelves; outlines of other years and rock outside the ice allow a hundredth.
     /// </summary>
     [Theory]
