@@ -1,4 +1,5 @@
 using System.Numerics;
+using System.Runtime.CompilerServices;
 using System.Runtime.InteropServices;
 
 namespace IceExtent.Retrieval;
@@ -15,6 +16,7 @@ internal static class CellMasks
     /// <param name="bit">The bit to set.</param>
     /// <param name="masks">Changed in place; at least <c>Vector&lt;ushort&gt;.Count</c> long.</param>
     /// <returns>Minus the number of cells set.</returns>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)] // Called once a vector.
     public static int Set(Vector<int> first, Vector<int> second, ushort bit, Span<ushort> masks)
     {
         Vector<ushort> lanes = Vector.AsVectorUInt16(Vector.Narrow(first, second));

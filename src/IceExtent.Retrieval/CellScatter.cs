@@ -1,4 +1,5 @@
 using System.Numerics;
+using System.Runtime.CompilerServices;
 
 namespace IceExtent.Retrieval;
 
@@ -37,6 +38,7 @@ public static class CellScatter
         }
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveInlining)] // Called once a vector.
     private static Vector<float> Of(Vector<float> fraction, Vector<float> water, Vector<float> ice)
     {
         Vector<float> fromWater = (Vector<float>.One - fraction) * water;

@@ -1,4 +1,5 @@
 using System.Numerics;
+using System.Runtime.CompilerServices;
 
 namespace IceExtent.Retrieval;
 
@@ -62,6 +63,7 @@ public static class Clipping
         return (below, above);
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveInlining)] // Called once a vector.
     private static (Vector<int> Below, Vector<int> Above) Clip(Span<float> totals, Span<float> multiyears, Span<float> firstYears)
     {
         Vector<float> total = new(totals);

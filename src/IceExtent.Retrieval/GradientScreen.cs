@@ -1,4 +1,5 @@
 using System.Numerics;
+using System.Runtime.CompilerServices;
 
 namespace IceExtent.Retrieval;
 
@@ -65,6 +66,7 @@ public static class GradientScreen
         return counted;
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveInlining)] // Called once a vector.
     private static Vector<int> Exceeds(ReadOnlySpan<float> upper, ReadOnlySpan<float> lower, float limit, Span<float> total)
     {
         Vector<float> high = new(upper);

@@ -1,4 +1,5 @@
 using System.Numerics;
+using System.Runtime.CompilerServices;
 
 namespace IceExtent.Retrieval;
 
@@ -67,6 +68,7 @@ public sealed class NasaTeamKernel
         }
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveInlining)] // Called once a vector.
     private (Vector<float> Total, Vector<float> Multiyear) Solve(Vector<float> v19, Vector<float> h19, Vector<float> v37)
     {
         Vector<float> polarizationSum = v19 + h19;
@@ -97,6 +99,7 @@ public sealed class NasaTeamKernel
         private readonly float gradientFactor = (float)(row.Gradient * unit);
         private readonly float productFactor = (float)(row.Product * unit);
 
+        [MethodImpl(MethodImplOptions.AggressiveInlining)] // Called once a vector.
         public Vector<float> At(Vector<float> one, Vector<float> polarization, Vector<float> gradient, Vector<float> product) =>
             (one * constant) + (polarization * polarizationFactor) + (gradient * gradientFactor) + (product * productFactor);
     }

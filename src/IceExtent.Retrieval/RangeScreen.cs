@@ -1,4 +1,5 @@
 using System.Numerics;
+using System.Runtime.CompilerServices;
 
 namespace IceExtent.Retrieval;
 
@@ -51,6 +52,7 @@ public static class RangeScreen
         return counted;
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveInlining)] // Called once a vector.
     private static Vector<int> Outside(Span<float> kelvins, float lowest, float highest)
     {
         Vector<float> value = new(kelvins);

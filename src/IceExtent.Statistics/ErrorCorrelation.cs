@@ -6,7 +6,7 @@ namespace IceExtent.Statistics;
 /// <summary>Sums quantities over all pairs of cells, weighted by how alike their errors are. One a grid; safe to share.</summary>
 /// <remarks>
 /// The errors of two cells at distance d correlate as exp(−d² / (2 L²)). The power k of that is the same form with
-/// L/√k, so one class serves all terms. Cells are gathered in square blocks of at most L/4, and the pair sum over
+/// L/√k, so one class serves all terms. Cells are gathered in square blocks of at most L/3, and the pair sum over
 /// blocks is a separable convolution. Accuracy: see <c>ErrorCorrelationTests</c>, against the sum over all pairs.
 /// </remarks>
 public sealed class ErrorCorrelation
@@ -15,7 +15,7 @@ public sealed class ErrorCorrelation
     public const int MostPowers = 5;
 
     private const double ReachInLengths = 3.5; // exp(−3.5²/2) = 0.2 %: what lies farther off is nothing.
-    private const double BlocksPerLength = 4.0;
+    private const double BlocksPerLength = 3.0;
 
     private readonly int[] blockOfCell;
     private readonly double[][] taps = new double[MostPowers + 1][];

@@ -41,6 +41,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         PublishedFile.RemoveLeftovers(settings.Output);
         string digest = ConfigurationDigest.Of(settings);
         DailySeries series = new(layout, settings.Grid.Hemisphere, settings.Methods, method => TableMetadata(method, digest));
+        Task<DayPreparation> preparing = Task.Run(() => new DayPreparation(settings), CancellationToken.None); // Needs no file, so it need not wait for them.
         RunPlan plan = RunPlanner.Plan(settings, options.From, options.To, cancellation);
         observer.Planned(plan);
         series.CheckSameConfiguration(plan.Days.Select(day => day.Date.Year).Distinct(), digest);
@@ -49,7 +50,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         DateOnly[] lost = [.. plan.Gaps.Select(gap => gap.Date).OfType<DateOnly>().Except(plan.Days.Select(day => day.Date)).Distinct()];
         series.Remove(lost);
         RemoveGrids(lost);
-        await ProcessAsync(plan, series, GlobalAttributes(digest), observer, cancellation);
+        await ProcessAsync(plan, await preparing, series, GlobalAttributes(digest), observer, cancellation);
 
         int done = dayRecords.Count(day => day.Outcome == DayOutcome.Done);
         int exitCode = done == 0 ? ExitCode.NoUsableInput : gaps.Count > 0 ? ExitCode.DoneWithGaps : ExitCode.Done;
@@ -59,6 +60,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
 
     private async Task ProcessAsync(
         RunPlan plan,
+        DayPreparation preparation,
         DailySeries series,
         IReadOnlyList<KeyValuePair<string, string>> attributes,
         IRunObserver observer,
@@ -69,7 +71,6 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             return;
         }
 
-        DayPreparation preparation = new(settings);
         GridArchive? grids = settings.WriteGrids ? new(settings, layout, attributes) : null;
         await RunPipeline.RunAsync(
             plan.Days,
