@@ -87,7 +87,7 @@ public sealed class DayRetrieval
         return new(0, screened3719, screened2219, below, above, noObservation, noSolution);
 
         int Screen(Channel upper, double? limit, CellConditions condition) =>
-            limit is { } value && observed.Has(upper)
+            limit is { } value && observed.Has(upper) && observed.Has(Channel.V19)
                 ? GradientScreen.Apply(
                     cells.Of(observed.Kelvins(upper)),
                     cells.Of(observed.Kelvins(Channel.V19)),

@@ -5,7 +5,10 @@ namespace IceExtent.Retrieval;
 /// <summary>What a sensor needs to know about one hemisphere.</summary>
 /// <param name="TiePoints">The pure surfaces.</param>
 /// <param name="Screens">The weather screens.</param>
-public sealed record HemisphereTuning(TiePoints TiePoints, WeatherScreens Screens);
+/// <param name="Surfaces">The pure surfaces of methods that are linear in temperature, or null where none are known.</param>
+/// <param name="Polarization89">The pure surfaces at 85 to 91 GHz, or null where none are known.</param>
+public sealed record HemisphereTuning(
+    TiePoints TiePoints, WeatherScreens Screens, SurfacePoints? Surfaces = null, PolarizationPoints? Polarization89 = null);
 
 /// <summary>Gradient ratios above which a cell is open water.</summary>
 /// <param name="Gradient3719Limit">GR(37V/19V), without unit.</param>

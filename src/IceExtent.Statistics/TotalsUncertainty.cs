@@ -1,3 +1,5 @@
+using System.Runtime.CompilerServices;
+
 namespace IceExtent.Statistics;
 
 /// <summary>The standard errors of one day's totals, from those of its cells. Reused from day to day; not shared between threads.</summary>
@@ -61,6 +63,7 @@ public sealed class TotalsUncertainty
         return (Math.Sqrt(extentVariance), Math.Sqrt(areaVariance));
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     private void Gather(
         TotalsRegion region, ReadOnlySpan<float> totalFraction, ReadOnlySpan<float> standardErrorFraction, double iceFraction)
     {

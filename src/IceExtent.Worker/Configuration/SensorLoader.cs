@@ -7,6 +7,7 @@ namespace IceExtent.Worker.Configuration;
 internal static class SensorLoader
 {
     private static readonly Channel[] TiePointChannels = [Channel.V19, Channel.H19, Channel.V37];
+    private static readonly Channel[] SurfaceChannels = [Channel.V19, Channel.V37, Channel.H37];
 
     /// <summary>Reads and checks one sensor.</summary>
     /// <returns>The sensor, or null after adding to <paramref name="faults"/>.</returns>
@@ -93,8 +94,10 @@ internal static class SensorLoader
 
         TiePoints? points = Points(scope);
         WeatherScreens? screens = Screens(scope.Table("screens"));
+        SurfacePoints? surfaces = Surfaces(scope);
+        PolarizationPoints? polarization = Polarization(scope);
         scope.RefuseUnknown();
-        return points is null || screens is null ? null : new(points, screens);
+        return points is null || screens is null ? null : new(points, screens, surfaces, polarization);
     }
 
     private static TiePoints? Points(ConfigScope scope)
@@ -120,6 +123,72 @@ internal static class SensorLoader
             Refuse(scope, "tie_points_k", "three surfaces on one line", "surfaces that form a triangle in polarisation and gradient ratio");
             return null;
         }
+    }
+
+    private static SurfacePoints? Surfaces(ConfigScope scope)
+    {
+        ConfigScope? table = scope.Table("surface_points_k", required: false);
+        ChannelKelvins? water = Kelvins(table?.Table("open_water"));
+        ChannelKelvins? first = Kelvins(table?.Table("first_year"));
+        ChannelKelvins? multi = Kelvins(table?.Table("multiyear"));
+        table?.RefuseUnknown();
+        if (water is null || first is null || multi is null)
+        {
+            return null;
+        }
+
+        SurfacePoints points = new(water, first, multi);
+        try
+        {
+            _ = new Bootstrap(points, Grids.Hemisphere.North);
+            _ = new Bristol(points);
+            return points;
+        }
+        catch (ArgumentException)
+        {
+            Refuse(scope, "surface_points_k", "open water on the line of the two ice surfaces", "surfaces that form a triangle in 19v, 37v and 37h");
+            return null;
+        }
+    }
+
+    private static ChannelKelvins? Kelvins(ConfigScope? scope)
+    {
+        if (scope is null)
+        {
+            return null;
+        }
+
+        Dictionary<Channel, double> kelvins = [];
+        foreach (Channel channel in SurfaceChannels)
+        {
+            if (scope.Number(ChannelNames.NameOf(channel), 50.0, 350.0, "K") is { } value)
+            {
+                kelvins.Add(channel, value);
+            }
+        }
+
+        scope.RefuseUnknown();
+        return kelvins.Count == SurfaceChannels.Length ? new(kelvins) : null;
+    }
+
+    private static PolarizationPoints? Polarization(ConfigScope scope)
+    {
+        ConfigScope? table = scope.Table("polarization_89_k", required: false);
+        double? water = table?.Number("open_water", 1.0, 150.0, "K");
+        double? ice = table?.Number("closed_ice", 0.1, 150.0, "K");
+        table?.RefuseUnknown();
+        if (water is null || ice is null)
+        {
+            return null;
+        }
+
+        if (water <= ice)
+        {
+            Refuse(scope, "polarization_89_k", "open water not above closed ice", "a larger difference over water than over ice");
+            return null;
+        }
+
+        return new(water.Value, ice.Value);
     }
 
     private static TiePoint? Point(ConfigScope? scope)

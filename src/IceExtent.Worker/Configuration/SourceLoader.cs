@@ -94,7 +94,18 @@ internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadO
 
         foreach (string name in methods)
         {
-            IConcentrationMethod method = ConcentrationMethods.Create(name, sensor.In(grid.Hemisphere));
+            if (ConcentrationMethods.TryCreate(name, sensor.In(grid.Hemisphere), grid.Hemisphere) is not { } method)
+            {
+                string table = $"[{(grid.Hemisphere == Hemisphere.North ? "north" : "south")}.{ConcentrationMethods.TableOf(name)}]";
+                scope.Faults.Add(new(
+                    "IE1013",
+                    scope.Where("sensor", scope.PositionOf("sensor")),
+                    $"the sensor {sensor.Name}, whose file has no {table}",
+                    $"a sensor with the pure surfaces that {name} needs",
+                    "Leave the method out, or add the table to a sensor file of your own with its source."));
+                continue;
+            }
+
             foreach (Channel channel in method.Channels.Where(channel => !channels.ContainsKey(channel)))
             {
                 scope.Faults.Add(new(

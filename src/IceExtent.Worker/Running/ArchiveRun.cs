@@ -139,7 +139,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
 
     private List<KeyValuePair<string, string>> TableMetadata(string method, string digest)
     {
-        IConcentrationMethod tuned = ConcentrationMethods.Create(method, settings.Sources[0].Sensor.In(settings.Grid.Hemisphere));
+        IConcentrationMethod tuned = ConcentrationMethods.Create(method, settings.Sources[0].Sensor.In(settings.Grid.Hemisphere), settings.Grid.Hemisphere);
         List<KeyValuePair<string, string>> metadata =
         [
             new("method", method),

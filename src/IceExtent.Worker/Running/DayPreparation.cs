@@ -38,6 +38,6 @@ internal sealed class DayPreparation
 
         HemisphereTuning tuning = source.Sensor.In(Settings.Grid.Hemisphere);
         return [.. Settings.Methods.Select(name =>
-            new DayRetrieval(ConcentrationMethods.Create(name, tuning), tuning.Screens, source.Sensor.Scatter, mask))];
+            new DayRetrieval(ConcentrationMethods.Create(name, tuning, Settings.Grid.Hemisphere), tuning.Screens, source.Sensor.Scatter, mask))];
     }
 }
