@@ -122,8 +122,9 @@ internal sealed class PartFile : IDisposable
         {
             return new(part, options);
         }
-        catch (DirectoryNotFoundException)
+        catch (Exception missing) when (missing is DirectoryNotFoundException or FileNotFoundException)
         {
+            // The second kind comes when another thread has made the folder between the refusal and this line.
             Directory.CreateDirectory(Path.GetDirectoryName(part)!);
             return new(part, options);
         }
