@@ -1,6 +1,6 @@
 #!/usr/bin/env bash
 # Times whole runs on a year of daily files next to the time needed only to read and inflate the same bytes.
-# Usage: scripts/bench.sh [ROUNDS] [FOLDER]   (default 5 rounds; the folder keeps the input, about 160 MB, for the next time)
+# Usage: scripts/bench.sh [ROUNDS] [FOLDER]   (default 5 rounds; the folder keeps the input, about 260 MB, for the next time)
 # With TEN_YEARS=1 in the environment it also runs 3,660 days once, to hold peak memory against the number of days.
 set -euo pipefail
 root=$(cd "$(dirname "${BASH_SOURCE[0]}")/.." && pwd)

@@ -5,7 +5,7 @@ root=$(cd "$(dirname "${BASH_SOURCE[0]}")/.." && pwd)
 cd "$root"
 
 # Programs that read our files independently of us; the tests that use them fail where they are missing.
-packages=(netcdf-bin python3-numpy python3-netcdf4 python3-xarray gdal-bin)
+packages=(netcdf-bin python3-numpy python3-netcdf4 python3-xarray gdal-bin cdo)
 missing=()
 for package in "${packages[@]}"; do
   dpkg -s "$package" >/dev/null 2>&1 || missing+=("$package")

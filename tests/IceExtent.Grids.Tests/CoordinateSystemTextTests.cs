@@ -5,7 +5,7 @@ namespace IceExtent.Grids.Tests;
 
 /// <summary>
 /// Origin: independent. The texts under tests/data/crs-texts are those that PROJ 9.1.1 was given; what it made of them
-/// stands in tests/data/crs-check.csv, made as tests/data/README-a.md says. A text that changes has to be checked anew.
+/// stands in tests/data/crs-check.csv, made as tests/data/README.md says. A text that changes has to be checked anew.
 /// </summary>
 public sealed class CoordinateSystemTextTests
 {

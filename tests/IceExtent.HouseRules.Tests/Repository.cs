@@ -3,6 +3,8 @@ namespace IceExtent.HouseRules.Tests;
 /// <summary>The checkout the tests run from.</summary>
 internal static class Repository
 {
+    private static readonly string[] NotSources = [".git", "artifacts", "bin", "node_modules", "obj", "TestResults"];
+
     /// <summary>The folder that holds the solution.</summary>
     public static string Root { get; } = FindRoot();
 
@@ -11,6 +13,12 @@ internal static class Repository
         .EnumerateFiles(Path.Combine([Root, .. folder]), "*.cs", SearchOption.AllDirectories)
         .Where(file => !file.Contains($"{Path.DirectorySeparatorChar}obj{Path.DirectorySeparatorChar}", StringComparison.Ordinal)
             && !file.Contains($"{Path.DirectorySeparatorChar}bin{Path.DirectorySeparatorChar}", StringComparison.Ordinal))
+        .Order(StringComparer.Ordinal);
+
+    /// <summary>Every page of text, build output left out.</summary>
+    public static IEnumerable<string> Pages() => Directory
+        .EnumerateFiles(Root, "*.md", SearchOption.AllDirectories)
+        .Where(file => !Path.GetRelativePath(Root, file).Split(Path.DirectorySeparatorChar).Any(part => NotSources.Contains(part)))
         .Order(StringComparer.Ordinal);
 
     /// <summary>A file's text.</summary>

@@ -10,7 +10,7 @@ public sealed class CellAreaReferenceTests
 
     /// <summary>
     /// Origin: independent, GeographicLib through pyproj 3.4.1, the cell's outline in 800 points; tests/data/cell-areas.csv,
-    /// made as tests/data/README-a.md says. The area at the centre is off by what the scale bends within a cell.
+    /// made as tests/data/README.md says. The area at the centre is off by what the scale bends within a cell.
     /// </summary>
     [Theory]
     [MemberData(nameof(Grids))]

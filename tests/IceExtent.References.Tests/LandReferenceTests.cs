@@ -20,7 +20,7 @@ public sealed class LandReferenceTests
 
     /// <summary>
     /// Origin: independent; 10,000 points counted in each of 15 coastal cells a grid, with PROJ 9.1.1 and Matplotlib;
-    /// tests/data/land-shares.csv, made as tests/data/README-a.md says. Half a step of storage is 0.002, counting adds 0.001.
+    /// tests/data/land-shares.csv, made as tests/data/README.md says. Half a step of storage is 0.002, counting adds 0.001.
     /// </summary>
     [Theory]
     [InlineData("north-25km")]

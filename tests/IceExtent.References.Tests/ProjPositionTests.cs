@@ -4,7 +4,7 @@ using IceExtent.TestKit;
 namespace IceExtent.References.Tests;
 
 /// <summary>Compares 20 positions on each built-in grid with PROJ 9.1.1.</summary>
-/// <remarks>Origin: independent; tests/data/proj-positions.csv, made as tests/data/README-a.md says.</remarks>
+/// <remarks>Origin: independent; tests/data/proj-positions.csv, made as tests/data/README.md says.</remarks>
 public sealed class ProjPositionTests
 {
     private const double ToleranceMeters = 1e-6;

@@ -50,19 +50,4 @@ public sealed class ShippedConfigurationTests
         Assert.StartsWith(grid!.Grid.Hemisphere == Hemisphere.North ? "north-" : "south-", name, StringComparison.Ordinal);
         Assert.True(File.Exists(grid.LandPath));
     }
-
-    /// <summary>Every number in a sensor's file has a source in a comment above it.</summary>
-    [Theory]
-    [MemberData(nameof(Sensors))]
-    public void Sensor_Shipped_TellsItsSources(string name)
-    {
-        string[] lines = File.ReadAllLines(Path.Combine(ConfigFolder.BesideProgram.Sensors, name + ".toml"));
-        string comment = string.Empty;
-        foreach (string line in lines)
-        {
-            comment = line.StartsWith('#') ? comment + line : line.Length == 0 ? string.Empty : comment;
-            bool holdsNumber = line.Contains('=', StringComparison.Ordinal) && !line.StartsWith('#') && !line.StartsWith("title", StringComparison.Ordinal);
-            Assert.False(holdsNumber && comment.Length == 0, $"{name}: no source above {line}");
-        }
-    }
 }

@@ -41,7 +41,7 @@ public sealed class OceanModelReferenceTests
         }
     }
 
-    // Origin: independent. tests/data/scenes/ocean_model.py (NumPy; see tests/data/README-d.md), printed to 1e-6 K.
+    // Origin: independent. tests/data/scenes/ocean_model.py (NumPy; see tests/data/README.md), printed to 1e-6 K.
     [Fact]
     public void Brightness_RandomStates_AgreeWithNumpy()
     {

@@ -5,7 +5,7 @@ namespace IceExtent.Scenes.Tests.Emission;
 
 public sealed class SeaWaterReferenceTests
 {
-    // Origin: independent. NumPy working of the same formulas (tests/data/README-d.md), printed to 0.001. It shows that
+    // Origin: independent. NumPy working of the same formulas (tests/data/README.md), printed to 0.001. It shows that
     // the formula is coded as written down, not that its constants, which are from memory, are right.
     [Theory]
     [Trait("Reference", "Wentz2000")]

@@ -5,7 +5,7 @@ namespace IceExtent.Scenes.Tests.Fields;
 
 public sealed class NormalTableTests
 {
-    // Origin: independent. SciPy (tests/data/README-d.md), printed to 1e-12.
+    // Origin: independent. SciPy (tests/data/README.md), printed to 1e-12.
     [Fact]
     public void Quantile_Shares_AgreeWithScipy()
     {

@@ -219,7 +219,7 @@ public sealed class DamagedFileTests
         }
     }
 
-    // Origin independent: h5py, see tests/data/README-b.md.
+    // Origin independent: h5py, see tests/data/README.md.
     private static (int Start, int Bytes) FirstChunkOf(string variable)
     {
         string[] cells = File.ReadLines(SmallFiles.PathOf("chunks.csv")).Select(line => line.Split(',')).Single(line => line[1] == variable);

@@ -23,7 +23,7 @@ public sealed class DayTests
         return cases;
     }
 
-    // Origin independent: cftime, see tests/data/README-b.md.
+    // Origin independent: cftime, see tests/data/README.md.
     [Theory]
     [MemberData(nameof(Times))]
     public void DayOf_TimeInAnyUnit_AgreesWithCftime(string units, string calendar, double value, DateOnly expected) =>

@@ -27,7 +27,7 @@ public sealed class LandShareFileTests
 
     /// <summary>
     /// Origin: independent; tests/data/land-sample.nc was written by netCDF-C with both axes turned round, as
-    /// tests/data/README-a.md says. Values count up in sixteenths along the rows; the second cell has none.
+    /// tests/data/README.md says. Values count up in sixteenths along the rows; the second cell has none.
     /// </summary>
     [Fact]
     public void Read_FileOfAnotherProgramTurnedRound_IsTurnedBack()

@@ -68,7 +68,7 @@ internal static class SmallFiles
             : Assert.Throws<FaultException>(() => Read(source, inventory.Days[0])).Fault;
     }
 
-    /// <summary>What netCDF4-python reads, turned to the grid: origin independent, see tests/data/README-b.md.</summary>
+    /// <summary>What netCDF4-python reads, turned to the grid: origin independent, see tests/data/README.md.</summary>
     public static Dictionary<(string File, string Variable, int Step), double[]> Independent { get; } = File
         .ReadLines(PathOf("kelvins.csv"))
         .Skip(1)

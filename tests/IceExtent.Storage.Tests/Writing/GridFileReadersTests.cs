@@ -30,7 +30,7 @@ public sealed class GridFileReadersTests(SampleDayFile sample) : IClassFixture<S
 {
     private static readonly Grid Grid = ConfigGrids.Get("north-25km");
 
-    /// <summary>The text was made by ncdump 4.9.0; see tests/data/README-c.md. Pinned as a whole; the types in it are asserted below.</summary>
+    /// <summary>The text was made by ncdump 4.9.0; see tests/data/README.md. Pinned as a whole; the types in it are asserted below.</summary>
     [Fact]
     public void Ncdump_Header_IsTheCommittedText()
     {

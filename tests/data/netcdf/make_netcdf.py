@@ -1,7 +1,7 @@
 #!/usr/bin/python3
 """Writes the small files that the readers are tested with, and what netCDF4-python reads from them.
 
-Run it in this folder: it writes *.nc, *.h5, kelvins.csv, times.csv and chunks.csv. Versions: ../README-b.md.
+Run it in this folder: it writes *.nc, *.h5, kelvins.csv, times.csv and chunks.csv. Versions: ../README.md.
 Every plane has 6 rows and 5 columns of 25 km on EPSG:3411, x from -50 to 50 km, y from 62.5 to -62.5 km.
 The stored number of cell c (row-major from the top) is STORED[c] or a simple function of it.
 """
