@@ -2,7 +2,7 @@ namespace IceExtent.Retrieval;
 
 /// <summary>Everything between one day's brightness temperatures and its concentration, for one method.</summary>
 /// <remarks>
-/// The steps, in order: retrieve, screen weather, empty land and polar gap, clip, standard error. The range check of
+/// The steps, in order: retrieve, empty land and polar gap, screen weather, clip, standard error. The range check of
 /// the temperatures comes before them, once a day: <see cref="CheckRange"/>. Immutable and safe to use from several
 /// threads. The cells are handled in runs that stay in the processor's cache.
 /// </remarks>

@@ -20,7 +20,7 @@ public sealed record DailyRow
     /// <summary>The region's name; <c>hemisphere</c> is every ocean cell of the grid.</summary>
     public required string Region { get; init; }
 
-    /// <summary>Area of cells of at least 15 %, the polar gap included; null where too little was observed to say.</summary>
+    /// <summary>Area of cells of at least 15 %, the polar gap included; null where not one cell outside the gap was observed.</summary>
     public required double? ExtentSquareKilometers { get; init; }
 
     /// <summary>Standard error of the extent.</summary>

@@ -6,10 +6,10 @@ internal static class ExitCode
     /// <summary>Everything was done.</summary>
     public const int Done = 0;
 
-    /// <summary>Done, but at least one day that had input became a gap.</summary>
+    /// <summary>Done, but at least one day or file that was there could not be used.</summary>
     public const int DoneWithGaps = 1;
 
-    /// <summary>The run file, a configuration file or the command line cannot be used; no data were read.</summary>
+    /// <summary>The run file, a configuration file or the command line cannot be used, or an output cannot be written.</summary>
     public const int Configuration = 2;
 
     /// <summary>Not one day could be used.</summary>
