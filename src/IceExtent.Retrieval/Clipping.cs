@@ -63,6 +63,31 @@ public static class Clipping
         return (below, above);
     }
 
+    /// <summary>Writes clipped fractions without counting.</summary>
+    /// <param name="fraction">Concentrations; NaN is missing.</param>
+    /// <param name="clipped">Receives 0 to 1; NaN stays. As long as <paramref name="fraction"/>.</param>
+    /// <exception cref="ArgumentException">The spans differ in length.</exception>
+    public static void Copy(ReadOnlySpan<float> fraction, Span<float> clipped)
+    {
+        if (clipped.Length != fraction.Length)
+        {
+            throw new ArgumentException("Both planes must have the same number of cells.", nameof(clipped));
+        }
+
+        int cell = 0;
+        for (; cell <= fraction.Length - Vector<float>.Count; cell += Vector<float>.Count)
+        {
+            Vector<float> value = new(fraction[cell..]);
+            Vector<float> held = Vector.ConditionalSelect(Vector.LessThan(value, Vector<float>.Zero), Vector<float>.Zero, value);
+            Vector.ConditionalSelect(Vector.GreaterThan(held, Vector<float>.One), Vector<float>.One, held).CopyTo(clipped[cell..]);
+        }
+
+        for (; cell < fraction.Length; cell++)
+        {
+            clipped[cell] = fraction[cell] < 0f ? 0f : fraction[cell] > 1f ? 1f : fraction[cell];
+        }
+    }
+
     [MethodImpl(MethodImplOptions.AggressiveInlining)] // Called once a vector.
     private static (Vector<int> Below, Vector<int> Above) Clip(Span<float> totals, Span<float> multiyears, Span<float> firstYears)
     {

@@ -10,6 +10,7 @@ public sealed class ConcentrationPlanes
     private readonly float[] multiyear;
     private readonly float[] standardError;
     private readonly float[] firstYear;
+    private readonly float[] unscreened;
     private readonly ushort[] conditions;
 
     /// <summary>Makes room for one grid.</summary>
@@ -21,6 +22,7 @@ public sealed class ConcentrationPlanes
         multiyear = new float[cellCount];
         standardError = new float[cellCount];
         firstYear = new float[cellCount];
+        unscreened = new float[cellCount];
         conditions = new ushort[cellCount];
     }
 
@@ -29,6 +31,9 @@ public sealed class ConcentrationPlanes
 
     /// <summary>Sea-ice concentration of all ice. Unit: 1.</summary>
     public Span<float> Total => total;
+
+    /// <summary>The total as it would be without weather screens, clipped to 0 to 1. Unit: 1.</summary>
+    public Span<float> Unscreened => unscreened;
 
     /// <summary>Concentration of multiyear ice (type B in the south). Unit: 1. NaN everywhere for a method that cannot tell types apart.</summary>
     public Span<float> Multiyear => multiyear;
@@ -47,6 +52,9 @@ public sealed class ConcentrationPlanes
 
     /// <summary>Multiyear ice as memory, for writers.</summary>
     public ReadOnlyMemory<float> MultiyearMemory => multiyear;
+
+    /// <summary>The unscreened total as memory, for writers.</summary>
+    public ReadOnlyMemory<float> UnscreenedMemory => unscreened;
 
     /// <summary>First-year ice as memory, for writers.</summary>
     public ReadOnlyMemory<float> FirstYearMemory => firstYear;

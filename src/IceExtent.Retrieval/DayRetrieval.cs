@@ -80,6 +80,7 @@ public sealed class DayRetrieval
         method.Retrieve(observed, cells, into);
         (int noObservation, int noSolution) =
             MissingCells.Mark(cells.Of(mask.Conditions), new(observed, needed, cells), total, conditions);
+        Clipping.Copy(total, cells.Of(into.Unscreened));
         int screened3719 = Screen(Channel.V37, screens.Gradient3719Limit, CellConditions.WeatherGradient3719);
         int screened2219 = Screen(Channel.V22, screens.Gradient2219Limit, CellConditions.WeatherGradient2219);
         (int below, int above) = Clipping.Apply(total, cells.Of(into.Multiyear), cells.Of(into.FirstYear), conditions);

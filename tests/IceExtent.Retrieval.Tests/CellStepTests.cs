@@ -69,6 +69,25 @@ public sealed class CellStepTests
                     && first[cell] == total[cell] - multi[cell]).All(right => right);
         });
 
+    [Fact]
+    public void Copy_AnyLength_ClipsEachCellAlone() =>
+        Gen.Single[-1, 2].Array[0, 40].Sample(values =>
+        {
+            float[] clipped = new float[values.Length];
+            Clipping.Copy(values, clipped);
+            return values.Select((value, cell) => clipped[cell] == Math.Clamp(value, 0f, 1f)).All(right => right);
+        });
+
+    [Fact]
+    public void Copy_Missing_StaysMissing()
+    {
+        float[] clipped = new float[20];
+
+        Clipping.Copy(Enumerable.Repeat(float.NaN, 20).ToArray(), clipped);
+
+        Assert.All(clipped, value => Assert.True(float.IsNaN(value)));
+    }
+
     /// <summary>
     /// Origin: worked, σ² = (1 − C)²σ_w² + C²σ_i² with 2 % and 3 %: at C = 0.2, sqrt(0.8²·4 + 0.2²·9) = 1.709 %.
     /// Formula: [Lavergne2019].

@@ -37,6 +37,8 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
             },
             new PackedVariable(
                 "concentration_se", "standard error of the sea-ice concentration", "sea_ice_area_fraction standard_error", Nothing, "1", planes.StandardErrorMemory, Packing.Fraction),
+            new PackedVariable(
+                "concentration_unscreened", "sea-ice concentration as it would be without weather screens, clipped to 0-1", null, Nothing, "1", planes.UnscreenedMemory, Packing.Fraction),
         ];
         if (method.SeparatesIceTypes)
         {
