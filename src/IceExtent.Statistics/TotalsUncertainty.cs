@@ -36,7 +36,7 @@ public sealed class TotalsUncertainty
             extentWeights[term] = new double[correlation.BlockCount];
         }
 
-        scratch = new double[2 * correlation.BlockCount];
+        scratch = new double[correlation.BlockCount];
     }
 
     /// <summary>Computes both standard errors.</summary>

@@ -32,6 +32,9 @@ public sealed partial class ManualRules
     [GeneratedRegex(@"\(ushort\)CellConditions\.\w+, ""([a-z0-9_]+)""")]
     private static partial Regex Flag { get; }
 
+    [GeneratedRegex(@"string MethodName = ""([a-z0-9-]+)""")]
+    private static partial Regex Method { get; }
+
     public static TheoryData<string> Pages() => [.. Repository.Pages().Select(page => Path.GetRelativePath(Repository.Root, page))];
 
     [Theory]
@@ -65,6 +68,18 @@ public sealed partial class ManualRules
             .SelectMany(pair => WordsOf(pair.Item1, pair.Item2))];
 
         string[] untold = [.. words.Where(word => !Regex.IsMatch(dictionary, $@"`(?:\[*|[^`\n]*\.){word}\b[^`\n]*`"))];
+
+        Assert.Empty(untold);
+    }
+
+    [Fact]
+    public void EveryMethod_HasItsSectionAndItsRow()
+    {
+        string[] headings = [.. Heading.Matches(Repository.Read("docs", "METHODS.md")).Select(match => match.Groups[1].Value)];
+        string dictionary = Repository.Read("docs", "DATA.md");
+
+        string[] untold = [.. WordsOf(Method, Path.Combine("src", "IceExtent.Retrieval"))
+            .Where(name => !headings.Any(heading => heading.EndsWith($"(`{name}`)", StringComparison.Ordinal)) || !dictionary.Contains($"| `{name}` |", StringComparison.Ordinal))];
 
         Assert.Empty(untold);
     }

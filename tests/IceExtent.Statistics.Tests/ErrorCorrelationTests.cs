@@ -26,7 +26,7 @@ public sealed class ErrorCorrelationTests
             blocks[correlation.BlockOfCell[cell]] += weights[cell];
         }
 
-        double fast = correlation.PairSum(blocks, power, new double[2 * correlation.BlockCount]);
+        double fast = correlation.PairSum(blocks, power, new double[correlation.BlockCount]);
 
         double exact = 0.0;
         for (int i = 0; i < weights.Length; i++)
@@ -50,7 +50,7 @@ public sealed class ErrorCorrelationTests
         double[] blocks = new double[correlation.BlockCount];
         blocks[17] = 3.0;
 
-        Assert.Equal(9.0, correlation.PairSum(blocks, 2, new double[2 * correlation.BlockCount]), 1e-12);
+        Assert.Equal(9.0, correlation.PairSum(blocks, 2, new double[correlation.BlockCount]), 1e-12);
     }
 
     [Fact]
