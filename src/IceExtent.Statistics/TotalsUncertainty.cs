@@ -74,7 +74,9 @@ public sealed class TotalsUncertainty
         }
 
         float limit = (float)iceFraction;
+        // Neighbours in a block are often plain water or full ice alike: their areas are added up before they are spread.
         (float knownFraction, float knownError, bool nearLimit) = (float.NaN, float.NaN, false);
+        (int runBlock, double runArea) = (0, 0.0);
         ReadOnlySpan<int> blocks = correlation.BlockOfCell;
         ReadOnlySpan<int> cells = region.Cells;
         ReadOnlySpan<double> areas = region.AreasSquareMeters;
@@ -88,21 +90,32 @@ public sealed class TotalsUncertainty
                 continue; // Missing, or known exactly.
             }
 
-            if (fraction != knownFraction || error != knownError) // Most cells are plain water or full ice like their neighbour.
+            int block = blocks[cell];
+            bool alike = fraction == knownFraction && error == knownError;
+            if (!alike || block != runBlock)
+            {
+                Spread(runBlock, runArea, knownFraction >= limit ? knownError : 0.0, nearLimit);
+                (runBlock, runArea) = (block, 0.0);
+            }
+
+            if (!alike)
             {
                 (knownFraction, knownError) = (fraction, error);
                 nearLimit = ComputeTerms((fraction - iceFraction) / error);
             }
 
-            int block = blocks[cell];
-            areaWeights[block] += fraction >= limit ? areas[index] * error : 0.0;
-            if (nearLimit)
-            {
-                for (int term = 0; term < terms.Length; term++)
-                {
-                    extentWeights[term][block] += areas[index] * terms[term];
-                }
-            }
+            runArea += areas[index];
+        }
+
+        Spread(runBlock, runArea, knownFraction >= limit ? knownError : 0.0, nearLimit);
+    }
+
+    private void Spread(int block, double area, double iceError, bool nearLimit)
+    {
+        areaWeights[block] += area * iceError;
+        for (int term = 0; nearLimit && term < terms.Length; term++)
+        {
+            extentWeights[term][block] += area * terms[term];
         }
     }
 

@@ -94,6 +94,41 @@ public sealed class RunFileTests : IDisposable
     }
 
     [Fact]
+    public void Load_NoChannelAtAll_IsRefusedBeforeAnyFileIsRead()
+    {
+        run.WriteDay(new(1990, 1, 1), _ => 0.5);
+        run.Write("run.toml", File.ReadAllText(run.RunFile).Replace("{ 19v = \"v19\", 19h = \"h19\", 22v = \"v22\", 37v = \"v37\", 37h = \"h37\" }", "{}", StringComparison.Ordinal));
+
+        ConfigurationException faulty = Assert.Throws<ConfigurationException>(() => RunFileLoader.Load(run.RunFile, ConfigFolder.BesideProgram));
+
+        Assert.Equal(["IE1009", "IE1009", "IE1009"], faulty.Faults.Select(fault => fault.Code)); // 19v, 19h and 37v.
+    }
+
+    [Fact]
+    public void Load_RawScaleOfZero_IsRefused()
+    {
+        run.WriteDay(new(1990, 1, 1), _ => 0.5);
+        run.Write("run.toml", File.ReadAllText(run.RunFile).Replace("scale_k = 0.1", "scale_k = 0.0", StringComparison.Ordinal));
+
+        ConfigurationException faulty = Assert.Throws<ConfigurationException>(() => RunFileLoader.Load(run.RunFile, ConfigFolder.BesideProgram));
+
+        Assert.Equal("IE1006", Assert.Single(faulty.Faults).Code);
+    }
+
+    [Fact]
+    public void Load_SensorWithoutSurfacesForTheMethod_IsRefusedByName()
+    {
+        run.WriteDay(new(1990, 1, 1), _ => 0.5);
+        run.Write("run.toml", File.ReadAllText(run.RunFile).Replace("\"nasa-team\"", "\"bristol\"", StringComparison.Ordinal));
+
+        ConfigurationException faulty = Assert.Throws<ConfigurationException>(() => RunFileLoader.Load(run.RunFile, ConfigFolder.BesideProgram));
+
+        Fault fault = Assert.Single(faulty.Faults);
+        Assert.Equal("IE1013", fault.Code);
+        Assert.Contains("[north.surface_points_k]", fault.Found, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void Load_SensorWithSingularTiePoints_IsRefused()
     {
         run.WriteDay(new(1990, 1, 1), _ => 0.5);

@@ -53,6 +53,25 @@ public static class PublishedFile
         return Path.Join(Path.GetDirectoryName(full), $".{Path.GetFileName(full)}{PartSuffix}");
     }
 
+    /// <summary>Deletes a published file; nothing happens where there is none.</summary>
+    /// <param name="path">The file.</param>
+    /// <exception cref="FaultException">IE3101 to IE3107: it cannot be deleted.</exception>
+    public static void Delete(string path)
+    {
+        try
+        {
+            File.Delete(path);
+        }
+        catch (DirectoryNotFoundException)
+        {
+            return; // Nothing was ever published there.
+        }
+        catch (Exception cause) when (WriteFaults.Covers(cause))
+        {
+            throw WriteFaults.From(Path.GetFullPath(path), cause);
+        }
+    }
+
     /// <summary>Deletes what killed runs left behind in a folder and below it.</summary>
     /// <param name="folder">A folder that no run is writing to; nothing happens where there is none.</param>
     /// <returns>How many files were deleted.</returns>

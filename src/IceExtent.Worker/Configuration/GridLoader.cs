@@ -52,7 +52,9 @@ internal static class GridLoader
         double? flattening = scope.Number("inverse_flattening", 290.0, 310.0, string.Empty);
         string? pole = scope.Name("hemisphere", ["north", "south"]);
         double? origin = scope.Number("origin_longitude", -180.0, 360.0, "degrees east");
-        double? trueScale = scope.Number("true_scale_latitude", -89.9, 89.9, "degrees north", required: kind == "polar-stereographic");
+        double? trueScale = kind == "polar-equal-area" // It has no such latitude: the key is unknown there.
+            ? null
+            : scope.Number("true_scale_latitude", -89.9, 89.9, "degrees north", required: kind == "polar-stereographic");
         if (kind is null || axis is null || flattening is null || pole is null || origin is null)
         {
             return null;

@@ -31,7 +31,7 @@ internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadO
         string? status = scope.Name("status", ["final", "provisional"], required: false);
         RawLayout? raw = scope.Has("raw") && scope.Table("raw") is { } table ? Raw(table) : null;
         scope.RefuseUnknown();
-        if (sensor is not null && channels.Count > 0 && grid is not null)
+        if (sensor is not null && scope.Has("channels") && grid is not null)
         {
             CheckChannels(scope, sensor, channels, grid);
         }
@@ -130,6 +130,11 @@ internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadO
         int? header = scope.WholeNumber("header_bytes", 0, 1 << 20, required: false);
         bool? topFirst = scope.Flag("top_row_first", required: false);
         scope.RefuseUnknown();
+        if (scale == 0.0)
+        {
+            scope.Faults.Add(new("IE1006", scope.Where("scale_k", scope.PositionOf("scale_k")), "0", "a number that is not 0", "Write the K that one stored unit stands for."));
+        }
+
         if (pattern is not null && !(pattern.Contains("{date:", StringComparison.Ordinal) && pattern.Contains("{channel}", StringComparison.Ordinal)))
         {
             scope.Faults.Add(new("IE1006", scope.Where("name", scope.PositionOf("name")), pattern, "a name with {date:yyyyMMdd} and {channel} in it", "Write the file's name with the date and the channel replaced."));

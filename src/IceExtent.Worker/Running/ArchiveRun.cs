@@ -114,9 +114,9 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
 
     private void RemoveGrids(IEnumerable<DateOnly> days)
     {
-        foreach (string path in days.SelectMany(_ => settings.Methods, (day, method) => layout.GridFile(method, settings.Grid.Hemisphere, day)).Where(File.Exists))
+        foreach (string path in days.SelectMany(_ => settings.Methods, (day, method) => layout.GridFile(method, settings.Grid.Hemisphere, day)))
         {
-            File.Delete(path);
+            PublishedFile.Delete(path);
         }
     }
 

@@ -28,8 +28,21 @@ internal sealed record Gap(DateOnly? Date, Fault Fault);
 internal sealed record RunPlan(IReadOnlyList<PlannedDay> Days, IReadOnlyList<Gap> Gaps, int Superseded)
 {
     /// <summary>Calendar days between the first and the last planned day for which there is no input at all.</summary>
-    public int DaysWithoutInput => Days.Count == 0
-        ? 0
-        : Days[^1].Date.DayNumber - Days[0].Date.DayNumber + 1
-            - Days.Count - Gaps.Select(gap => gap.Date).OfType<DateOnly>().Where(day => day > Days[0].Date && day < Days[^1].Date).Distinct().Count();
+    public int DaysWithoutInput
+    {
+        get
+        {
+            if (Days.Count == 0)
+            {
+                return 0;
+            }
+
+            (DateOnly first, DateOnly last) = (Days[0].Date, Days[^1].Date);
+            int withInput = Days.Select(day => day.Date)
+                .Concat(Gaps.Select(gap => gap.Date).OfType<DateOnly>().Where(day => day > first && day < last))
+                .Distinct()
+                .Count();
+            return last.DayNumber - first.DayNumber + 1 - withInput;
+        }
+    }
 }
