@@ -19,6 +19,7 @@ internal static class CommandLine
             RunCommand.Make(console),
             PlanCommand.Make(console),
             CheckCommand.Make(console),
+            CompareCommand.Make(console),
             SceneCommand.Make(console),
         };
         ParseResult parsed = root.Parse(args);
