@@ -131,6 +131,81 @@ public sealed class BadInputTests : IDisposable
         ArchiveFiles.AssertSame(before, ArchiveFiles.Of(run.PathOf("out")));
     }
 
+    /// <summary>A wrong sensor rejects every day; the days that an earlier run made must not be taken for lost.</summary>
+    [Fact]
+    public async Task Run_WrongSensorOnAGoodArchive_IsRefusedAndChangesNothing()
+    {
+        await ProgramRun.OfAsync("run", run.RunFile);
+        SortedDictionary<string, byte[]> before = ArchiveFiles.Of(run.PathOf("out"));
+        run.Write("other.toml", TinyRun.Sensor("1995-01-01", "1999-12-31"));
+        run.WriteRunFile(sensor: "other.toml");
+
+        ProgramRun ended = await ProgramRun.OfAsync("run", run.RunFile);
+
+        Assert.Equal(ExitCode.Configuration, ended.ExitCode);
+        Assert.Contains("IE3001", ended.Messages, StringComparison.Ordinal);
+        ArchiveFiles.AssertSame(before, ArchiveFiles.Of(run.PathOf("out")));
+    }
+
+    [Fact]
+    public async Task Run_EveryDayLost_SaysSoAndLeavesNoEmptyTable()
+    {
+        await ProgramRun.OfAsync("run", run.RunFile);
+        foreach (string file in Directory.EnumerateFiles(run.PathOf("days"), "*_v19.bin"))
+        {
+            File.WriteAllBytes(file, [0]);
+        }
+
+        ProgramRun ended = await ProgramRun.OfAsync("run", run.RunFile);
+
+        Assert.Equal(ExitCode.NoUsableInput, ended.ExitCode);
+        Assert.Contains("4 days taken out of the archive", ended.Results, StringComparison.Ordinal);
+        Assert.Empty(ArchiveFiles.Of(run.PathOf("out")));
+    }
+
+    [Theory]
+    [InlineData("run")]
+    [InlineData("plan")]
+    [InlineData("check")]
+    public async Task Command_PeriodThatEndsBeforeItBegins_IsRefused(string verb)
+    {
+        ProgramRun ended = await ProgramRun.OfAsync(verb, run.RunFile, "--from", "1990-03-03", "--to", "1990-03-01");
+
+        Assert.Equal(ExitCode.Configuration, ended.ExitCode);
+        Assert.Contains("Swap the two dates", ended.Messages, StringComparison.Ordinal);
+        Assert.False(Directory.Exists(run.PathOf("out")));
+    }
+
+    [Fact]
+    public async Task Run_DataFileAsRunFile_IsOneFault()
+    {
+        ProgramRun ended = await ProgramRun.OfAsync("run", run.PathOf("land.nc"));
+
+        Assert.Equal(ExitCode.Configuration, ended.ExitCode);
+        Assert.Contains("IE1002", Assert.Single(ended.Messages.Split('\n', StringSplitOptions.RemoveEmptyEntries)), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public async Task Scene_FileInTheWay_IsACodedErrorNotADefect()
+    {
+        ProgramRun ended = await ProgramRun.OfAsync(
+            "scene", "--grid", run.PathOf("grid.toml"), "--sensor", run.PathOf("tiny.toml"), "--from", "1990-01-01", "--to", "1990-01-02", "--out", run.PathOf("land.nc"));
+
+        Assert.Equal(ExitCode.Configuration, ended.ExitCode);
+        Assert.StartsWith("IE31", ended.Messages, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public async Task Check_FileInPlaceOfTheOutput_IsSeenBeforeTheRun()
+    {
+        run.Write("out", "in the way");
+
+        ProgramRun ended = await ProgramRun.OfAsync("check", run.RunFile);
+
+        Assert.Equal(ExitCode.DoneWithGaps, ended.ExitCode);
+        Assert.Contains("IE3003", ended.Messages, StringComparison.Ordinal);
+    }
+
     [Fact]
     public async Task Run_Cancelled_LeavesNothingHalfWritten()
     {
@@ -152,6 +227,8 @@ public sealed class BadInputTests : IDisposable
     [InlineData("run", "x.toml", "--workers", "0")]
     [InlineData("rnu", "x.toml")]
     [InlineData("run", "x.toml", "--worker", "2")]
+    [InlineData("run", "--hlep")]
+    [InlineData]
     public async Task CommandLine_Wrong_IsACodedErrorWithExitTwo(params string[] args)
     {
         ProgramRun ended = await ProgramRun.OfAsync(args);

@@ -25,9 +25,15 @@ internal static class CheckCommand
         };
         command.SetAction((parsed, cancellation) =>
         {
+            CommonOptions.CheckPeriod(parsed.GetValue(from), parsed.GetValue(to));
             RunSettings settings = RunFileLoader.Load(parsed.GetValue(runFile)!, ConfigFolder.BesideProgram);
             RunPlan plan = RunPlanner.Plan(settings, parsed.GetValue(from), parsed.GetValue(to), cancellation);
             List<Fault> faults = [.. plan.Gaps.Select(gap => gap.Fault)];
+            if (ArchiveLock.Obstacle(settings.Output) is { } obstacle)
+            {
+                faults.Add(obstacle);
+            }
+
             int readable = ReadAll(settings, plan, faults, cancellation);
             Write(readable, faults, parsed.GetValue(json), console);
             return Task.FromResult(readable == 0 ? ExitCode.NoUsableInput : faults.Count > 0 ? ExitCode.DoneWithGaps : ExitCode.Done);
@@ -65,6 +71,6 @@ internal static class CheckCommand
         }
 
         console.Tell(faults);
-        console.Print(string.Create(CultureInfo.InvariantCulture, $"The run file is right. {readable} days can be read, {faults.Count} faults."));
+        console.Print(string.Create(CultureInfo.InvariantCulture, $"The run file can be understood. {Counted.Days(readable)} can be read, {Counted.Of(faults.Count, "fault")}."));
     }
 }

@@ -10,10 +10,16 @@ internal static class CommandLine
 {
     private static readonly string[] ArchiveHeldCodes = ["IE3002"];
 
+    /// <summary>What a person types to start the program.</summary>
+    public static string ProgramPath { get; } = Environment.GetEnvironmentVariable("ICEEXTENT_PROGRAM") ?? "iceextent";
+
     /// <summary>Runs one command line. Every expected failure becomes a coded line on the message stream.</summary>
     public static async Task<int> RunAsync(string[] args, CommandConsole console)
     {
-        RootCommand root = new("Sea-ice concentration, extent and area from passive-microwave brightness temperatures.")
+        RootCommand root = new(
+            "Sea-ice concentration, extent and area from passive-microwave brightness temperatures.\n\n"
+            + Cautions.Text + "\n\n"
+            + "Exit codes: 0 done, 1 done with gaps, 2 configuration or output folder, 3 no usable day, 4 archive held by another run,\n70 defect, 130 stopped. The manuals are in docs/.")
         {
             DemoCommand.Make(console),
             RunCommand.Make(console),
@@ -23,9 +29,10 @@ internal static class CommandLine
             SceneCommand.Make(console),
         };
         ParseResult parsed = root.Parse(args);
-        if (parsed.Errors.Count > 0)
+        string[] known = [.. parsed.CommandResult.Command.Options.Select(option => option.Name)];
+        if (parsed.Errors.Count > 0 || UnknownOptions(args, known).Length > 0) // The parser would take one for a file name.
         {
-            TellUsage(parsed, root, console);
+            TellUsage(args, parsed, root, console);
             return ExitCode.Configuration;
         }
 
@@ -45,7 +52,7 @@ internal static class CommandLine
         }
         catch (OperationCanceledException)
         {
-            console.Say("Stopped. What stands in the archive is whole; run again to go on.");
+            console.Say("Stopped. What was written is whole; the same command begins anew.");
             return ExitCode.Cancelled;
         }
 #pragma warning disable CA1031 // The last line of defence: a defect is told as one, with its trace, and has its own exit code.
@@ -58,24 +65,37 @@ internal static class CommandLine
         }
     }
 
-    private static void TellUsage(ParseResult parsed, RootCommand root, CommandConsole console)
+    private static void TellUsage(string[] args, ParseResult parsed, RootCommand root, CommandConsole console)
     {
-        string[] verbs = [.. root.Subcommands.Select(command => command.Name)];
-        string? first = parsed.UnmatchedTokens.Count > 0 ? parsed.UnmatchedTokens[0] : null;
-        if (parsed.CommandResult.Command == root && first is not null)
+        Command command = parsed.CommandResult.Command;
+        string[] verbs = [.. root.Subcommands.Select(verb => verb.Name)];
+        if (command == root)
         {
-            console.Tell([new("IE1012", "command line", $"the unknown command {first}", string.Join(", ", verbs), NearestName.Suggestion(first, verbs))]);
+            string? first = args.FirstOrDefault(arg => !arg.StartsWith('-'));
+            console.Tell([new(
+                "IE1012",
+                "command line",
+                first is null ? "no command" : $"the unknown command {first}",
+                string.Join(", ", verbs),
+                first is null ? "See iceextent --help." : NearestName.Suggestion(first, verbs))]);
             return;
         }
 
-        string[] options = [.. parsed.CommandResult.Command.Options.Select(option => option.Name)];
-        foreach (ParseError error in parsed.Errors)
+        string[] options = [.. command.Options.Select(option => option.Name)];
+        string[] unknown = UnknownOptions(args, options);
+        if (unknown.Length > 0)
         {
-            string? unknown = parsed.UnmatchedTokens.FirstOrDefault(token => error.Message.Contains(token, StringComparison.Ordinal));
-            string remedy = unknown is not null && unknown.StartsWith("--", StringComparison.Ordinal)
-                ? NearestName.Suggestion(unknown, options)
-                : $"See iceextent {parsed.CommandResult.Command.Name} --help.";
-            console.Tell([new("IE1012", "command line", error.Message.TrimEnd('.'), "what --help shows", remedy)]);
+            console.Tell(unknown.Select(option => new Fault(
+                "IE1012", "command line", $"the unknown option {option}", string.Join(", ", options), NearestName.Suggestion(option, options))));
+            return;
         }
+
+        // Messages of our own checks name what was found and what is allowed already.
+        console.Tell(parsed.Errors.Select(error => error.Message.Split(OptionCheck.Separator) is [string option, string found, string allowed]
+            ? new Fault("IE1012", option, found, allowed, $"See iceextent {command.Name} --help.")
+            : new Fault("IE1012", "command line", error.Message.TrimEnd('.'), "what --help shows", $"See iceextent {command.Name} --help.")));
     }
+
+    private static string[] UnknownOptions(string[] args, string[] options) =>
+        [.. args.Where(arg => arg.StartsWith("--", StringComparison.Ordinal)).Select(arg => arg.Split('=')[0]).Except([.. options, "--help", "--version"])];
 }

@@ -1,5 +1,6 @@
 using System.CommandLine;
 using System.Globalization;
+using IceExtent.Worker.Configuration;
 
 namespace IceExtent.Worker.Commands;
 
@@ -20,10 +21,20 @@ internal static class CommonOptions
                 return day;
             }
 
-            result.AddError($"{name}: found {written}; allowed: a date such as 1984-12-25.");
+            result.AddError(OptionCheck.Message(name, written.Length == 0 ? "nothing" : written, "a date such as 1984-12-25"));
             return null;
         },
     };
+
+    /// <summary>Refuses a period that ends before it begins.</summary>
+    /// <exception cref="ConfigurationException">IE1012.</exception>
+    public static void CheckPeriod(DateOnly? from, DateOnly? to)
+    {
+        if (from is { } first && to is { } last && last < first)
+        {
+            throw new ConfigurationException([new("IE1012", "command line", "--to before --from", "a period of at least one day", "Swap the two dates.")]);
+        }
+    }
 
     public static Option<int> Workers()
     {
@@ -37,7 +48,7 @@ internal static class CommonOptions
         {
             if (result.Tokens.Count == 1 && (!int.TryParse(result.Tokens[0].Value, CultureInfo.InvariantCulture, out int workers) || workers is < 1 or > 256))
             {
-                result.AddError($"--workers: found {result.Tokens[0].Value}; allowed: 1 to 256.");
+                result.AddError(OptionCheck.Message("--workers", result.Tokens[0].Value, "1 to 256"));
             }
         });
         return option;

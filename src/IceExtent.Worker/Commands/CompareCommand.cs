@@ -29,6 +29,7 @@ internal static class CompareCommand
         };
         command.SetAction((parsed, cancellation) =>
         {
+            CommonOptions.CheckPeriod(parsed.GetValue(from), parsed.GetValue(to));
             RunSettings settings = RunFileLoader.Load(parsed.GetValue(runFile)!, ConfigFolder.BesideProgram);
             if (settings.Methods.Count < 2)
             {

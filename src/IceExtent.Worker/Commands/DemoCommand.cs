@@ -44,7 +44,7 @@ internal static class DemoCommand
         int exitCode = await RunCommand.RunAsync(runFile, new(null, null, workers, ["run", runFile]), console, cancellation);
         PrintYears(folder, console);
         console.Print(string.Empty);
-        console.Print($"Run it again: scripts/iceextent run {runFile}");
+        console.Print($"Run it again: {CommandLine.ProgramPath} run {runFile}");
         console.Print($"Series:       {Path.Combine(folder, "archive", "daily")}");
         console.Print($"Grids:        {Path.Combine(folder, "archive", "grids")}");
         return exitCode;
@@ -72,8 +72,8 @@ internal static class DemoCommand
         SceneParameters parameters = SceneLoader.Load(Path.Combine(ConfigFolder.BesideProgram.Scenes, "demo.toml"), faults)
             ?? throw new ConfigurationException(faults);
         Scene scene = new(parameters, InventedSea.Grid, InventedSea.Land, InventedRadiometer.Sensor, Seed);
+        PublishedFile.WriteText(runFile, SceneCommand.RunFileText($"grids/{InventedSea.Grid.Name}.toml", $"sensors/{InventedRadiometer.Sensor.Name}.toml", scene.Channels, Notice)); // First, so that a stopped demonstration is known as one.
         int days = new SceneFiles(scene, folder, Notice).Write(FirstDay, LastDay, withTruth: false, workers, cancellation);
-        PublishedFile.WriteText(runFile, SceneCommand.RunFileText($"grids/{InventedSea.Grid.Name}.toml", $"sensors/{InventedRadiometer.Sensor.Name}.toml", scene.Channels, Notice));
         return days;
     }
 
@@ -91,9 +91,10 @@ internal static class DemoCommand
         const double LeastObservedShare = 0.98;
         ArchiveLayout layout = new(Path.Combine(folder, "archive"));
         console.Print(string.Empty);
-        console.Print("The Tessivar Sea (invented), extent in million km² with its standard error:");
+        console.Print("The Tessivar Sea (invented): extremes of extent in million km² with their standard errors,");
+        console.Print(string.Create(CultureInfo.InvariantCulture, $"from days of which at least {LeastObservedShare:P0} was observed:"));
         console.Print(string.Empty);
-        console.Print("year  largest                    smallest                   days");
+        console.Print("year  largest                    smallest                   days used");
         for (int year = FirstDay.Year; year <= LastDay.Year; year++)
         {
             IReadOnlyList<DailyRow> rows = DailyTable.Read(layout.DailyFile("nasa-team", Grids.Hemisphere.North, year)).Rows;
@@ -102,7 +103,7 @@ internal static class DemoCommand
                 ? string.Create(CultureInfo.InvariantCulture, $"{year}  no day observed well enough")
                 : string.Create(
                     CultureInfo.InvariantCulture,
-                    $"{year}  {Extreme(covered.MaxBy(row => row.ExtentSquareKilometers)!)}   {Extreme(covered.MinBy(row => row.ExtentSquareKilometers)!)}   {rows.Count}"));
+                    $"{year}  {Extreme(covered.MaxBy(row => row.ExtentSquareKilometers)!)}   {Extreme(covered.MinBy(row => row.ExtentSquareKilometers)!)}   {covered.Length} of {rows.Count}"));
         }
     }
 

@@ -23,6 +23,7 @@ internal static class PlanCommand
         };
         command.SetAction((parsed, cancellation) =>
         {
+            CommonOptions.CheckPeriod(parsed.GetValue(from), parsed.GetValue(to));
             RunSettings settings = RunFileLoader.Load(parsed.GetValue(runFile)!, ConfigFolder.BesideProgram);
             RunPlan plan = RunPlanner.Plan(settings, parsed.GetValue(from), parsed.GetValue(to), cancellation);
             Write(settings, plan, parsed.GetValue(json), console);
@@ -56,6 +57,7 @@ internal static class PlanCommand
                     Sources = spans,
                     DaysLeftToAnEarlierSource = plan.Superseded,
                     plan.DaysWithoutInput,
+                    plan.DatesWithoutInput,
                     Rejected = plan.Gaps.Select(gap => new { gap.Date, gap.Fault.Code, Text = gap.Fault.ToString() }),
                 },
                 Indented));
@@ -71,7 +73,7 @@ internal static class PlanCommand
 
         console.Print(string.Create(
             CultureInfo.InvariantCulture,
-            $"To do:   {plan.Days.Count} days; {plan.Gaps.Count} rejected, {plan.DaysWithoutInput} without input, {plan.Superseded} left to an earlier source"));
+            $"To do:   {Counted.Days(plan.Days.Count)}; {plan.Gaps.Count} rejected, {plan.DaysWithoutInput} without input, {plan.Superseded} left to an earlier source"));
         console.Tell(plan.Gaps.Select(gap => gap.Fault));
     }
 }

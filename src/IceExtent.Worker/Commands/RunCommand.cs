@@ -31,13 +31,18 @@ internal static class RunCommand
     /// <summary>Runs one run file and prints what came of it.</summary>
     public static async Task<int> RunAsync(string runFile, RunOptions options, CommandConsole console, CancellationToken cancellation)
     {
+        CommonOptions.CheckPeriod(options.From, options.To);
         RunSettings settings = RunFileLoader.Load(runFile, ConfigFolder.BesideProgram);
         RunProgress progress = new(console);
         RunOutcome outcome = await progress.ShowAsync(() => new ArchiveRun(settings, options, TimeProvider.System).RunAsync(progress, cancellation));
         console.Tell(outcome.Gaps.Select(gap => gap.Fault));
-        console.Print(string.Create(
-            CultureInfo.InvariantCulture,
-            $"{outcome.DaysDone} days done, {outcome.Gaps.Count} rejected, {outcome.Plan.DaysWithoutInput} days between without input."));
+        console.Print($"{Counted.Days(outcome.DaysDone)} done, {outcome.Gaps.Count} rejected, {Counted.Days(outcome.Plan.DaysWithoutInput)} between without input.");
+        if (outcome.DaysRemoved > 0)
+        {
+            console.Print($"{Counted.Days(outcome.DaysRemoved)} taken out of the archive: their input can no longer be used.");
+        }
+
+        progress.Series.Print(console);
         console.Print($"Archive: {settings.Output}");
         console.Print($"Record:  {outcome.RecordPath}");
         if (settings.Notice is { } notice)

@@ -36,6 +36,9 @@ internal sealed class RunProgress(CommandConsole console) : IRunObserver
             });
     }
 
+    /// <summary>What the days came to.</summary>
+    public SeriesSummary Series { get; } = new();
+
     public void Planned(RunPlan plan)
     {
         total = plan.Days.Count;
@@ -44,7 +47,7 @@ internal sealed class RunProgress(CommandConsole console) : IRunObserver
         {
             console.Say(plan.Days.Count == 0
                 ? "No day to process."
-                : string.Create(CultureInfo.InvariantCulture, $"{total} days to process, {plan.Days[0].Date:yyyy-MM-dd} to {plan.Days[^1].Date:yyyy-MM-dd}."));
+                : string.Create(CultureInfo.InvariantCulture, $"{Counted.Days(total)} to process, {plan.Days[0].Date:yyyy-MM-dd} to {plan.Days[^1].Date:yyyy-MM-dd}."));
             return;
         }
 
@@ -55,6 +58,7 @@ internal sealed class RunProgress(CommandConsole console) : IRunObserver
     public void DayDone(DayResult result)
     {
         done++;
+        Series.Add(result);
         double perSecond = done / Math.Max(1e-3, watch.Elapsed.TotalSeconds);
         if (bar is not null)
         {

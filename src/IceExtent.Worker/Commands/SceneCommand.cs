@@ -39,9 +39,10 @@ internal static class SceneCommand
         command.SetAction((parsed, cancellation) =>
         {
             (DateOnly first, DateOnly last) = (parsed.GetValue(from)!.Value, parsed.GetValue(to)!.Value);
+            CommonOptions.CheckPeriod(first, last);
             string folder = Path.GetFullPath(parsed.GetValue(output)!);
             (Scene scene, string gridName, string sensorName) = Load(
-                parsed.GetValue(grid)!, parsed.GetValue(sensor)!, parsed.GetValue(parameters), parsed.GetValue(seed), first, last);
+                parsed.GetValue(grid)!, parsed.GetValue(sensor)!, parsed.GetValue(parameters), parsed.GetValue(seed));
             int days = new SceneFiles(scene, folder, Notice).Write(first, last, !parsed.GetValue(noTruth), parsed.GetValue(workers), cancellation);
             string runFile = Path.Combine(folder, "run.toml");
             PublishedFile.WriteText(runFile, RunFileText(gridName, sensorName, scene.Channels, Notice));
@@ -69,7 +70,7 @@ internal static class SceneCommand
         """);
 
     private static (Scene Scene, string Grid, string Sensor) Load(
-        string grid, string sensor, string? parameters, long seed, DateOnly from, DateOnly to)
+        string grid, string sensor, string? parameters, long seed)
     {
         List<Fault> faults = [];
         ConfigFolder config = ConfigFolder.BesideProgram;
@@ -80,11 +81,6 @@ internal static class SceneCommand
         string sceneName = parameters ?? (loaded?.Grid.Hemisphere == Hemisphere.South ? "south" : "north");
         string? scenePath = Resolve("--scene", sceneName, config.Scenes, faults);
         SceneParameters? scene = scenePath is null ? null : SceneLoader.Load(scenePath, faults);
-        if (to < from)
-        {
-            faults.Add(new("IE1012", "command line", "--to before --from", "a period of at least one day", "Swap the two dates."));
-        }
-
         if (faults.Count > 0)
         {
             throw new ConfigurationException(faults);

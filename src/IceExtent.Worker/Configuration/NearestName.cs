@@ -8,7 +8,7 @@ internal static class NearestName
     {
         int most = Math.Max(2, written.Length / 3);
         return candidates
-            .Select(candidate => (candidate, edits: Edits(written, candidate)))
+            .Select(candidate => (candidate, edits: Edits(written.ToUpperInvariant(), candidate.ToUpperInvariant())))
             .Where(pair => pair.edits <= most)
             .OrderBy(pair => pair.edits)
             .ThenBy(pair => pair.candidate, StringComparer.Ordinal)
@@ -16,9 +16,9 @@ internal static class NearestName
             .FirstOrDefault();
     }
 
-    /// <summary>A sentence that suggests the nearest candidate, or lists them all.</summary>
+    /// <summary>A sentence that suggests the nearest candidate, if any is near; the fault itself lists them all.</summary>
     public static string Suggestion(string written, IReadOnlyCollection<string> candidates) =>
-        Of(written, candidates) is { } nearest ? $"Did you mean {nearest}?" : $"Choose one of: {string.Join(", ", candidates)}.";
+        Of(written, candidates) is { } nearest ? $"Did you mean {nearest}?" : "Choose an allowed one.";
 
     // The optimal string alignment distance: insertions, deletions, replacements and swaps of neighbours cost 1.
     private static int Edits(string left, string right)

@@ -9,6 +9,8 @@ namespace IceExtent.Worker.Configuration;
 /// <summary>Reads TOML into nodes that remember where they stand.</summary>
 internal static class TomlFile
 {
+    private const int MostSyntaxFaults = 10;
+
     /// <summary>Reads a file.</summary>
     /// <param name="path">The file.</param>
     /// <param name="faults">Receives IE1001 when it cannot be read, IE1002 for each syntax error, a key written twice among them.</param>
@@ -18,6 +20,12 @@ internal static class TomlFile
         string text;
         try
         {
+            if (Directory.Exists(path))
+            {
+                faults.Add(new("IE1001", path, "a folder", "a readable TOML file", "Name the file in it."));
+                return null;
+            }
+
             text = File.ReadAllText(path);
         }
         catch (Exception cause) when (cause is IOException or UnauthorizedAccessException or ArgumentException or NotSupportedException)
@@ -33,10 +41,17 @@ internal static class TomlFile
     /// <inheritdoc cref="Read"/>
     public static ConfigTable? Parse(string text, string path, ICollection<Fault> faults)
     {
+        if (text.Contains('\0', StringComparison.Ordinal))
+        {
+            faults.Add(new("IE1002", path, "binary content", "TOML 1.0", "Name the run file, not a data file."));
+            return null;
+        }
+
         DocumentSyntax document = SyntaxParser.Parse(text, path);
         if (document.HasErrors)
         {
-            foreach (DiagnosticMessage message in document.Diagnostics)
+            // The first message of a line tells its fault; the others follow from it.
+            foreach (DiagnosticMessage message in document.Diagnostics.DistinctBy(message => message.Span.Start.Line).Take(MostSyntaxFaults))
             {
                 ConfigPosition at = At(message.Span, path);
                 faults.Add(new("IE1002", at.ToString(), $"text that is not TOML ({message.Message})", "TOML 1.0", "Correct the line; strings stand in double quotes."));

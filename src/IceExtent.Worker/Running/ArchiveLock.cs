@@ -40,6 +40,20 @@ internal sealed class ArchiveLock : IDisposable
         }
     }
 
+    /// <summary>What stands in the way of an output folder, without making it; null where nothing is seen.</summary>
+    public static Fault? Obstacle(string output)
+    {
+        string? nearest = output;
+        while (nearest is not null && !Directory.Exists(nearest) && !File.Exists(nearest))
+        {
+            nearest = Path.GetDirectoryName(nearest);
+        }
+
+        return nearest is not null && File.Exists(nearest)
+            ? new("IE3003", output, $"a file in the way ({nearest})", "a folder this user may make and write", "Correct output in the run file, or move the file.")
+            : null;
+    }
+
     /// <inheritdoc/>
     public void Dispose() => held.Dispose();
 

@@ -18,8 +18,9 @@ internal sealed record RunOptions(DateOnly? From, DateOnly? To, int Workers, IRe
 /// <param name="Plan">What was planned.</param>
 /// <param name="DaysDone">Days with numbers.</param>
 /// <param name="Gaps">Everything that could not be used.</param>
+/// <param name="DaysRemoved">Days taken out of the archive because their input can no longer be used.</param>
 /// <param name="RecordPath">The run record.</param>
-internal sealed record RunOutcome(int ExitCode, RunPlan Plan, int DaysDone, IReadOnlyList<Gap> Gaps, string RecordPath);
+internal sealed record RunOutcome(int ExitCode, RunPlan Plan, int DaysDone, IReadOnlyList<Gap> Gaps, int DaysRemoved, string RecordPath);
 
 /// <summary>One run over an archive: plan, process, publish, record.</summary>
 internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeProvider clock)
@@ -44,7 +45,8 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         Task<DayPreparation> preparing = Task.Run(() => new DayPreparation(settings), CancellationToken.None); // Needs no file, so it need not wait for them.
         RunPlan plan = RunPlanner.Plan(settings, options.From, options.To, cancellation);
         observer.Planned(plan);
-        series.CheckSameConfiguration(plan.Days.Select(day => day.Date.Year).Distinct(), digest);
+        series.CheckSameConfiguration(
+            plan.Days.Select(day => day.Date).Concat(plan.Gaps.Select(gap => gap.Date).OfType<DateOnly>()).Select(day => day.Year).Distinct(), digest);
 
         gaps.AddRange(plan.Gaps);
         DateOnly[] lost = [.. plan.Gaps.Select(gap => gap.Date).OfType<DateOnly>().Except(plan.Days.Select(day => day.Date)).Distinct()];
@@ -55,7 +57,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         int done = dayRecords.Count(day => day.Outcome == DayOutcome.Done);
         int exitCode = done == 0 ? ExitCode.NoUsableInput : gaps.Count > 0 ? ExitCode.DoneWithGaps : ExitCode.Done;
         string recordPath = WriteRecord(plan, started, digest, done, exitCode);
-        return new(exitCode, plan, done, gaps, recordPath);
+        return new(exitCode, plan, done, gaps, series.DaysRemoved, recordPath);
     }
 
     private async Task ProcessAsync(

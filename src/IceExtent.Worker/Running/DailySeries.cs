@@ -23,6 +23,9 @@ internal sealed class DailySeries(
     private readonly HashSet<DateOnly> lostDays = [];
     private int? year;
 
+    /// <summary>How many days that stood in a table were taken out because their input can no longer be used.</summary>
+    public int DaysRemoved { get; private set; }
+
     /// <summary>Refuses an archive that was made with another configuration, before anything is computed.</summary>
     /// <param name="years">The years the run touches.</param>
     /// <param name="digest">The configuration's digest.</param>
@@ -67,7 +70,7 @@ internal sealed class DailySeries(
         {
             foreach (string method in methods)
             {
-                Write(layout.DailyFile(method, hemisphere, open), rowsByMethod[method], metadataOf(method));
+                Write(method, open);
                 rowsByMethod[method].Clear();
             }
         }
@@ -99,12 +102,21 @@ internal sealed class DailySeries(
         year = day.Year;
     }
 
-    private void Write(string path, List<DailyRow> rows, IReadOnlyList<KeyValuePair<string, string>> metadata)
+    private void Write(string method, int open)
     {
+        string path = layout.DailyFile(method, hemisphere, open);
+        List<DailyRow> rows = rowsByMethod[method];
+        IReadOnlyList<KeyValuePair<string, string>> metadata = metadataOf(method);
         IReadOnlyList<DailyRow> before = File.Exists(path) ? DailyTable.Read(path).Rows : [];
         HashSet<DateOnly> touched = [.. rows.Select(row => row.Date), .. lostDays];
         DailyRow[] kept = [.. before.Where(row => !touched.Contains(row.Date))];
-        if (rows.Count > 0 || kept.Length < before.Count)
+        HashSet<DateOnly> gone = [.. before.Select(row => row.Date).Where(lostDays.Contains)];
+        DaysRemoved += method == methods[0] ? gone.Count : 0;
+        if (rows.Count == 0 && kept.Length == 0)
+        {
+            PublishedFile.Delete(path); // A table without a row would say that the year was made.
+        }
+        else if (rows.Count > 0 || kept.Length < before.Count)
         {
             DailyTable.Write(path, kept.Concat(rows), metadata);
         }

@@ -27,22 +27,23 @@ internal sealed record Gap(DateOnly? Date, Fault Fault);
 /// <param name="Superseded">The number of days left to a source that stands earlier in the run file.</param>
 internal sealed record RunPlan(IReadOnlyList<PlannedDay> Days, IReadOnlyList<Gap> Gaps, int Superseded)
 {
-    /// <summary>Calendar days between the first and the last planned day for which there is no input at all.</summary>
-    public int DaysWithoutInput
+    /// <summary>The number of <see cref="DatesWithoutInput"/>.</summary>
+    public int DaysWithoutInput => DatesWithoutInput.Count;
+
+    /// <summary>Calendar days between the first and the last planned day for which no file was listed at all.</summary>
+    public IReadOnlyList<DateOnly> DatesWithoutInput
     {
         get
         {
             if (Days.Count == 0)
             {
-                return 0;
+                return [];
             }
 
-            (DateOnly first, DateOnly last) = (Days[0].Date, Days[^1].Date);
-            int withInput = Days.Select(day => day.Date)
-                .Concat(Gaps.Select(gap => gap.Date).OfType<DateOnly>().Where(day => day > first && day < last))
-                .Distinct()
-                .Count();
-            return last.DayNumber - first.DayNumber + 1 - withInput;
+            HashSet<DateOnly> known = [.. Days.Select(day => day.Date), .. Gaps.Select(gap => gap.Date).OfType<DateOnly>()];
+            return [.. Enumerable.Range(Days[0].Date.DayNumber, Days[^1].Date.DayNumber - Days[0].Date.DayNumber + 1)
+                .Select(DateOnly.FromDayNumber)
+                .Where(day => !known.Contains(day))];
         }
     }
 }

@@ -1,6 +1,7 @@
 using System.Globalization;
 using IceExtent.Retrieval;
 using IceExtent.Scenes;
+using IceExtent.Storage.Faults;
 using IceExtent.Storage.Writing;
 
 namespace IceExtent.Worker.Running;
@@ -29,14 +30,22 @@ internal sealed class SceneFiles(Scene scene, string folder, string notice)
     {
         DateOnly[] days = [.. Enumerable.Range(from.DayNumber, to.DayNumber - from.DayNumber + 1).Select(DateOnly.FromDayNumber).Where(day => !scene.IsMissing(day))];
         using ThreadLocal<Pen> pens = new(() => new Pen(scene));
-        Parallel.ForEach(days, new ParallelOptions { MaxDegreeOfParallelism = workers, CancellationToken = cancellation }, day =>
+        try
         {
-            WriteTemperatures(day, pens.Value!);
-            if (withTruth)
+            Parallel.ForEach(days, new ParallelOptions { MaxDegreeOfParallelism = workers, CancellationToken = cancellation }, day =>
             {
-                WriteTruth(day, pens.Value!);
-            }
-        });
+                WriteTemperatures(day, pens.Value!);
+                if (withTruth)
+                {
+                    WriteTruth(day, pens.Value!);
+                }
+            });
+        }
+        catch (AggregateException failures) when (failures.InnerExceptions.OfType<FaultException>().FirstOrDefault() is { } fault)
+        {
+            throw new FaultException(fault.Fault, failures); // All workers meet the same disk: one fault says it.
+        }
+
         return days.Length;
     }
 

@@ -93,5 +93,5 @@ internal sealed class GridAxes
         || (axis.Scale is null && variable.File.Find("time")?.Lengths is [var length] && length == axis.Length);
 
     private static string Describe(FileAxis[] axes) =>
-        axes.Length == 0 ? "a single number" : $"the shape {string.Join(" x ", axes.Select(axis => axis.ToString()))}";
+        axes.Length == 0 ? "a single number" : $"the shape {string.Join(", ", axes.Select(axis => axis.ToString()))}";
 }

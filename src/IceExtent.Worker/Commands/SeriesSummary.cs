@@ -1,0 +1,50 @@
+using System.Globalization;
+using IceExtent.Statistics;
+using IceExtent.Worker.Running;
+
+namespace IceExtent.Worker.Commands;
+
+/// <summary>The last numbers of a run and how well its days were observed, in a few lines.</summary>
+internal sealed class SeriesSummary
+{
+    private const double WellObservedShare = 0.98;
+
+    private readonly Dictionary<string, DailyRow> lastByMethod = new(StringComparer.Ordinal);
+    private int poorDays;
+    private double lowestShare = 1.0;
+
+    /// <summary>Takes one day. Days come in date order.</summary>
+    public void Add(DayResult result)
+    {
+        foreach (MethodResult method in result.Methods)
+        {
+            lastByMethod[method.Method] = method.Rows[0];
+        }
+
+        if (result.Methods is [{ Rows: [var first, ..] }, ..])
+        {
+            poorDays += first.ObservedShare < WellObservedShare ? 1 : 0;
+            lowestShare = Math.Min(lowestShare, first.ObservedShare);
+        }
+    }
+
+    /// <summary>Prints it; nothing where no day was done.</summary>
+    public void Print(CommandConsole console)
+    {
+        foreach ((string method, DailyRow row) in lastByMethod)
+        {
+            console.Print(row.ExtentSquareKilometers is null
+                ? string.Create(CultureInfo.InvariantCulture, $"{row.Date:yyyy-MM-dd} {method}: nothing observed")
+                : string.Create(
+                    CultureInfo.InvariantCulture,
+                    $"{row.Date:yyyy-MM-dd} {method}: extent {row.ExtentSquareKilometers / 1e6:F3} ± {row.ExtentStandardErrorSquareKilometers / 1e6:F3}, area {row.AreaSquareKilometers / 1e6:F3} ± {row.AreaStandardErrorSquareKilometers / 1e6:F3} million km², {row.ObservedShare:P0} observed"));
+        }
+
+        if (poorDays > 0)
+        {
+            console.Print(string.Create(
+                CultureInfo.InvariantCulture,
+                $"{Counted.Days(poorDays)} observed to less than {WellObservedShare:P0} (lowest {lowestShare:P0}): sums hold only what was observed; read observed_share first."));
+        }
+    }
+}
