@@ -36,4 +36,10 @@ public enum CellConditions : ushort
 
     /// <summary>The method has no answer for these temperatures (the tie-point triangle degenerates).</summary>
     NoSolution = 1 << 8,
+
+    /// <summary>Empty, and given the mean of its observed neighbours; the bit that says why it was empty stays.</summary>
+    FilledFromNeighbours = 1 << 10,
+
+    /// <summary>In the polar gap, and given the solution of Laplace's equation there.</summary>
+    FilledPolarGap = 1 << 11,
 }

@@ -64,4 +64,19 @@ public sealed class ConcentrationPlanes
 
     /// <summary>The conditions as bit masks, for writers.</summary>
     public ReadOnlyMemory<ushort> ConditionMemory => conditions;
+
+    /// <summary>Whether a cell's concentration was retrieved: there, and not filled in.</summary>
+    internal bool IsObserved(int cell) =>
+        !float.IsNaN(total[cell]) && (conditions[cell] & (ushort)(CellConditions.FilledFromNeighbours | CellConditions.FilledPolarGap)) == 0;
+
+    /// <summary>Fills a cell in. Multiyear ice may be NaN; first-year ice is the rest, never negative.</summary>
+    internal void Put(int cell, double totalFraction, double multiyearFraction, double standardErrorFraction)
+    {
+        float all = (float)totalFraction;
+        float multi = MathF.Min((float)multiyearFraction, all); // NaN stays NaN.
+        total[cell] = all;
+        multiyear[cell] = multi;
+        firstYear[cell] = all - multi;
+        standardError[cell] = (float)standardErrorFraction;
+    }
 }

@@ -20,13 +20,13 @@ public sealed record DailyRow
     /// <summary>The region's name; <c>hemisphere</c> is every ocean cell of the grid.</summary>
     public required string Region { get; init; }
 
-    /// <summary>Area of cells of at least 15 %, the polar gap included; null where not one cell outside the gap was observed.</summary>
+    /// <summary>Area of cells of at least 15 %, with the polar gap as the rule has it; null where not one cell outside the gap was observed.</summary>
     public required double? ExtentSquareKilometers { get; init; }
 
     /// <summary>Standard error of the extent.</summary>
     public required double? ExtentStandardErrorSquareKilometers { get; init; }
 
-    /// <summary>Concentration times cell area over cells of at least 15 %, the polar gap left out.</summary>
+    /// <summary>Concentration times cell area over cells of at least 15 %; of the polar gap only what was filled.</summary>
     public required double? AreaSquareKilometers { get; init; }
 
     /// <summary>Standard error of the area.</summary>
@@ -35,7 +35,7 @@ public sealed record DailyRow
     /// <summary>Area of cells from 15 % to below 80 %.</summary>
     public required double? MarginalZoneSquareKilometers { get; init; }
 
-    /// <summary>Area of cells of 80 % and more, the polar gap left out.</summary>
+    /// <summary>Area of cells of 80 % and more; of the polar gap only what was filled.</summary>
     public required double? PackSquareKilometers { get; init; }
 
     /// <summary>Area of the region's ocean cells, the polar gap included.</summary>

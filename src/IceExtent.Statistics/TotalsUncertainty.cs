@@ -8,7 +8,7 @@ namespace IceExtent.Statistics;
 /// Area: the variance of Σ a·C over cells counted as ice. Extent: the variance of Σ a·[C + error ≥ limit], by the
 /// tetrachoric series of the two-by-two probabilities, with z = (C − limit)/σ:
 /// Σₖ (1/k!) ΣᵢΣⱼ aᵢaⱼ He₍ₖ₋₁₎(zᵢ)φ(zᵢ) He₍ₖ₋₁₎(zⱼ)φ(zⱼ) ρᵢⱼᵏ. Five terms are kept.
-/// Source of the series: [Kendall1941], value from memory. Sampling gaps and the polar gap add nothing here.
+/// Source of the series: [Kendall1941], value from memory. Empty cells and an unfilled polar gap add nothing here.
 /// </remarks>
 public sealed class TotalsUncertainty
 {

@@ -34,6 +34,63 @@ public sealed class DailyTotalsTests
         Assert.Equal(5.0 / 6.0, sums.ObservedShare, 1e-12);
     }
 
+    /// <summary>
+    /// Origin: worked. Six cells: open gap, gap filled with 0.5, gap filled with 0.1, filled from neighbours 0.9, observed
+    /// 0.4, missing. Ice: 0.5, 0.9, 0.4 (3 cells, area 1.8; pack 1), and the open gap only where the rule counts it.
+    /// Outside the gap lie 3 cells: one observed, one filled.
+    /// </summary>
+    [Theory]
+    [InlineData(PolarGapRule.CountAsIce, 4)]
+    [InlineData(PolarGapRule.LeaveOut, 3)]
+    [InlineData(PolarGapRule.Laplace, 4)]
+    public void Sum_FilledCells_CountLikeOthersAndAreTold(PolarGapRule rule, int iceCells)
+    {
+        Grid grid = SmallGrid.EqualArea(2, 3);
+        const CellConditions FilledGap = CellConditions.PolarGap | CellConditions.FilledPolarGap;
+        float[] total = [float.NaN, 0.5f, 0.1f, 0.9f, 0.4f, float.NaN];
+        CellConditions[] conditions =
+            [CellConditions.PolarGap, FilledGap, FilledGap, CellConditions.NoObservation | CellConditions.FilledFromNeighbours, 0, CellConditions.NoObservation];
+
+        DailyTotals sums = DailyTotals.Sum(TotalsRegion.Hemisphere(grid, SmallGrid.AllOcean(grid)), total, conditions, Rules with { PolarGap = rule });
+
+        Assert.Equal(iceCells * Cell, sums.Extent, 1e-3);
+        Assert.Equal(1.8 * Cell, sums.IceArea, 1e2);
+        Assert.Equal(2 * Cell, sums.MarginalZone, 1e-3);
+        Assert.Equal(Cell, sums.Pack, 1e-3);
+        Assert.Equal(3 * Cell, sums.PolarGap, 1e-3);
+        Assert.Equal(1.0 / 3.0, sums.ObservedShare, 1e-12);
+        Assert.Equal(1.0 / 3.0, sums.FilledShare, 1e-12);
+    }
+
+    /// <summary>Filling the gap takes nothing from any total that leaves it out, and gives no more extent than counting all of it.</summary>
+    [Fact]
+    public void Sum_FilledGap_LiesBetweenTheOtherRules() =>
+        Gen.Select(Gen.Double[0, 1].Array[100], Gen.Int[0, 9].Array[100]).Sample((values, draws) =>
+        {
+            Grid grid = SmallGrid.EqualArea(10, 10);
+            bool[] ocean = [.. draws.Select(draw => draw > 0)];
+            CellMask mask = new(grid, ocean, 89.4);
+            ConcentrationPlanes planes = new(100);
+            for (int cell = 0; cell < 100; cell++)
+            {
+                bool seen = mask.Conditions[cell] == CellConditions.None && draws[cell] > 1;
+                planes.Total[cell] = seen ? (float)values[cell] : float.NaN;
+                planes.StandardError[cell] = seen ? 0.05f : float.NaN;
+                planes.Conditions[cell] = mask.Conditions[cell] == CellConditions.None && !seen ? CellConditions.NoObservation : mask.Conditions[cell];
+            }
+
+            TotalsRegion region = TotalsRegion.Hemisphere(grid, ocean);
+            DailyTotals without = Of(PolarGapRule.LeaveOut);
+            DailyTotals counted = Of(PolarGapRule.CountAsIce);
+            new PolarGapFilling(new PolarGapSystem(grid, mask), 0.3).Fill(planes);
+            DailyTotals filled = Of(PolarGapRule.Laplace);
+            return filled.Extent >= without.Extent && filled.IceArea >= without.IceArea && filled.Pack >= without.Pack
+                && filled.Extent <= counted.Extent + 1e-3
+                && filled.PolarGap == without.PolarGap && filled.ObservedShare == without.ObservedShare && filled.FilledShare == 0.0;
+
+            DailyTotals Of(PolarGapRule rule) => DailyTotals.Sum(region, planes.Total, planes.Conditions, Rules with { PolarGap = rule });
+        });
+
     [Fact]
     public void Sum_NothingObserved_IsOnlyTheGap()
     {

@@ -63,6 +63,9 @@ public sealed class TinyRun : IDisposable
 
     public void Write(string name, string text) => File.WriteAllText(PathOf(name), text + "\n");
 
+    /// <summary>The same sensor, blind from 89.8 degrees on: cells 7 and 12, the middle ones of column 2.</summary>
+    public static string SensorWithPolarGap(string firstDay, string lastDay) => "polar_gap_latitude = 89.8\n" + Sensor(firstDay, lastDay);
+
     /// <summary>A sensor with the tie points of F17 north (value from memory, high) and a service period of one's own.</summary>
     public static string Sensor(string firstDay, string lastDay) => $$"""
         title = "Invented radiometer"

@@ -1,3 +1,4 @@
+using IceExtent.Statistics;
 using IceExtent.Storage.Faults;
 using IceExtent.TestKit;
 using IceExtent.Worker.Configuration;
@@ -24,6 +25,22 @@ public sealed class RunFileTests : IDisposable
         Assert.Equal(run.PathOf("out"), settings.Output);
         Assert.Equal(5, settings.Sources[0].Description.Files.Count);
         Assert.Equal(16, settings.Ocean.Count(ocean => ocean));
+        Assert.Equal(0, settings.LeastNeighbours);
+        Assert.Equal(PolarGapRule.CountAsIce, settings.Rules.PolarGap);
+        Assert.Equal(0.5, settings.LeastRimShare);
+    }
+
+    [Fact]
+    public void Load_FillingInTheRunFile_RulesOverTheDefaults()
+    {
+        run.WriteDay(new(1990, 1, 1), _ => 0.5);
+        run.WriteRunFile("[filling]\nneighbours = 5\n[polar_gap]\nrule = \"laplace\"");
+
+        RunSettings settings = RunFileLoader.Load(run.RunFile, ConfigFolder.BesideProgram);
+
+        Assert.Equal(5, settings.LeastNeighbours);
+        Assert.Equal(PolarGapRule.Laplace, settings.Rules.PolarGap);
+        Assert.Equal(0.5, settings.LeastRimShare);
     }
 
     public static TheoryData<string, string, string, string> Faults() => new()
@@ -36,6 +53,15 @@ public sealed class RunFileTests : IDisposable
         { "[totals]\nice_fraction = 15", "", "IE1006", "Write the fraction: 0.15, not 15." },
         { "[totals]\nice_fraction = 0.9", "", "IE1011", "not above ice_fraction = 0.9" },
         { "[land]\nlimit = 0.5", "", "IE1003", "limit_fraction" },
+        { "[filling]\nneighbours = 9", "", "IE1006", "a whole number from 0 to 8" },
+        { "[filling]\nneighbours = -1", "", "IE1006", "a whole number from 0 to 8" },
+        { "[filling]\nneighbours = 2.5", "", "IE1005", "a whole number from 0 to 8" },
+        { "[filling]\nneighbors = 4", "", "IE1003", "Did you mean neighbours?" },
+        { "[polar_gap]\nrule = \"laplcae\"", "", "IE1007", "Did you mean laplace?" },
+        { "[polar_gap]\nrule = \"leave_out\"", "", "IE1007", "Did you mean leave-out?" },
+        { "[polar_gap]\nrule = 1", "", "IE1005", "a text in double quotes" },
+        { "[polar_gap]\nleast_rim_share = 50", "", "IE1006", "Write the fraction: 0.5, not 50." },
+        { "[polar_gap]\nleast_rim_share = 0", "", "IE1006", "0.01 to 1" },
         { "", "status = \"finl\"", "IE1007", "Did you mean final?" },
         { "output = \"again\"", "", "IE1002", "already defined" },
         { "notice = ", "", "IE1002", "not TOML" },

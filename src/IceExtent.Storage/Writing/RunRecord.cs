@@ -56,7 +56,8 @@ public sealed record DigestedFile(string Path, string Sha256);
 /// <param name="DaysDone">Days with numbers.</param>
 /// <param name="Gaps">Days without input, or with input that could not be used.</param>
 /// <param name="Rejected">Of the gaps, those whose input was there and could not be used.</param>
-public sealed record RunCounts(int DaysDone, int Gaps, int Rejected);
+/// <param name="PolarGapFallbacks">Of the days done, those whose polar gap was to be filled and was not, for some method: too little of its rim was observed.</param>
+public sealed record RunCounts(int DaysDone, int Gaps, int Rejected, int PolarGapFallbacks = 0);
 
 /// <summary>How one day of one hemisphere went.</summary>
 public enum DayOutcome
@@ -88,6 +89,8 @@ public sealed record DayRecord(
 /// <param name="Screened3719">The 37/19 screen found open water.</param>
 /// <param name="Screened2219">The 22/19 screen found open water.</param>
 /// <param name="NoSolution">The method had no answer.</param>
+/// <param name="Filled">Filled from the neighbours; 0 in a record that does not say it.</param>
+/// <param name="PolarGapFilled">Filled inside the polar gap; 0 in a record that does not say it.</param>
 public sealed record CellCounts(
     string Method,
     int OutOfRange,
@@ -95,4 +98,6 @@ public sealed record CellCounts(
     int ClippedAbove,
     [property: JsonPropertyName("screened_37_19")] int Screened3719,
     [property: JsonPropertyName("screened_22_19")] int Screened2219,
-    int NoSolution);
+    int NoSolution,
+    int Filled = 0,
+    int PolarGapFilled = 0);

@@ -36,6 +36,8 @@ internal static class RunFileLoader
         TotalsRules? rules = Rules(layered);
         double? landLimit = layered.Number("land", "limit_fraction", 0.01, 1.0, string.Empty);
         double? errorLength = layered.Number("standard_error", "correlation_length_km", 1.0, 3_000.0, "km");
+        int? neighbours = layered.WholeNumber("filling", "neighbours", 0, NeighbourFilling.MostNeighbours);
+        double? rimShare = layered.Number("polar_gap", "least_rim_share", 0.01, 1.0, string.Empty);
         layered.RefuseUnknown();
         SourceLoader sources = new(folder, config, methods);
         List<RunSource?> loaded = [.. scope.Tables("source").Select(source => sources.Load(source, grid?.Grid))];
@@ -56,6 +58,8 @@ internal static class RunFileLoader
             Methods = methods,
             WriteGrids = writeGrids ?? true,
             Rules = rules!,
+            LeastNeighbours = neighbours!.Value,
+            LeastRimShare = rimShare!.Value,
             LandLimitFraction = landLimit.Value,
             ErrorLengthMeters = errorLength!.Value * 1_000.0,
             Notice = notice,
@@ -89,7 +93,8 @@ internal static class RunFileLoader
     {
         double? ice = scope.Number("totals", "ice_fraction", 0.01, 0.99, string.Empty);
         double? pack = scope.Number("totals", "pack_fraction", 0.01, 1.0, string.Empty);
-        if (ice is null || pack is null)
+        string? gap = scope.Name("polar_gap", "rule", PolarGapRules.Names);
+        if (ice is null || pack is null || gap is null)
         {
             return null;
         }
@@ -100,7 +105,7 @@ internal static class RunFileLoader
             return null;
         }
 
-        return new(ice.Value, pack.Value);
+        return new(ice.Value, pack.Value, PolarGapRules.Of(gap));
     }
 
     private static LandShare? Land(LoadedGrid grid, List<Fault> faults)

@@ -35,6 +35,12 @@ internal sealed record RunSettings
 
     public required TotalsRules Rules { get; init; }
 
+    /// <summary>The observed neighbours from which on an empty cell is filled; 0 where none is.</summary>
+    public required int LeastNeighbours { get; init; }
+
+    /// <summary>The share of the polar gap's rim that must be observed where the gap is filled. Unit: 1.</summary>
+    public required double LeastRimShare { get; init; }
+
     public required double LandLimitFraction { get; init; }
 
     public required double ErrorLengthMeters { get; init; }

@@ -1,5 +1,6 @@
 using System.Security.Cryptography;
 using IceExtent.Retrieval;
+using IceExtent.Statistics;
 using IceExtent.Storage.Faults;
 using IceExtent.Storage.Writing;
 using IceExtent.Worker.Configuration;
@@ -29,6 +30,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
     private readonly List<DayRecord> dayRecords = [];
     private readonly List<Gap> gaps = [];
     private readonly SortedSet<string> filesRead = new(StringComparer.Ordinal);
+    private int polarGapFallbacks;
 
     /// <summary>Runs.</summary>
     /// <param name="observer">Watches.</param>
@@ -97,6 +99,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             RemoveGrids([result.Day.Date]);
         }
 
+        polarGapFallbacks += result.Methods.Any(method => method.PolarGapFilled == 0) ? 1 : 0;
         dayRecords.Add(new(
             result.Day.Date,
             settings.Grid.Hemisphere,
@@ -112,7 +115,9 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         method.Counts.ClippedAbove,
         method.Counts.Gradient3719,
         method.Counts.Gradient2219,
-        method.Counts.NoSolution);
+        method.Counts.NoSolution,
+        method.Filled,
+        method.PolarGapFilled ?? 0);
 
     private void RemoveGrids(IEnumerable<DateOnly> days)
     {
@@ -122,6 +127,8 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         }
     }
 
+    private string NeighboursText => settings.LeastNeighbours.ToString(System.Globalization.CultureInfo.InvariantCulture);
+
     private List<KeyValuePair<string, string>> GlobalAttributes(string digest)
     {
         List<KeyValuePair<string, string>> attributes =
@@ -129,6 +136,8 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             new("title", $"Daily sea-ice concentration on the grid {settings.Grid.Name}"),
             new("program", $"IceExtent {ProgramVersion.Text}"),
             new(DailySeries.DigestKey, digest),
+            new("filling_neighbours", NeighboursText),
+            new("polar_gap_rule", PolarGapRules.TextOf(settings.Rules.PolarGap)),
             new("caution", Cautions.Text),
         ];
         if (settings.Notice is { } notice)
@@ -151,7 +160,8 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             new(DailySeries.DigestKey, digest),
             new("ice_fraction", settings.Rules.IceFraction.ToString("R", System.Globalization.CultureInfo.InvariantCulture)),
             new("pack_fraction", settings.Rules.PackFraction.ToString("R", System.Globalization.CultureInfo.InvariantCulture)),
-            new("polar_gap_rule", "counted as ice for extent, left out of area, marginal zone and pack"),
+            new("filling_neighbours", NeighboursText),
+            new("polar_gap_rule", PolarGapRules.TextOf(settings.Rules.PolarGap)),
             new("caution", Cautions.Text),
         ];
         if (settings.Notice is { } notice)
@@ -180,7 +190,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             RunFile = new(settings.RunFile, Convert.ToHexStringLower(SHA256.HashData(File.ReadAllBytes(settings.RunFile)))),
             ConfigurationDigest = digest,
             CommandLine = options.CommandLine,
-            Counts = new(done, rejected + plan.DaysWithoutInput, rejected),
+            Counts = new(done, rejected + plan.DaysWithoutInput, rejected, polarGapFallbacks),
             Days = days,
             Faults = [.. plan.Gaps.Where(gap => gap.Date is null).Select(gap => gap.Fault)],
             FilesRead = [.. filesRead],

@@ -28,6 +28,7 @@ internal static class ConfigurationDigest
         yield return settings.Notice ?? string.Empty;
         yield return FormattableString.Invariant(
             $"{settings.Rules.IceFraction:R} {settings.Rules.PackFraction:R} {settings.LandLimitFraction:R} {settings.ErrorLengthMeters:R}");
+        yield return FormattableString.Invariant($"{settings.LeastNeighbours} {settings.Rules.PolarGap} {settings.LeastRimShare:R}");
         foreach (RunSource source in settings.Sources)
         {
             string channels = string.Join(' ', source.Description.Channels.OrderBy(pair => pair.Key).Select(pair => $"{ChannelNames.NameOf(pair.Key)}={pair.Value}"));

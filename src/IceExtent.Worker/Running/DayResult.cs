@@ -12,4 +12,9 @@ namespace IceExtent.Worker.Running;
 internal sealed record DayResult(PlannedDay Day, Fault? Fault, int OutOfRange, IReadOnlyList<MethodResult> Methods);
 
 /// <summary>What one method made of one day.</summary>
-internal sealed record MethodResult(string Method, RetrievalCounts Counts, IReadOnlyList<DailyRow> Rows);
+/// <param name="Method">The method.</param>
+/// <param name="Counts">What happened to the cells.</param>
+/// <param name="Filled">Cells filled from their neighbours.</param>
+/// <param name="PolarGapFilled">Cells filled in the polar gap, 0 where the day's rim was too empty; null where the run fills no gap.</param>
+/// <param name="Rows">One a region.</param>
+internal sealed record MethodResult(string Method, RetrievalCounts Counts, int Filled, int? PolarGapFilled, IReadOnlyList<DailyRow> Rows);

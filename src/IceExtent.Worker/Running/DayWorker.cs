@@ -11,6 +11,7 @@ internal sealed class DayWorker(DayPreparation preparation, GridArchive? grids)
     private readonly Dictionary<string, BrightnessPlanes> planesByChannels = new(StringComparer.Ordinal);
     private readonly ConcentrationPlanes concentration = new(preparation.Settings.Grid.CellCount);
     private readonly CellConditions[] rangeConditions = new CellConditions[preparation.Settings.Grid.CellCount];
+    private readonly Dictionary<PolarGapSystem, PolarGapFilling> gapFillings = [];
     private readonly TotalsUncertainty uncertainty = new(preparation.Correlation);
 
     /// <summary>Handles one day. A bad file costs the day, not the run.</summary>
@@ -33,11 +34,30 @@ internal sealed class DayWorker(DayPreparation preparation, GridArchive? grids)
         for (int index = 0; index < results.Length; index++)
         {
             RetrievalCounts counts = retrievals[index].Retrieve(observed, rangeConditions, concentration);
+            (int filled, int? gapFilled) = Fill(day.Source.Index);
             grids?.Write(day, retrievals[index].Method, concentration);
-            results[index] = new(retrievals[index].Method.Name, counts, [.. preparation.Regions.Select(region => Row(day, region))]);
+            results[index] = new(retrievals[index].Method.Name, counts, filled, gapFilled, [.. preparation.Regions.Select(region => Row(day, region))]);
         }
 
         return new(day, null, outOfRange, results);
+    }
+
+    // Each from observed cells alone, so their order does not matter.
+    private (int Cells, int? PolarGap) Fill(int source)
+    {
+        int cells = preparation.Neighbours?.Fill(concentration) ?? 0;
+        if (preparation.PolarGapOf(source) is not { } gap)
+        {
+            return (cells, null);
+        }
+
+        if (!gapFillings.TryGetValue(gap, out PolarGapFilling? filling))
+        {
+            filling = new(gap, preparation.Settings.LeastRimShare);
+            gapFillings.Add(gap, filling);
+        }
+
+        return (cells, filling.Fill(concentration));
     }
 
     private BrightnessPlanes PlanesFor(OpenedSource source)
@@ -74,7 +94,7 @@ internal sealed class DayWorker(DayPreparation preparation, GridArchive? grids)
             PackSquareKilometers = Known(totals.Pack),
             OceanSquareKilometers = totals.Ocean / SquareMetersPerSquareKilometer,
             ObservedShare = totals.ObservedShare,
-            FilledShare = 0.0, // Nothing is filled yet: a cell without an observation stays empty.
+            FilledShare = totals.FilledShare,
             PolarGapSquareKilometers = totals.PolarGap / SquareMetersPerSquareKilometer,
             Sensor = day.Source.Settings.Sensor.Name,
             Status = day.Source.Settings.Status,

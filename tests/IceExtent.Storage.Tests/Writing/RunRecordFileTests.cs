@@ -16,10 +16,10 @@ public sealed class RunRecordFileTests : IDisposable
         RunFile = new("/data/Öland/run.toml", "00ff"),
         ConfigurationDigest = "0123",
         CommandLine = ["run", "--from", "1988-02-28"],
-        Counts = new(DaysDone: 1, Gaps: 1, Rejected: 1),
+        Counts = new(DaysDone: 1, Gaps: 1, Rejected: 1, PolarGapFallbacks: 0),
         Days =
         [
-            new(new(1988, 2, 28), Hemisphere.North, DayOutcome.Done, [new("any", 1, 2, 3, 4, 5, 6)], []),
+            new(new(1988, 2, 28), Hemisphere.North, DayOutcome.Done, [new("any", 1, 2, 3, 4, 5, 6, 7, 8)], []),
             new(new(1988, 2, 29), Hemisphere.South, DayOutcome.Rejected, [], [new("IE2104", "a.nc", "nothing", "something", "Do it.")]),
         ],
         Faults = [],
@@ -30,6 +30,22 @@ public sealed class RunRecordFileTests : IDisposable
     private readonly TemporaryFolder folder = new();
 
     public void Dispose() => folder.Dispose();
+
+    /// <summary>A record from before gaps and cells could be filled says nothing of it: none were.</summary>
+    [Fact]
+    public void Read_RecordWithoutFillingCounts_HasNoneFilled()
+    {
+        RunRecordFile.Write(folder.PathOf("new.json"), Record);
+        string old = string.Join('\n', File.ReadAllLines(folder.PathOf("new.json")).Where(line => !line.Contains("fill", StringComparison.Ordinal) && !line.Contains("fallbacks", StringComparison.Ordinal)))
+            .Replace("\"no_solution\": 6,", "\"no_solution\": 6", StringComparison.Ordinal)
+            .Replace("\"rejected\": 1,", "\"rejected\": 1", StringComparison.Ordinal);
+        File.WriteAllText(folder.PathOf("old.json"), old);
+
+        RunRecord back = RunRecordFile.Read(folder.PathOf("old.json"));
+
+        Assert.Equal(Record.Counts, back.Counts);
+        Assert.Equal(Record.Days[0].Cells[0] with { Filled = 0, PolarGapFilled = 0 }, back.Days[0].Cells[0]);
+    }
 
     [Fact]
     public void Read_WhatWasWritten_WritesTheSameAgain()
@@ -71,7 +87,8 @@ public sealed class RunRecordFileTests : IDisposable
               "counts": {
                 "days_done": 1,
                 "gaps": 1,
-                "rejected": 1
+                "rejected": 1,
+                "polar_gap_fallbacks": 0
               },
               "days": [
                 {
@@ -86,7 +103,9 @@ public sealed class RunRecordFileTests : IDisposable
                       "clipped_above": 3,
                       "screened_37_19": 4,
                       "screened_22_19": 5,
-                      "no_solution": 6
+                      "no_solution": 6,
+                      "filled": 7,
+                      "polar_gap_filled": 8
                     }
                   ],
                   "faults": []
