@@ -28,9 +28,9 @@ public sealed class CoastBrightness
     private readonly int[] landCells;
 
     /// <summary>Finds the coastal cells and the land beside each.</summary>
+    /// <param name="grid">The grid.</param>
     /// <param name="land">How much of each cell is land.</param>
-    /// <param name="ocean">Whether each cell counts as ocean. Shape: one value a cell.</param>
-    /// <param name="grid">The grid of both.</param>
+    /// <param name="ocean">Whether each cell is ocean that can have a concentration. Shape: one value a cell.</param>
     /// <param name="footprintsMeters">The 3 dB width of every channel to correct.</param>
     /// <param name="range">The temperatures that are believed: a cell that would leave them is left alone.</param>
     /// <param name="rules">The limits.</param>

@@ -88,6 +88,7 @@ public sealed record DayRecord(
 /// <param name="Screened3719">The 37/19 screen found open water.</param>
 /// <param name="Screened2219">The 22/19 screen found open water.</param>
 /// <param name="NoSolution">The method had no answer.</param>
+/// <param name="CoastCorrected">The coast correction changed the cell.</param>
 public sealed record CellCounts(
     string Method,
     int OutOfRange,
@@ -95,4 +96,5 @@ public sealed record CellCounts(
     int ClippedAbove,
     [property: JsonPropertyName("screened_37_19")] int Screened3719,
     [property: JsonPropertyName("screened_22_19")] int Screened2219,
-    int NoSolution);
+    int NoSolution,
+    int CoastCorrected = 0);

@@ -6,13 +6,18 @@ internal sealed class LayeredScope(ConfigScope run, ConfigScope defaults)
     private readonly Dictionary<string, ConfigScope?> runTables = new(StringComparer.Ordinal);
     private readonly Dictionary<string, ConfigScope?> defaultTables = new(StringComparer.Ordinal);
 
-    public double? Number(string table, string key, double lowest, double highest, string unit)
-    {
-        ConfigScope? own = TableOf(runTables, run, table, required: false);
-        ConfigScope? shipped = TableOf(defaultTables, defaults, table, required: true);
-        double? byDefault = shipped?.Number(key, lowest, highest, unit);
-        return own?.Has(key) == true ? own.Number(key, lowest, highest, unit) : Ask(own, key, byDefault, lowest, highest, unit);
-    }
+    public double? Number(string table, string key, double lowest, double highest, string unit) =>
+        Layered(table, key, (scope, required) => scope.Number(key, lowest, highest, unit, required));
+
+    public int? WholeNumber(string table, string key, int lowest, int highest) =>
+        Layered(table, key, (scope, required) => scope.WholeNumber(key, lowest, highest, required));
+
+    /// <summary>A text that must be one of some names.</summary>
+    public string? Name(string table, string key, IReadOnlyCollection<string> names) =>
+        Layered(table, key, (scope, required) => scope.Name(key, names, required));
+
+    /// <summary>A text that only the run file may have, or null.</summary>
+    public string? Text(string table, string key) => TableOf(runTables, run, table, required: false)?.Text(key, required: false);
 
     /// <summary>Adds IE1011 for a value that does not go with another.</summary>
     public void Refuse(string table, string key, string found, string allowed)
@@ -29,11 +34,14 @@ internal sealed class LayeredScope(ConfigScope run, ConfigScope defaults)
         }
     }
 
-    // The run file's table must learn that the key exists, so that its absence is no unknown key elsewhere.
-    private static double? Ask(ConfigScope? own, string key, double? byDefault, double lowest, double highest, string unit)
+    // The run file's table is asked even where it is silent: it must learn that the key exists.
+    private T? Layered<T>(string table, string key, Func<ConfigScope, bool, T?> ask)
     {
-        _ = own?.Number(key, lowest, highest, unit, required: false);
-        return byDefault;
+        ConfigScope? own = TableOf(runTables, run, table, required: false);
+        ConfigScope? shipped = TableOf(defaultTables, defaults, table, required: true);
+        T? byDefault = shipped is null ? default : ask(shipped, true);
+        T? byRun = own is null ? default : ask(own, false);
+        return own?.Has(key) == true ? byRun : byDefault;
     }
 
     private static ConfigScope? TableOf(Dictionary<string, ConfigScope?> cache, ConfigScope scope, string table, bool required)

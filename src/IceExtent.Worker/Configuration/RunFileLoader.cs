@@ -36,8 +36,9 @@ internal static class RunFileLoader
         TotalsRules? rules = Rules(layered);
         double? landLimit = layered.Number("land", "limit_fraction", 0.01, 1.0, string.Empty);
         double? errorLength = layered.Number("standard_error", "correlation_length_km", 1.0, 3_000.0, "km");
+        CoastSettings? coast = CoastLoader.Load(layered, grid?.Grid, folder, faults);
         layered.RefuseUnknown();
-        SourceLoader sources = new(folder, config, methods);
+        SourceLoader sources = new(folder, config, methods, needsFootprints: coast?.Correction == CoastCorrection.Brightness);
         List<RunSource?> loaded = [.. scope.Tables("source").Select(source => sources.Load(source, grid?.Grid))];
         scope.RefuseUnknown();
         LandShare? land = grid is null ? null : Land(grid, faults);
@@ -51,8 +52,10 @@ internal static class RunFileLoader
             RunFile = path,
             Output = Path.GetFullPath(output!, folder),
             Grid = grid!.Grid,
-            ConfigPaths = [config.Defaults, grid.ConfigPath, grid.LandPath],
+            ConfigPaths = [config.Defaults, grid.ConfigPath, grid.LandPath, .. coast!.MinimumPath is { } minimum ? [minimum] : Array.Empty<string>()],
             Ocean = land!.OceanBelow(landLimit!.Value),
+            Land = land,
+            Coast = coast,
             Methods = methods,
             WriteGrids = writeGrids ?? true,
             Rules = rules!,

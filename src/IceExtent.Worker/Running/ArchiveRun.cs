@@ -110,7 +110,8 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         method.Counts.ClippedAbove,
         method.Counts.Gradient3719,
         method.Counts.Gradient2219,
-        method.Counts.NoSolution);
+        method.Counts.NoSolution,
+        method.Counts.CoastCorrected);
 
     private void RemoveGrids(IEnumerable<DateOnly> days)
     {

@@ -7,15 +7,18 @@ namespace IceExtent.Worker.Running;
 /// <summary>Everything that days share and nobody changes: retrievals by source and method, regions, error correlation.</summary>
 internal sealed class DayPreparation
 {
+    private readonly Dictionary<double, CellMask> masks = [];
     private readonly DayRetrieval[][] retrievals;
+    private readonly CoastBrightness?[] coasts;
 
     public DayPreparation(RunSettings settings)
     {
         Settings = settings;
         Regions = [TotalsRegion.Hemisphere(settings.Grid, settings.Ocean)];
         Correlation = new(settings.Grid, settings.ErrorLengthMeters);
-        Dictionary<double, CellMask> masks = [];
-        retrievals = [.. settings.Sources.Select(source => Retrievals(source, masks))];
+        ICoastStep? coast = settings.Coast.Correction == CoastCorrection.Concentration ? ConcentrationStep() : null;
+        retrievals = [.. settings.Sources.Select(source => Retrievals(source, coast))];
+        coasts = [.. settings.Sources.Select(source => settings.Coast.Correction == CoastCorrection.Brightness ? BrightnessStep(source) : null)];
     }
 
     public RunSettings Settings { get; }
@@ -27,7 +30,30 @@ internal sealed class DayPreparation
     /// <summary>One retrieval a method, in the run's order.</summary>
     public IReadOnlyList<DayRetrieval> RetrievalsOf(int source) => retrievals[source];
 
-    private DayRetrieval[] Retrievals(RunSource source, Dictionary<double, CellMask> masks)
+    /// <summary>The correction of brightness temperatures near land, or null where the run has none.</summary>
+    public CoastBrightness? CoastOf(int source) => coasts[source];
+
+    private ICoastStep ConcentrationStep() => Settings.Coast.MinimumFraction is { } minima
+        ? new CoastMinimumStep(new(Settings.Grid, Settings.Ocean), minima, Settings.Coast.Minimum)
+        : new CoastSpillStep(Settings.Grid, Settings.Land, Settings.Ocean, Settings.Coast.Spill);
+
+    private CoastBrightness BrightnessStep(RunSource source) => new(
+        Settings.Grid,
+        Settings.Land,
+        Array.ConvertAll(MaskOf(source).Conditions.ToArray(), condition => condition == CellConditions.None),
+        source.Description.Channels.Keys.ToDictionary(channel => channel, channel => source.Sensor.FootprintsMeters[channel]),
+        source.Sensor.Range,
+        Settings.Coast.Brightness);
+
+    private DayRetrieval[] Retrievals(RunSource source, ICoastStep? coast)
+    {
+        HemisphereTuning tuning = source.Sensor.In(Settings.Grid.Hemisphere);
+        return [.. Settings.Methods.Select(name => new DayRetrieval(
+            ConcentrationMethods.Create(name, tuning, Settings.Grid.Hemisphere), tuning.Screens, source.Sensor.Scatter, MaskOf(source), coast))];
+    }
+
+    // Sensors with the same gap share a mask.
+    private CellMask MaskOf(RunSource source)
     {
         double gap = source.Sensor.PolarGapLatitudeDegrees ?? double.PositiveInfinity;
         if (!masks.TryGetValue(gap, out CellMask? mask))
@@ -36,8 +62,6 @@ internal sealed class DayPreparation
             masks.Add(gap, mask);
         }
 
-        HemisphereTuning tuning = source.Sensor.In(Settings.Grid.Hemisphere);
-        return [.. Settings.Methods.Select(name =>
-            new DayRetrieval(ConcentrationMethods.Create(name, tuning, Settings.Grid.Hemisphere), tuning.Screens, source.Sensor.Scatter, mask))];
+        return mask;
     }
 }

@@ -20,8 +20,14 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
         ((ushort)CellConditions.NoSolution, "no_solution"),
     ];
 
+    private static readonly (ushort Mask, string Meaning) CoastMeaning = ((ushort)CellConditions.CoastCorrected, "coast_corrected");
+
     private static readonly KeyValuePair<string, string>[] Nothing = [];
     private static readonly KeyValuePair<string, string>[] Ancillary = [new("ancillary_variables", "concentration_se conditions")];
+
+    // A run without the correction never sets its bit and does not speak of it.
+    private readonly (ushort Mask, string Meaning)[] meanings =
+        settings.Coast.Correction == CoastCorrection.Off ? Meanings : [.. Meanings, CoastMeaning];
 
     private readonly double[] limits = [settings.Rules.IceFraction, settings.Rules.PackFraction];
 
@@ -50,7 +56,7 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
         }
 
         variables.Add(new MaskVariable(
-            "conditions", "why a cell's concentration is what it is", "sea_ice_area_fraction status_flag", Nothing, planes.ConditionMemory, Meanings));
+            "conditions", "why a cell's concentration is what it is", "sea_ice_area_fraction status_flag", Nothing, planes.ConditionMemory, meanings));
         GridFile.Write(
             layout.GridFile(method.Name, settings.Grid.Hemisphere, day.Date),
             settings.Grid,

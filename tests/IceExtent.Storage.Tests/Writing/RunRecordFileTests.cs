@@ -19,7 +19,7 @@ public sealed class RunRecordFileTests : IDisposable
         Counts = new(DaysDone: 1, Gaps: 1, Rejected: 1),
         Days =
         [
-            new(new(1988, 2, 28), Hemisphere.North, DayOutcome.Done, [new("any", 1, 2, 3, 4, 5, 6)], []),
+            new(new(1988, 2, 28), Hemisphere.North, DayOutcome.Done, [new("any", 1, 2, 3, 4, 5, 6, 7)], []),
             new(new(1988, 2, 29), Hemisphere.South, DayOutcome.Rejected, [], [new("IE2104", "a.nc", "nothing", "something", "Do it.")]),
         ],
         Faults = [],
@@ -86,7 +86,8 @@ public sealed class RunRecordFileTests : IDisposable
                       "clipped_above": 3,
                       "screened_37_19": 4,
                       "screened_22_19": 5,
-                      "no_solution": 6
+                      "no_solution": 6,
+                      "coast_corrected": 7
                     }
                   ],
                   "faults": []
