@@ -21,6 +21,7 @@ public sealed class RunFileTests : IDisposable
         Assert.True(settings.WriteGrids);
         Assert.Equal(0.15, settings.Rules.IceFraction);
         Assert.Equal(0.80, settings.Rules.PackFraction);
+        Assert.Equal(CoastCorrection.Off, settings.Coast.Correction);
         Assert.Equal(run.PathOf("out"), settings.Output);
         Assert.Equal(5, settings.Sources[0].Description.Files.Count);
         Assert.Equal(16, settings.Ocean.Count(ocean => ocean));
@@ -36,6 +37,11 @@ public sealed class RunFileTests : IDisposable
         { "[totals]\nice_fraction = 15", "", "IE1006", "Write the fraction: 0.15, not 15." },
         { "[totals]\nice_fraction = 0.9", "", "IE1011", "not above ice_fraction = 0.9" },
         { "[land]\nlimit = 0.5", "", "IE1003", "limit_fraction" },
+        { "[coast]\ncorrection = \"brightnes\"", "", "IE1007", "Did you mean brightness?" },
+        { "[coast]\ncorection = \"off\"", "", "IE1003", "Did you mean correction?" },
+        { "[coast]\nminimum_file = \"m.nc\"", "", "IE1011", "a file with correction = \"off\"" },
+        { "[coast]\nshore_box_cells = 4", "", "IE1011", "an even number" },
+        { "[coast]\nmost_land_fraction = 0.3\nleast_land_fraction = 0.4", "", "IE1011", "not above least_land_fraction = 0.4" },
         { "", "status = \"finl\"", "IE1007", "Did you mean final?" },
         { "output = \"again\"", "", "IE1002", "already defined" },
         { "notice = ", "", "IE1002", "not TOML" },
