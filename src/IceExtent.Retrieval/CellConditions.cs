@@ -37,6 +37,9 @@ public enum CellConditions : ushort
     /// <summary>The method has no answer for these temperatures (the tie-point triangle degenerates).</summary>
     NoSolution = 1 << 8,
 
+    /// <summary>The coast correction changed the cell: its temperatures, or its concentration, by the run's choice.</summary>
+    CoastCorrected = 1 << 9,
+
     /// <summary>Empty, and given the mean of its observed neighbours; the bit that says why it was empty stays.</summary>
     FilledFromNeighbours = 1 << 10,
 

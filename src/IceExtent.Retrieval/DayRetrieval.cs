@@ -2,8 +2,8 @@ namespace IceExtent.Retrieval;
 
 /// <summary>Everything between one day's brightness temperatures and its concentration, for one method.</summary>
 /// <remarks>
-/// The steps, in order: retrieve, empty land and polar gap, screen weather, clip, standard error. The range check of
-/// the temperatures comes before them, once a day: <see cref="CheckRange"/>. Immutable and safe to use from several
+/// The steps, in order: retrieve, empty land and polar gap, screen weather, clip, correct the coast, standard error. The
+/// range check of the temperatures comes before them, once a day: <see cref="CheckRange"/>. Immutable and safe to use from several
 /// threads. The cells are handled in runs that stay in the processor's cache.
 /// </remarks>
 public sealed class DayRetrieval
@@ -14,6 +14,7 @@ public sealed class DayRetrieval
     private readonly WeatherScreens screens;
     private readonly RetrievalScatter scatter;
     private readonly CellMask mask;
+    private readonly ICoastStep? coast;
     private readonly Channel[] needed;
 
     /// <summary>Prepares the retrieval of one sensor on one grid.</summary>
@@ -21,13 +22,15 @@ public sealed class DayRetrieval
     /// <param name="screens">The weather screens.</param>
     /// <param name="scatter">The scatter over the pure surfaces.</param>
     /// <param name="mask">Land and polar gap.</param>
-    public DayRetrieval(IConcentrationMethod method, WeatherScreens screens, RetrievalScatter scatter, CellMask mask)
+    /// <param name="coast">Corrects concentrations near land, or null.</param>
+    public DayRetrieval(
+        IConcentrationMethod method, WeatherScreens screens, RetrievalScatter scatter, CellMask mask, ICoastStep? coast = null)
     {
         ArgumentNullException.ThrowIfNull(method);
         ArgumentNullException.ThrowIfNull(screens);
         ArgumentNullException.ThrowIfNull(scatter);
         ArgumentNullException.ThrowIfNull(mask);
-        (this.method, this.screens, this.scatter, this.mask) = (method, screens, scatter, mask);
+        (this.method, this.screens, this.scatter, this.mask, this.coast) = (method, screens, scatter, mask, coast);
         needed = [.. method.Channels];
     }
 
@@ -69,7 +72,19 @@ public sealed class DayRetrieval
             counts += RetrieveRun(observed, new(start, Math.Min(RunCells, observed.CellCount - start)), into);
         }
 
-        return counts;
+        return coast is null ? counts : counts with { CoastCorrected = CorrectCoast(coast, into) };
+    }
+
+    // The step looks at neighbours, so it needs the whole plane; a new total has a new standard error.
+    private int CorrectCoast(ICoastStep step, ConcentrationPlanes into)
+    {
+        int corrected = step.Correct(into);
+        if (corrected > 0)
+        {
+            CellScatter.Apply(into.Total, scatter, into.StandardError);
+        }
+
+        return corrected;
     }
 
     private RetrievalCounts RetrieveRun(BrightnessPlanes observed, CellRange cells, ConcentrationPlanes into)

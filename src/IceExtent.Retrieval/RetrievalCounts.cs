@@ -8,6 +8,7 @@ namespace IceExtent.Retrieval;
 /// <param name="ClippedAbove">Concentrations lowered to 1.</param>
 /// <param name="NoObservation">Cells without a channel the method needs.</param>
 /// <param name="NoSolution">Cells whose temperatures the method cannot explain.</param>
+/// <param name="CoastCorrected">Cells that the coast correction changed.</param>
 public readonly record struct RetrievalCounts(
     int OutOfRange,
     int Gradient3719,
@@ -15,7 +16,8 @@ public readonly record struct RetrievalCounts(
     int ClippedBelow,
     int ClippedAbove,
     int NoObservation,
-    int NoSolution)
+    int NoSolution,
+    int CoastCorrected = 0)
 {
     /// <summary>Adds count by count.</summary>
     public static RetrievalCounts operator +(RetrievalCounts left, RetrievalCounts right) => left.Add(right);
@@ -28,5 +30,6 @@ public readonly record struct RetrievalCounts(
         ClippedBelow + other.ClippedBelow,
         ClippedAbove + other.ClippedAbove,
         NoObservation + other.NoObservation,
-        NoSolution + other.NoSolution);
+        NoSolution + other.NoSolution,
+        CoastCorrected + other.CoastCorrected);
 }

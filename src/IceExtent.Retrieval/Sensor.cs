@@ -37,6 +37,12 @@ public sealed record Sensor
     /// <summary>The frequency of every channel the sensor has, in GHz.</summary>
     public required IReadOnlyDictionary<Channel, double> FrequenciesGigahertz { get; init; }
 
+    /// <summary>
+    /// The 3 dB width of the footprint of each channel for which it is known, in m: the geometric mean of its two axes, as
+    /// daily grids mix passes of every direction.
+    /// </summary>
+    public IReadOnlyDictionary<Channel, double> FootprintsMeters { get; init; } = new Dictionary<Channel, double>();
+
     /// <summary>The first day of service.</summary>
     public required DateOnly FirstDay { get; init; }
 

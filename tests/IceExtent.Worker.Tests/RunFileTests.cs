@@ -22,6 +22,7 @@ public sealed class RunFileTests : IDisposable
         Assert.True(settings.WriteGrids);
         Assert.Equal(0.15, settings.Rules.IceFraction);
         Assert.Equal(0.80, settings.Rules.PackFraction);
+        Assert.Equal(CoastCorrection.Off, settings.Coast.Correction);
         Assert.Equal(run.PathOf("out"), settings.Output);
         Assert.Equal(5, settings.Sources[0].Description.Files.Count);
         Assert.Equal(16, settings.Ocean.Count(ocean => ocean));
@@ -62,6 +63,11 @@ public sealed class RunFileTests : IDisposable
         { "[polar_gap]\nrule = 1", "", "IE1005", "a text in double quotes" },
         { "[polar_gap]\nleast_rim_share = 50", "", "IE1006", "Write the fraction: 0.5, not 50." },
         { "[polar_gap]\nleast_rim_share = 0", "", "IE1006", "0.01 to 1" },
+        { "[coast]\ncorrection = \"brightnes\"", "", "IE1007", "Did you mean brightness?" },
+        { "[coast]\ncorection = \"off\"", "", "IE1003", "Did you mean correction?" },
+        { "[coast]\nminimum_file = \"m.nc\"", "", "IE1011", "a file with correction = \"off\"" },
+        { "[coast]\nshore_box_cells = 4", "", "IE1011", "an even number" },
+        { "[coast]\nmost_land_fraction = 0.3\nleast_land_fraction = 0.4", "", "IE1011", "not above least_land_fraction = 0.4" },
         { "", "status = \"finl\"", "IE1007", "Did you mean final?" },
         { "output = \"again\"", "", "IE1002", "already defined" },
         { "notice = ", "", "IE1002", "not TOML" },

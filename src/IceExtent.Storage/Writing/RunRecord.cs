@@ -91,6 +91,7 @@ public sealed record DayRecord(
 /// <param name="NoSolution">The method had no answer.</param>
 /// <param name="Filled">Filled from the neighbours; 0 in a record that does not say it.</param>
 /// <param name="PolarGapFilled">Filled inside the polar gap; 0 in a record that does not say it.</param>
+/// <param name="CoastCorrected">The coast correction changed the cell.</param>
 public sealed record CellCounts(
     string Method,
     int OutOfRange,
@@ -100,4 +101,5 @@ public sealed record CellCounts(
     [property: JsonPropertyName("screened_22_19")] int Screened2219,
     int NoSolution,
     int Filled = 0,
-    int PolarGapFilled = 0);
+    int PolarGapFilled = 0,
+    int CoastCorrected = 0);

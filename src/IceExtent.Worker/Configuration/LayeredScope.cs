@@ -16,6 +16,9 @@ internal sealed class LayeredScope(ConfigScope run, ConfigScope defaults)
     public string? Name(string table, string key, IReadOnlyCollection<string> names) =>
         Take(table, key, (scope, required) => scope.Name(key, names, required));
 
+    /// <summary>A text that only the run file may have, or null.</summary>
+    public string? Text(string table, string key) => TableOf(runTables, run, table, required: false)?.Text(key, required: false);
+
     /// <summary>Adds IE1011 for a value that does not go with another.</summary>
     public void Refuse(string table, string key, string found, string allowed)
     {

@@ -38,8 +38,9 @@ internal static class RunFileLoader
         double? errorLength = layered.Number("standard_error", "correlation_length_km", 1.0, 3_000.0, "km");
         int? neighbours = layered.WholeNumber("filling", "neighbours", 0, NeighbourFilling.MostNeighbours);
         double? rimShare = layered.Number("polar_gap", "least_rim_share", 0.01, 1.0, string.Empty);
+        CoastSettings? coast = CoastLoader.Load(layered, grid?.Grid, folder, faults);
         layered.RefuseUnknown();
-        SourceLoader sources = new(folder, config, methods);
+        SourceLoader sources = new(folder, config, methods, needsFootprints: coast?.Correction == CoastCorrection.Brightness);
         List<RunSource?> loaded = [.. scope.Tables("source").Select(source => sources.Load(source, grid?.Grid))];
         scope.RefuseUnknown();
         LandShare? land = grid is null ? null : Land(grid, faults);
@@ -53,8 +54,10 @@ internal static class RunFileLoader
             RunFile = path,
             Output = Path.GetFullPath(output!, folder),
             Grid = grid!.Grid,
-            ConfigPaths = [config.Defaults, grid.ConfigPath, grid.LandPath],
+            ConfigPaths = [config.Defaults, grid.ConfigPath, grid.LandPath, .. coast!.MinimumPath is { } minimum ? [minimum] : Array.Empty<string>()],
             Ocean = land!.OceanBelow(landLimit!.Value),
+            Land = land,
+            Coast = coast,
             Methods = methods,
             WriteGrids = writeGrids ?? true,
             Rules = rules!,

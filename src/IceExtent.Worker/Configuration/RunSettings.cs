@@ -29,6 +29,12 @@ internal sealed record RunSettings
     /// <summary>Whether each cell counts as ocean.</summary>
     public required bool[] Ocean { get; init; }
 
+    /// <summary>How much of each cell is land.</summary>
+    public required LandShare Land { get; init; }
+
+    /// <summary>What is done about land in the footprints of ocean cells.</summary>
+    public required CoastSettings Coast { get; init; }
+
     public required IReadOnlyList<string> Methods { get; init; }
 
     public required bool WriteGrids { get; init; }

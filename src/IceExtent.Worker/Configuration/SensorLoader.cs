@@ -26,6 +26,7 @@ internal static class SensorLoader
         double? gap = scope.Number("polar_gap_latitude", 60.0, 90.0, "degrees", required: false);
         double[]? range = scope.Numbers("range_k", 2, RangeScreen.Physical.LowestKelvins, RangeScreen.Physical.HighestKelvins, "K");
         Dictionary<Channel, double> frequencies = Frequencies(scope);
+        Dictionary<Channel, double> footprints = Footprints(scope, frequencies);
         RetrievalScatter? scatter = Scatter(scope.Table("scatter"));
         HemisphereTuning? north = Tuning(scope.Table("north"));
         HemisphereTuning? south = Tuning(scope.Table("south"));
@@ -45,6 +46,7 @@ internal static class SensorLoader
             Name = Path.GetFileNameWithoutExtension(path),
             Title = title!,
             FrequenciesGigahertz = frequencies,
+            FootprintsMeters = footprints,
             FirstDay = first!.Value,
             LastDay = last,
             Range = new(range![0], range[1]),
@@ -75,6 +77,32 @@ internal static class SensorLoader
         }
 
         return frequencies;
+    }
+
+    private static Dictionary<Channel, double> Footprints(ConfigScope scope, Dictionary<Channel, double> frequencies)
+    {
+        const double MetersPerKilometer = 1_000.0;
+        Dictionary<Channel, double> footprints = [];
+        if (scope.Table("footprints_km", required: false) is { } table)
+        {
+            foreach (Channel channel in ChannelNames.All.Where(channel => table.Has(ChannelNames.NameOf(channel))))
+            {
+                string name = ChannelNames.NameOf(channel);
+                double[]? axes = table.Numbers(name, 2, 1.0, 300.0, "km");
+                if (!frequencies.ContainsKey(channel))
+                {
+                    Refuse(table, name, "the footprint of a channel that frequencies_ghz does not have", "footprints of the sensor's own channels");
+                }
+                else if (axes is [var along, var across])
+                {
+                    footprints[channel] = Math.Sqrt(along * across) * MetersPerKilometer;
+                }
+            }
+
+            table.RefuseUnknown();
+        }
+
+        return footprints;
     }
 
     private static RetrievalScatter? Scatter(ConfigScope? scope)

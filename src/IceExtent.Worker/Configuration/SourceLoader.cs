@@ -7,7 +7,11 @@ using IceExtent.Storage.Reading;
 namespace IceExtent.Worker.Configuration;
 
 /// <summary>Checks the [[source]] tables of a run file.</summary>
-internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadOnlyList<string> methods)
+/// <param name="runFolder">What relative paths start from.</param>
+/// <param name="config">The program's own files.</param>
+/// <param name="methods">The methods of the run.</param>
+/// <param name="needsFootprints">Whether the footprint of every channel must be known.</param>
+internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadOnlyList<string> methods, bool needsFootprints)
 {
     private static readonly Dictionary<string, RawNumber> Numbers = new(StringComparer.Ordinal)
     {
@@ -90,6 +94,17 @@ internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadO
                 $"the channel {ChannelNames.NameOf(channel)}, which {sensor.Name} does not have",
                 string.Join(", ", sensor.FrequenciesGigahertz.Keys.Select(ChannelNames.NameOf)),
                 "Remove the channel or choose another sensor."));
+        }
+
+        foreach (Channel channel in channels.Keys.Where(channel =>
+            needsFootprints && sensor.FrequenciesGigahertz.ContainsKey(channel) && !sensor.FootprintsMeters.ContainsKey(channel)))
+        {
+            scope.Faults.Add(new(
+                "IE1015",
+                scope.Where("sensor", scope.PositionOf("sensor")),
+                $"the sensor {sensor.Name}, whose file has no footprint of {ChannelNames.NameOf(channel)}",
+                "a sensor with [footprints_km] for every channel of the source, as coast.correction = \"brightness\" needs them",
+                "Add the footprint to a sensor file of your own with its source, or choose another correction."));
         }
 
         foreach (string name in methods)

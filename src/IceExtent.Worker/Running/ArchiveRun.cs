@@ -117,7 +117,8 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         method.Counts.Gradient2219,
         method.Counts.NoSolution,
         method.Filled,
-        method.PolarGapFilled ?? 0);
+        method.PolarGapFilled ?? 0,
+        method.Counts.CoastCorrected);
 
     private void RemoveGrids(IEnumerable<DateOnly> days)
     {

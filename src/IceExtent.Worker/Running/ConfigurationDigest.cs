@@ -29,10 +29,20 @@ internal static class ConfigurationDigest
         yield return FormattableString.Invariant(
             $"{settings.Rules.IceFraction:R} {settings.Rules.PackFraction:R} {settings.LandLimitFraction:R} {settings.ErrorLengthMeters:R}");
         yield return FormattableString.Invariant($"{settings.LeastNeighbours} {settings.Rules.PolarGap} {settings.LeastRimShare:R}");
+        yield return CoastText(settings.Coast);
         foreach (RunSource source in settings.Sources)
         {
             string channels = string.Join(' ', source.Description.Channels.OrderBy(pair => pair.Key).Select(pair => $"{ChannelNames.NameOf(pair.Key)}={pair.Value}"));
             yield return FormattableString.Invariant($"{source.Sensor.Name} {source.Status} {channels} {source.Description.Raw}");
         }
     }
+
+    // Only what the chosen correction uses: the rest decides no number.
+    private static string CoastText(CoastSettings coast) => coast.Correction switch
+    {
+        CoastCorrection.Brightness => FormattableString.Invariant($"{coast.Correction} {coast.Brightness}"),
+        CoastCorrection.Concentration when coast.MinimumFraction is null => FormattableString.Invariant($"{coast.Correction} {coast.Spill}"),
+        CoastCorrection.Concentration => FormattableString.Invariant($"{coast.Correction} {coast.Minimum}"), // The file's bytes are counted above.
+        _ => string.Empty,
+    };
 }

@@ -7,8 +7,10 @@ namespace IceExtent.Worker.Running;
 /// <summary>Everything that days share and nobody changes: retrievals by source and method, filling, regions, error correlation.</summary>
 internal sealed class DayPreparation
 {
+    private readonly Dictionary<double, SharedMask> masks = [];
     private readonly DayRetrieval[][] retrievals;
     private readonly PolarGapSystem?[] gaps;
+    private readonly CoastBrightness?[] coasts;
 
     public DayPreparation(RunSettings settings)
     {
@@ -16,10 +18,10 @@ internal sealed class DayPreparation
         Regions = [TotalsRegion.Hemisphere(settings.Grid, settings.Ocean)];
         Correlation = new(settings.Grid, settings.ErrorLengthMeters);
         Neighbours = settings.LeastNeighbours > 0 ? new(settings.Grid, settings.LeastNeighbours) : null;
-        Dictionary<double, SharedMask> masks = [];
-        SharedMask[] maskOfSource = [.. settings.Sources.Select(source => MaskOf(source.Sensor.PolarGapLatitudeDegrees, masks))];
-        retrievals = [.. settings.Sources.Select((source, index) => Retrievals(source, maskOfSource[index].Mask))];
-        gaps = [.. maskOfSource.Select(shared => shared.Gap)];
+        ICoastStep? coast = settings.Coast.Correction == CoastCorrection.Concentration ? ConcentrationStep() : null;
+        retrievals = [.. settings.Sources.Select(source => Retrievals(source, coast))];
+        coasts = [.. settings.Sources.Select(source => settings.Coast.Correction == CoastCorrection.Brightness ? BrightnessStep(source) : null)];
+        gaps = [.. settings.Sources.Select(source => MaskOf(source).Gap)];
     }
 
     public RunSettings Settings { get; }
@@ -37,8 +39,32 @@ internal sealed class DayPreparation
     /// <summary>One retrieval a method, in the run's order.</summary>
     public IReadOnlyList<DayRetrieval> RetrievalsOf(int source) => retrievals[source];
 
-    private SharedMask MaskOf(double? gapLatitudeDegrees, Dictionary<double, SharedMask> masks)
+    /// <summary>The correction of brightness temperatures near land, or null where the run has none.</summary>
+    public CoastBrightness? CoastOf(int source) => coasts[source];
+
+    private ICoastStep ConcentrationStep() => Settings.Coast.MinimumFraction is { } minima
+        ? new CoastMinimumStep(new(Settings.Grid, Settings.Ocean), minima, Settings.Coast.Minimum)
+        : new CoastSpillStep(Settings.Grid, Settings.Land, Settings.Ocean, Settings.Coast.Spill);
+
+    private CoastBrightness BrightnessStep(RunSource source) => new(
+        Settings.Grid,
+        Settings.Land,
+        Array.ConvertAll(MaskOf(source).Mask.Conditions.ToArray(), condition => condition == CellConditions.None),
+        source.Description.Channels.Keys.ToDictionary(channel => channel, channel => source.Sensor.FootprintsMeters[channel]),
+        source.Sensor.Range,
+        Settings.Coast.Brightness);
+
+    private DayRetrieval[] Retrievals(RunSource source, ICoastStep? coast)
     {
+        HemisphereTuning tuning = source.Sensor.In(Settings.Grid.Hemisphere);
+        return [.. Settings.Methods.Select(name => new DayRetrieval(
+            ConcentrationMethods.Create(name, tuning, Settings.Grid.Hemisphere), tuning.Screens, source.Sensor.Scatter, MaskOf(source).Mask, coast))];
+    }
+
+    // Sensors with the same gap share a mask.
+    private SharedMask MaskOf(RunSource source)
+    {
+        double? gapLatitudeDegrees = source.Sensor.PolarGapLatitudeDegrees;
         double key = gapLatitudeDegrees ?? double.PositiveInfinity;
         if (!masks.TryGetValue(key, out SharedMask? shared))
         {
@@ -49,13 +75,6 @@ internal sealed class DayPreparation
         }
 
         return shared;
-    }
-
-    private DayRetrieval[] Retrievals(RunSource source, CellMask mask)
-    {
-        HemisphereTuning tuning = source.Sensor.In(Settings.Grid.Hemisphere);
-        return [.. Settings.Methods.Select(name =>
-            new DayRetrieval(ConcentrationMethods.Create(name, tuning, Settings.Grid.Hemisphere), tuning.Screens, source.Sensor.Scatter, mask))];
     }
 
     private sealed record SharedMask(CellMask Mask, PolarGapSystem? Gap);

@@ -29,11 +29,14 @@ internal sealed class DayWorker(DayPreparation preparation, GridArchive? grids)
         }
 
         int outOfRange = DayRetrieval.CheckRange(observed, day.Source.Settings.Sensor.Range, rangeConditions);
+        CoastBrightness? coast = preparation.CoastOf(day.Source.Index);
+        int coastCorrected = coast?.Correct(observed, rangeConditions) ?? 0;
         IReadOnlyList<DayRetrieval> retrievals = preparation.RetrievalsOf(day.Source.Index);
         MethodResult[] results = new MethodResult[retrievals.Count];
         for (int index = 0; index < results.Length; index++)
         {
             RetrievalCounts counts = retrievals[index].Retrieve(observed, rangeConditions, concentration);
+            counts = coast is null ? counts : counts with { CoastCorrected = coastCorrected };
             (int filled, int? gapFilled) = Fill(day.Source.Index);
             grids?.Write(day, retrievals[index].Method, concentration);
             results[index] = new(retrievals[index].Method.Name, counts, filled, gapFilled, [.. preparation.Regions.Select(region => Row(day, region))]);

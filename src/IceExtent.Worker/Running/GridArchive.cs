@@ -18,6 +18,7 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
         ((ushort)CellConditions.ClippedBelow, "clipped_from_below_0"),
         ((ushort)CellConditions.ClippedAbove, "clipped_from_above_1"),
         ((ushort)CellConditions.NoSolution, "no_solution"),
+        ((ushort)CellConditions.CoastCorrected, "coast_corrected"),
         ((ushort)CellConditions.FilledFromNeighbours, "filled_from_neighbours"),
         ((ushort)CellConditions.FilledPolarGap, "filled_polar_gap"),
     ];

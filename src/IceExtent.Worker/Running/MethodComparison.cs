@@ -6,7 +6,7 @@ using IceExtent.Worker.Configuration;
 
 namespace IceExtent.Worker.Running;
 
-/// <summary>Runs every method of a run file on the same days and holds them against the first.</summary>
+/// <summary>Runs every method of a run file on the same days and holds them against the first. Fills nothing: what is compared was observed.</summary>
 internal sealed class MethodComparison(RunSettings settings, string folder)
 {
     private static readonly KeyValuePair<string, string>[] Nothing = [];
@@ -23,6 +23,7 @@ internal sealed class MethodComparison(RunSettings settings, string folder)
         BrightnessPlanes observed = new(settings.Grid.CellCount, day.Source.Settings.Description.Channels.Keys);
         day.Source.Reader.Read(day.Input, observed);
         DayRetrieval.CheckRange(observed, day.Source.Settings.Sensor.Range, rangeConditions);
+        preparation.CoastOf(day.Source.Index)?.Correct(observed, rangeConditions);
         IReadOnlyList<DayRetrieval> retrievals = preparation.RetrievalsOf(day.Source.Index);
         for (int method = 0; method < planes.Length; method++)
         {

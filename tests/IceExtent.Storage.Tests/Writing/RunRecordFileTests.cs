@@ -19,7 +19,7 @@ public sealed class RunRecordFileTests : IDisposable
         Counts = new(DaysDone: 1, Gaps: 1, Rejected: 1, PolarGapFallbacks: 0),
         Days =
         [
-            new(new(1988, 2, 28), Hemisphere.North, DayOutcome.Done, [new("any", 1, 2, 3, 4, 5, 6, 7, 8)], []),
+            new(new(1988, 2, 28), Hemisphere.North, DayOutcome.Done, [new("any", 1, 2, 3, 4, 5, 6, 7, 8, 9)], []),
             new(new(1988, 2, 29), Hemisphere.South, DayOutcome.Rejected, [], [new("IE2104", "a.nc", "nothing", "something", "Do it.")]),
         ],
         Faults = [],
@@ -105,7 +105,8 @@ public sealed class RunRecordFileTests : IDisposable
                       "screened_22_19": 5,
                       "no_solution": 6,
                       "filled": 7,
-                      "polar_gap_filled": 8
+                      "polar_gap_filled": 8,
+                      "coast_corrected": 9
                     }
                   ],
                   "faults": []
