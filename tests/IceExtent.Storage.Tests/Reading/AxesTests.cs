@@ -62,7 +62,7 @@ public sealed class AxesTests
     [InlineData("grid-spacing.nc", "IE2108", "column spacing 12500 m")]
     [InlineData("grid-degrees.nc", "IE2108", "the unit 'degrees'")]
     [InlineData("grid-map.nc", "IE2108", "standard_parallel 60 degrees")]
-    [InlineData("grid-size.nc", "IE2107", "time 1 x y 6 x x 4")]
+    [InlineData("grid-size.nc", "IE2107", "time 1, y 6, x 4")]
     public void Read_FileOnAnotherGrid_IsRefusedWithWhatDiffers(string file, string code, string found)
     {
         Fault fault = SmallFiles.FaultOf(SmallFiles.Source(file, "tb"));

@@ -47,7 +47,7 @@ public sealed class LandShareFileTests
         Fault fault = FaultOf(path);
 
         Assert.Equal("IE2201", fault.Code);
-        Assert.Equal("the shape y 5 x x 3", fault.Found);
+        Assert.Equal("the shape y 5, x 3", fault.Found);
         Assert.StartsWith("3 rows and 4 columns of the grid small", fault.Allowed, StringComparison.Ordinal);
         Assert.Equal($"{path}, variable land_area_fraction", fault.Where);
     }

@@ -105,9 +105,9 @@ public sealed class PackingTests
     [InlineData("big_endian", "IE2106", "big-endian")]
     [InlineData("letters", "IE2106", "text")]
     [InlineData("words", "IE2106", "text")]
-    [InlineData("column", "IE2107", "time 1 x y 6")]
+    [InlineData("column", "IE2107", "time 1, y 6")]
     [InlineData("number", "IE2107", "a single number")]
-    [InlineData("two_bands", "IE2107", "band 2 x y 6 x x 5")]
+    [InlineData("two_bands", "IE2107", "band 2, y 6, x 5")]
     public void Read_UnusableVariable_IsRefusedWithItsNameAndWhatWasFound(string variable, string code, string found)
     {
         var fault = SmallFiles.FaultOf(SmallFiles.Source("packing.nc", variable));

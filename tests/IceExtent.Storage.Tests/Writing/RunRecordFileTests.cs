@@ -37,7 +37,6 @@ public sealed class RunRecordFileTests : IDisposable
     {
         RunRecordFile.Write(folder.PathOf("new.json"), Record);
         string old = string.Join('\n', File.ReadAllLines(folder.PathOf("new.json")).Where(line => !line.Contains("fill", StringComparison.Ordinal) && !line.Contains("fallbacks", StringComparison.Ordinal)))
-            .Replace("\"no_solution\": 6,", "\"no_solution\": 6", StringComparison.Ordinal)
             .Replace("\"rejected\": 1,", "\"rejected\": 1", StringComparison.Ordinal);
         File.WriteAllText(folder.PathOf("old.json"), old);
 
