@@ -55,17 +55,23 @@ public sealed class CoastBrightness
 
         this.range = range;
         channels = [.. footprintsMeters.Keys.Order()];
-        float[][] shares = Array.ConvertAll(
-            channels, channel => FootprintShare.Of(land.Fraction, grid.Columns, FootprintShare.Weights(footprintsMeters[channel], grid.Frame.CellMeters)));
-        bool[] pureLand = PureLand(ocean, shares, rules.PureLandFraction);
+        Dictionary<double, float[]> sharesByWidth = footprintsMeters.Values.Distinct().ToDictionary(
+            width => width, width => FootprintShare.Of(land.Fraction, grid.Columns, FootprintShare.Weights(width, grid.Frame.CellMeters)));
+        float[][] shares = Array.ConvertAll(channels, channel => sharesByWidth[footprintsMeters[channel]]);
+        (float[] least, float[] most) = Extremes([.. sharesByWidth.Values]);
+        bool[] pureLand = new bool[ocean.Length];
+        for (int cell = 0; cell < pureLand.Length; cell++)
+        {
+            pureLand[cell] = !ocean[cell] && least[cell] >= rules.PureLandFraction;
+        }
+
         NearbyCells nearby = new(grid, rules.LandSearchMeters);
         List<int> coast = [];
         List<int> ends = [];
         List<int> lands = [];
         for (int cell = 0; cell < ocean.Length; cell++)
         {
-            float most = shares.Max(share => share[cell]);
-            if (ocean[cell] && most >= rules.LeastLandFraction && most <= rules.MostLandFraction
+            if (ocean[cell] && most[cell] >= rules.LeastLandFraction && most[cell] <= rules.MostLandFraction
                 && nearby.Nearest(cell, pureLand, rules.LandCells, lands) > 0)
             {
                 coast.Add(cell);
@@ -163,15 +169,19 @@ public sealed class CoastBrightness
         return (float)(sum / count);
     }
 
-    private static bool[] PureLand(ReadOnlySpan<bool> ocean, float[][] shares, double limit)
+    private static (float[] Least, float[] Most) Extremes(float[][] planes)
     {
-        bool[] pure = new bool[ocean.Length];
-        for (int cell = 0; cell < pure.Length; cell++)
+        float[] least = [.. planes[0]];
+        float[] most = [.. planes[0]];
+        foreach (float[] plane in planes)
         {
-            int at = cell;
-            pure[cell] = !ocean[cell] && Array.TrueForAll(shares, share => share[at] >= limit);
+            for (int cell = 0; cell < plane.Length; cell++)
+            {
+                least[cell] = Math.Min(least[cell], plane[cell]);
+                most[cell] = Math.Max(most[cell], plane[cell]);
+            }
         }
 
-        return pure;
+        return (least, most);
     }
 }

@@ -8,7 +8,7 @@ public sealed class CoastBrightnessTests
     private const float Land = 250f;
     private const float Sea = 160f;
 
-    private static readonly CoastBrightnessRules Rules = new(0.01, 0.90, 0.95, 100_000.0, 9); // As config/defaults.toml.
+    private static readonly CoastBrightnessRules Rules = new(0.01, 0.90, 0.95, 200_000.0, 9); // As config/defaults.toml.
     private static readonly KelvinRange Range = new(50.0, 350.0);
     private static readonly Dictionary<Channel, double> Footprints = new() { [Channel.V19] = 54_470.0, [Channel.V37] = 32_190.0 };
 

@@ -173,6 +173,23 @@ public sealed class RunFileTests : IDisposable
     }
 
     [Theory]
+    [InlineData("89v = [15.0, 13.0]", "IE1011", "a channel that frequencies_ghz does not have")]
+    [InlineData("19v = [69.0]", "IE1006", "a list of 2 numbers")]
+    [InlineData("19v = [69.0, 0.0]", "IE1006", "from 1 to 300 km")]
+    [InlineData("19x = [69.0, 43.0]", "IE1003", "19x")]
+    public void Load_SensorWithWrongFootprints_IsRefused(string footprint, string code, string words)
+    {
+        run.WriteDay(new(1990, 1, 1), _ => 0.5);
+        run.Write("tiny.toml", TinyRun.Sensor("1990-01-01", "1999-12-31") + "\n[footprints_km]\n" + footprint);
+
+        ConfigurationException faulty = Assert.Throws<ConfigurationException>(() => RunFileLoader.Load(run.RunFile, ConfigFolder.BesideProgram));
+
+        Fault fault = Assert.Single(faulty.Faults);
+        Assert.Equal(code, fault.Code);
+        Assert.Contains(words, fault.ToString(), StringComparison.Ordinal);
+    }
+
+    [Theory]
     [InlineData("mehtods", "methods")]
     [InlineData("gridd", "grid")]
     [InlineData("outptu", "output")]

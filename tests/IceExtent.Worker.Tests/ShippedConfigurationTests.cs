@@ -28,9 +28,10 @@ public sealed class ShippedConfigurationTests
         Sensor? sensor = SensorLoader.Load(Path.Combine(ConfigFolder.BesideProgram.Sensors, name + ".toml"), faults);
 
         Assert.Empty(faults);
+        Assert.Equal(sensor!.FrequenciesGigahertz.Keys.Order(), sensor.FootprintsMeters.Keys.Order());
         foreach (Hemisphere hemisphere in Enum.GetValues<Hemisphere>())
         {
-            TiePoints points = sensor!.In(hemisphere).TiePoints;
+            TiePoints points = sensor.In(hemisphere).TiePoints;
             NasaTeamCoefficients coefficients = NasaTeamCoefficients.From(points);
             (double first, double multi) = NasaTeamPlain.Solve(coefficients, points.FirstYear.V19Kelvins, points.FirstYear.H19Kelvins, points.FirstYear.V37Kelvins);
             Assert.Equal(1.0, first, 1e-9);
