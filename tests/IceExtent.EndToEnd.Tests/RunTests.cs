@@ -81,6 +81,19 @@ public sealed class RunTests : IDisposable
         ArchiveFiles.AssertSame(atOnce, ArchiveFiles.Of(run.PathOf("out")));
     }
 
+    /// <summary>NASA Team and its screens never look at 37H: its file may be missing, and is not opened where it stands.</summary>
+    [Fact]
+    public async Task Run_ChannelThatNothingUses_IsNotRead()
+    {
+        run.WriteDay(First, _ => 0.5);
+        File.Delete(run.DayFile(First, "h37"));
+
+        ProgramRun ended = await ProgramRun.OfAsync("run", run.RunFile);
+
+        Assert.Equal(ExitCode.Done, ended.ExitCode);
+        Assert.Equal(10_000.0, Assert.Single(Daily(1990).Rows).ExtentSquareKilometers!.Value, 1e-3);
+    }
+
     [Fact]
     public async Task Run_GridsNotWanted_WritesTablesOnly()
     {

@@ -36,6 +36,10 @@ public static class TableFile
         PublishedFile.Write(path, EncodeAsync(columns, rows, metadata).GetAwaiter().GetResult());
     }
 
+    /// <summary>Encodes a table and drops it, so that the library is loaded before the first table is due.</summary>
+    internal static void Rehearse<TRow>(IReadOnlyList<TableColumn<TRow>> columns, IReadOnlyList<TRow> rows) =>
+        _ = EncodeAsync(columns, rows, []).GetAwaiter().GetResult();
+
     /// <summary>Reads a whole table.</summary>
     /// <param name="path">A file that <see cref="Write{TRow}"/> wrote.</param>
     /// <exception cref="FaultException">IE3120: the file is missing, damaged or no Parquet file.</exception>

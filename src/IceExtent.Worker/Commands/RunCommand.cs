@@ -1,5 +1,6 @@
 using System.CommandLine;
 using System.Globalization;
+using IceExtent.Storage.Writing;
 using IceExtent.Worker.Configuration;
 using IceExtent.Worker.Running;
 
@@ -32,6 +33,7 @@ internal static class RunCommand
     public static async Task<int> RunAsync(string runFile, RunOptions options, CommandConsole console, CancellationToken cancellation)
     {
         CommonOptions.CheckPeriod(options.From, options.To);
+        _ = Task.Run(DailyTable.Rehearse, CancellationToken.None); // The other core is idle while files are checked.
         RunSettings settings = RunFileLoader.Load(runFile, ConfigFolder.BesideProgram);
         RunProgress progress = new(console);
         RunOutcome outcome = await progress.ShowAsync(() => new ArchiveRun(settings, options, TimeProvider.System).RunAsync(progress, cancellation));

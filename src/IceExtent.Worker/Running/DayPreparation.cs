@@ -8,6 +8,7 @@ namespace IceExtent.Worker.Running;
 internal sealed class DayPreparation
 {
     private readonly Dictionary<double, SharedMask> masks = [];
+    private readonly Channel[][] channels;
     private readonly DayRetrieval[][] retrievals;
     private readonly PolarGapSystem?[] gaps;
     private readonly CoastBrightness?[] coasts;
@@ -18,6 +19,7 @@ internal sealed class DayPreparation
         Regions = [TotalsRegion.Hemisphere(settings.Grid, settings.Ocean)];
         Correlation = new(settings.Grid, settings.ErrorLengthMeters);
         Neighbours = settings.LeastNeighbours > 0 ? new(settings.Grid, settings.LeastNeighbours) : null;
+        channels = [.. settings.Sources.Select(Needed)];
         ICoastStep? coast = settings.Coast.Correction == CoastCorrection.Concentration ? ConcentrationStep() : null;
         retrievals = [.. settings.Sources.Select(source => Retrievals(source, coast))];
         coasts = [.. settings.Sources.Select(source => settings.Coast.Correction == CoastCorrection.Brightness ? BrightnessStep(source) : null)];
@@ -36,11 +38,22 @@ internal sealed class DayPreparation
     /// <summary>The gap of a source's sensor, or null where there is nothing to fill.</summary>
     public PolarGapSystem? PolarGapOf(int source) => gaps[source];
 
+    /// <summary>The channels of a source that the run uses, in order: no other one is read.</summary>
+    public IReadOnlyList<Channel> ChannelsOf(int source) => channels[source];
+
     /// <summary>One retrieval a method, in the run's order.</summary>
     public IReadOnlyList<DayRetrieval> RetrievalsOf(int source) => retrievals[source];
 
     /// <summary>The correction of brightness temperatures near land, or null where the run has none.</summary>
     public CoastBrightness? CoastOf(int source) => coasts[source];
+
+    private Channel[] Needed(RunSource source)
+    {
+        HemisphereTuning tuning = source.Sensor.In(Settings.Grid.Hemisphere);
+        IEnumerable<Channel> methods = Settings.Methods.SelectMany(name => ConcentrationMethods.Create(name, tuning, Settings.Grid.Hemisphere).Channels);
+        IEnumerable<Channel> screens = tuning.Screens.Gradient2219Limit is null ? [Channel.V19, Channel.V37] : [Channel.V19, Channel.V22, Channel.V37];
+        return [.. methods.Concat(screens).Distinct().Where(source.Description.Channels.ContainsKey).Order()];
+    }
 
     private ICoastStep ConcentrationStep() => Settings.Coast.MinimumFraction is { } minima
         ? new CoastMinimumStep(new(Settings.Grid, Settings.Ocean), minima, Settings.Coast.Minimum)
@@ -50,7 +63,7 @@ internal sealed class DayPreparation
         Settings.Grid,
         Settings.Land,
         Array.ConvertAll(MaskOf(source).Mask.Conditions.ToArray(), condition => condition == CellConditions.None),
-        source.Description.Channels.Keys.ToDictionary(channel => channel, channel => source.Sensor.FootprintsMeters[channel]),
+        Needed(source).ToDictionary(channel => channel, channel => source.Sensor.FootprintsMeters[channel]),
         source.Sensor.Range,
         Settings.Coast.Brightness);
 

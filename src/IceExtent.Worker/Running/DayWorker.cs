@@ -65,7 +65,7 @@ internal sealed class DayWorker(DayPreparation preparation, GridArchive? grids)
 
     private BrightnessPlanes PlanesFor(OpenedSource source)
     {
-        IEnumerable<Channel> channels = source.Settings.Description.Channels.Keys.Order();
+        IReadOnlyList<Channel> channels = preparation.ChannelsOf(source.Index);
         string key = string.Join(' ', channels);
         if (!planesByChannels.TryGetValue(key, out BrightnessPlanes? planes))
         {

@@ -20,7 +20,7 @@ internal sealed class MethodComparison(RunSettings settings, string folder)
     /// <exception cref="FaultException">The day cannot be read, or the map cannot be written.</exception>
     public IReadOnlyList<MethodComparisonRow> Compare(PlannedDay day)
     {
-        BrightnessPlanes observed = new(settings.Grid.CellCount, day.Source.Settings.Description.Channels.Keys);
+        BrightnessPlanes observed = new(settings.Grid.CellCount, preparation.ChannelsOf(day.Source.Index));
         day.Source.Reader.Read(day.Input, observed);
         DayRetrieval.CheckRange(observed, day.Source.Settings.Sensor.Range, rangeConditions);
         preparation.CoastOf(day.Source.Index)?.Correct(observed, rangeConditions);
