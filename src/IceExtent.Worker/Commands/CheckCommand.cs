@@ -1,6 +1,5 @@
 using System.CommandLine;
 using System.Globalization;
-using System.Text.Json;
 using IceExtent.Retrieval;
 using IceExtent.Storage.Faults;
 using IceExtent.Worker.Configuration;
@@ -11,23 +10,18 @@ namespace IceExtent.Worker.Commands;
 /// <summary><c>check</c>: the run file and every input file, read but not processed.</summary>
 internal static class CheckCommand
 {
-    private static readonly JsonSerializerOptions Indented = new() { WriteIndented = true, PropertyNamingPolicy = JsonNamingPolicy.SnakeCaseLower };
-
     public static Command Make(CommandConsole console)
     {
-        Argument<string> runFile = CommonOptions.RunFile();
-        Option<DateOnly?> from = CommonOptions.Day("--from", "Leave out days before this one.");
-        Option<DateOnly?> to = CommonOptions.Day("--to", "Leave out days after this one.");
         Option<bool> json = CommonOptions.Json();
         Command command = new("check", "Check a run file and read every input file, without writing anything.\n\nExample:\n  iceextent check run.toml")
         {
-            runFile, from, to, json,
+            json,
         };
+        RunFilePeriod period = new(command);
         command.SetAction((parsed, cancellation) =>
         {
-            CommonOptions.CheckPeriod(parsed.GetValue(from), parsed.GetValue(to));
-            RunSettings settings = RunFileLoader.Load(parsed.GetValue(runFile)!, ConfigFolder.BesideProgram);
-            RunPlan plan = RunPlanner.Plan(settings, parsed.GetValue(from), parsed.GetValue(to), cancellation);
+            RunSettings settings = period.Load(parsed);
+            RunPlan plan = RunPlanner.Plan(settings, period.From(parsed), period.To(parsed), cancellation);
             List<Fault> faults = [.. plan.Gaps.Select(gap => gap.Fault)];
             if (ArchiveLock.Obstacle(settings.Output) is { } obstacle)
             {
@@ -65,8 +59,8 @@ internal static class CheckCommand
     {
         if (json)
         {
-            console.Print(JsonSerializer.Serialize(
-                new { DaysReadable = readable, Faults = faults.Select(fault => new { fault.Code, Text = fault.ToString() }) }, Indented));
+            console.Print(JsonText.Of(
+                new { DaysReadable = readable, Faults = faults.Select(fault => new { fault.Code, Text = fault.ToString() }) }));
             return;
         }
 

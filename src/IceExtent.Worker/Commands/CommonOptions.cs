@@ -7,8 +7,6 @@ namespace IceExtent.Worker.Commands;
 /// <summary>Arguments and options that several commands share.</summary>
 internal static class CommonOptions
 {
-    public static Argument<string> RunFile() => new("RUNFILE") { Description = "The run file (TOML)." };
-
     public static Option<DateOnly?> Day(string name, string description) => new(name)
     {
         Description = description,

@@ -1,6 +1,5 @@
 using System.CommandLine;
 using System.Globalization;
-using System.Text.Json;
 using IceExtent.Statistics;
 using IceExtent.Storage.Faults;
 using IceExtent.Storage.Writing;
@@ -12,32 +11,27 @@ namespace IceExtent.Worker.Commands;
 /// <summary><c>compare</c>: the methods of a run file side by side on the same days.</summary>
 internal static class CompareCommand
 {
-    private static readonly JsonSerializerOptions Indented = new() { WriteIndented = true, PropertyNamingPolicy = JsonNamingPolicy.SnakeCaseLower };
-
     public static Command Make(CommandConsole console)
     {
-        Argument<string> runFile = CommonOptions.RunFile();
-        Option<DateOnly?> from = CommonOptions.Day("--from", "Leave out days before this one.");
-        Option<DateOnly?> to = CommonOptions.Day("--to", "Leave out days after this one.");
         Option<string> output = new("--out") { Description = "The folder to write to.", HelpName = "DIR", DefaultValueFactory = _ => "comparison" };
         Option<bool> json = CommonOptions.Json();
         Command command = new(
             "compare",
             "Run every method of a run file on the same days: totals, differences from the first method, and maps of their spread.\n\nExample:\n  iceextent compare run.toml --from 1984-12-25 --to 1984-12-27 --out comparison")
         {
-            runFile, from, to, output, json,
+            output, json,
         };
+        RunFilePeriod period = new(command);
         command.SetAction((parsed, cancellation) =>
         {
-            CommonOptions.CheckPeriod(parsed.GetValue(from), parsed.GetValue(to));
-            RunSettings settings = RunFileLoader.Load(parsed.GetValue(runFile)!, ConfigFolder.BesideProgram);
+            RunSettings settings = period.Load(parsed);
             if (settings.Methods.Count < 2)
             {
                 throw new ConfigurationException([new("IE1014", settings.RunFile, $"one method ({settings.Methods[0]})", "two methods or more", "Name several in methods = [...].")]);
             }
 
             string folder = Path.GetFullPath(parsed.GetValue(output)!);
-            RunPlan plan = RunPlanner.Plan(settings, parsed.GetValue(from), parsed.GetValue(to), cancellation);
+            RunPlan plan = RunPlanner.Plan(settings, period.From(parsed), period.To(parsed), cancellation);
             (List<MethodComparisonRow> rows, List<Fault> faults) = Compare(settings, plan, folder, cancellation);
             ComparisonTable.Write(Path.Combine(folder, "comparison.parquet"), rows, Metadata(settings));
             console.Tell(faults);
@@ -94,7 +88,7 @@ internal static class CompareCommand
         }).ToList();
         if (json)
         {
-            console.Print(JsonSerializer.Serialize(new { Folder = folder, Against = settings.Methods[0], Means = means }, Indented));
+            console.Print(JsonText.Of(new { Folder = folder, Against = settings.Methods[0], Means = means }));
             return;
         }
 

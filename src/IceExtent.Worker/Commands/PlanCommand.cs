@@ -1,6 +1,5 @@
 using System.CommandLine;
 using System.Globalization;
-using System.Text.Json;
 using IceExtent.Worker.Configuration;
 using IceExtent.Worker.Running;
 
@@ -9,23 +8,18 @@ namespace IceExtent.Worker.Commands;
 /// <summary><c>plan</c>: what a run would do, doing nothing.</summary>
 internal static class PlanCommand
 {
-    private static readonly JsonSerializerOptions Indented = new() { WriteIndented = true, PropertyNamingPolicy = JsonNamingPolicy.SnakeCaseLower };
-
     public static Command Make(CommandConsole console)
     {
-        Argument<string> runFile = CommonOptions.RunFile();
-        Option<DateOnly?> from = CommonOptions.Day("--from", "Leave out days before this one.");
-        Option<DateOnly?> to = CommonOptions.Day("--to", "Leave out days after this one.");
         Option<bool> json = CommonOptions.Json();
         Command command = new("plan", "Show which days a run would process, from which sensor, and why others are left out.\n\nExample:\n  iceextent plan run.toml --json")
         {
-            runFile, from, to, json,
+            json,
         };
+        RunFilePeriod period = new(command);
         command.SetAction((parsed, cancellation) =>
         {
-            CommonOptions.CheckPeriod(parsed.GetValue(from), parsed.GetValue(to));
-            RunSettings settings = RunFileLoader.Load(parsed.GetValue(runFile)!, ConfigFolder.BesideProgram);
-            RunPlan plan = RunPlanner.Plan(settings, parsed.GetValue(from), parsed.GetValue(to), cancellation);
+            RunSettings settings = period.Load(parsed);
+            RunPlan plan = RunPlanner.Plan(settings, period.From(parsed), period.To(parsed), cancellation);
             Write(settings, plan, parsed.GetValue(json), console);
             return Task.FromResult(plan.Days.Count == 0 ? ExitCode.NoUsableInput : plan.Gaps.Count > 0 ? ExitCode.DoneWithGaps : ExitCode.Done);
         });
@@ -47,7 +41,7 @@ internal static class PlanCommand
             .ToList();
         if (json)
         {
-            console.Print(JsonSerializer.Serialize(
+            console.Print(JsonText.Of(
                 new
                 {
                     settings.Output,
@@ -59,8 +53,7 @@ internal static class PlanCommand
                     plan.DaysWithoutInput,
                     plan.DatesWithoutInput,
                     Rejected = plan.Gaps.Select(gap => new { gap.Date, gap.Fault.Code, Text = gap.Fault.ToString() }),
-                },
-                Indented));
+                }));
             return;
         }
 

@@ -11,19 +11,17 @@ internal static class RunCommand
 {
     public static Command Make(CommandConsole console)
     {
-        Argument<string> runFile = CommonOptions.RunFile();
-        Option<DateOnly?> from = CommonOptions.Day("--from", "Leave out days before this one.");
-        Option<DateOnly?> to = CommonOptions.Day("--to", "Leave out days after this one.");
         Option<int> workers = CommonOptions.Workers();
         Command command = new(
             "run",
             "Turn brightness temperatures into concentration grids and a daily series.\n\nExample:\n  iceextent run run.toml --from 1984-12-01 --to 1984-12-31")
         {
-            runFile, from, to, workers,
+            workers,
         };
+        RunFilePeriod period = new(command);
         command.SetAction((parsed, cancellation) => RunAsync(
-            parsed.GetValue(runFile)!,
-            new(parsed.GetValue(from), parsed.GetValue(to), parsed.GetValue(workers), [.. parsed.Tokens.Select(token => token.Value)]),
+            period.RunFile(parsed),
+            new(period.From(parsed), period.To(parsed), parsed.GetValue(workers), [.. parsed.Tokens.Select(token => token.Value)]),
             console,
             cancellation));
         return command;
