@@ -1,4 +1,5 @@
 using System.CommandLine;
+using System.CommandLine.Parsing;
 using System.Globalization;
 using IceExtent.Worker.Configuration;
 
@@ -34,19 +35,18 @@ internal static class CommonOptions
         }
     }
 
-    public static Option<int> Workers()
+    public static Option<int> Workers() =>
+        Count("--workers", "How many days are processed at a time; results do not depend on it.", _ => Environment.ProcessorCount, 256);
+
+    /// <summary>A whole number from 1 to a most.</summary>
+    public static Option<int> Count(string name, string description, Func<ArgumentResult, int> byDefault, int most)
     {
-        Option<int> option = new("--workers")
-        {
-            Description = "How many days are processed at a time; results do not depend on it.",
-            HelpName = "N",
-            DefaultValueFactory = _ => Environment.ProcessorCount,
-        };
+        Option<int> option = new(name) { Description = description, HelpName = "N", DefaultValueFactory = byDefault };
         option.Validators.Add(result =>
         {
-            if (result.Tokens.Count == 1 && (!int.TryParse(result.Tokens[0].Value, CultureInfo.InvariantCulture, out int workers) || workers is < 1 or > 256))
+            if (result.Tokens.Count == 1 && !(int.TryParse(result.Tokens[0].Value, CultureInfo.InvariantCulture, out int count) && count >= 1 && count <= most))
             {
-                result.AddError(OptionCheck.Message("--workers", result.Tokens[0].Value, "1 to 256"));
+                result.AddError(OptionCheck.Message(name, result.Tokens[0].Value, $"1 to {most}"));
             }
         });
         return option;

@@ -27,22 +27,33 @@ internal static class SceneCommand
         Option<DateOnly?> to = CommonOptions.Day("--to", "The last day.");
         Option<long> seed = new("--seed") { Description = "Another number gives other ice and weather.", HelpName = "N", DefaultValueFactory = _ => 1 };
         Option<bool> noTruth = new("--no-truth") { Description = "Leave out the files of the true concentration." };
-        Option<string> output = new("--out") { Description = "The folder to write to.", HelpName = "DIR", Required = true };
+        Option<string?> output = new("--out") { Description = "The folder to write to; needed unless --score is given.", HelpName = "DIR" };
+        Option<bool> score = new("--score") { Description = "Write nothing: run methods on the scene and print how they stand to its truth." };
+        Option<string[]> methods = new("--methods") { Description = "With --score: the methods, separated by spaces.", HelpName = "METHOD", AllowMultipleArgumentsPerToken = true, DefaultValueFactory = _ => [.. ConcentrationMethods.Names] };
+        Option<int> every = CommonOptions.Count("--every", "With --score: take one day of so many.", _ => 5, 366);
+        Option<bool> json = CommonOptions.Json();
         Option<int> workers = CommonOptions.Workers();
         (from.Required, to.Required) = (true, true);
         Command command = new(
             "scene",
-            "Write invented brightness temperatures with a known truth, and a run file for them.\n\nExample:\n  iceextent scene --grid north-25km --sensor ssmi-f13 --from 2000-01-01 --to 2000-01-31 --out scene")
+            "Write invented brightness temperatures with a known truth, and a run file for them.\n\nExample:\n  iceextent scene --grid north-25km --sensor ssmi-f13 --from 2000-01-01 --to 2000-01-31 --out scene\n  iceextent scene --score --methods nasa-team bristol --from 2000-01-01 --to 2000-12-31 --sensor ssmi-f13")
         {
-            grid, sensor, parameters, from, to, seed, noTruth, output, workers,
+            grid, sensor, parameters, from, to, seed, noTruth, output, score, methods, every, json, workers,
         };
         command.SetAction((parsed, cancellation) =>
         {
             (DateOnly first, DateOnly last) = (parsed.GetValue(from)!.Value, parsed.GetValue(to)!.Value);
             CommonOptions.CheckPeriod(first, last);
-            string folder = Path.GetFullPath(parsed.GetValue(output)!);
-            (Scene scene, string gridName, string sensorName) = Load(
+            (Scene scene, LandShare land, string gridName, string sensorName) = Load(
                 parsed.GetValue(grid)!, parsed.GetValue(sensor)!, parsed.GetValue(parameters), parsed.GetValue(seed));
+            if (parsed.GetValue(score))
+            {
+                return Task.FromResult(SceneScoring.Score(
+                    scene, land, parsed.GetValue(methods)!, SceneScoring.Days(first, last, parsed.GetValue(every)), parsed.GetValue(workers), parsed.GetValue(json), console, cancellation));
+            }
+
+            string folder = Path.GetFullPath(parsed.GetValue(output) ?? throw new ConfigurationException(
+                [new("IE1012", "--out", "nothing", "a folder to write to", "Name one, or ask for --score.")]));
             int days = new SceneFiles(scene, folder, Notice).Write(first, last, !parsed.GetValue(noTruth), parsed.GetValue(workers), cancellation);
             string runFile = Path.Combine(folder, "run.toml");
             PublishedFile.WriteText(runFile, RunFileText(gridName, sensorName, scene.Channels, Notice));
@@ -69,7 +80,7 @@ internal static class SceneCommand
 
         """);
 
-    private static (Scene Scene, string Grid, string Sensor) Load(
+    private static (Scene Scene, LandShare Land, string Grid, string Sensor) Load(
         string grid, string sensor, string? parameters, long seed)
     {
         List<Fault> faults = [];
@@ -87,7 +98,7 @@ internal static class SceneCommand
         }
 
         LandShare land = LandShareFile.Read(loaded!.LandPath, loaded.Grid);
-        return (new Scene(scene!, loaded.Grid, land, radiometer!, seed), Named(grid, gridPath!), Named(sensor, sensorPath!));
+        return (new Scene(scene!, loaded.Grid, land, radiometer!, seed), land, Named(grid, gridPath!), Named(sensor, sensorPath!));
     }
 
     private static string Named(string written, string path) => written.EndsWith(".toml", StringComparison.Ordinal) ? path : written;

@@ -1,0 +1,119 @@
+using IceExtent.Grids;
+using IceExtent.Retrieval;
+using IceExtent.Scenes;
+using IceExtent.Statistics;
+using IceExtent.Statistics.Scoring;
+
+namespace IceExtent.Worker.Running;
+
+/// <summary>One method in one season against the truth of a scene.</summary>
+/// <param name="Method">The method.</param>
+/// <param name="Season">January to March, and so on.</param>
+/// <param name="Classes">Cells by what they truly hold, in the order of <see cref="TruthClass"/>.</param>
+/// <param name="Days">The number of days.</param>
+/// <param name="ExtentErrorFraction">Mean over days of (retrieved − true extent) / true extent.</param>
+/// <param name="ExtentRootMeanSquareFraction">Root mean square of the same.</param>
+/// <param name="ExtentShare95">Share of days whose 95 % limits of extent hold the true extent.</param>
+/// <param name="EdgeErrorKilometers">Mean distance between the edges.</param>
+internal sealed record SeasonScore(
+    string Method,
+    string Season,
+    IReadOnlyList<CellScore> Classes,
+    int Days,
+    double ExtentErrorFraction,
+    double ExtentRootMeanSquareFraction,
+    double ExtentShare95,
+    double EdgeErrorKilometers);
+
+/// <summary>Runs methods on days of an invented scene and holds them against its truth, without writing anything.</summary>
+internal sealed class SceneScore
+{
+    private const double Limit95 = 1.959963985;
+    private static readonly string[] Seasons = ["JFM", "AMJ", "JAS", "OND"];
+
+    private readonly Scene scene;
+    private readonly TotalsRules rules;
+    private readonly IReadOnlyList<DayRetrieval> retrievals;
+    private readonly TotalsRegion region;
+    private readonly ErrorCorrelation correlation;
+
+    /// <summary>Prepares the methods.</summary>
+    /// <param name="scene">The scene.</param>
+    /// <param name="methods">Their names; the sensor has the surfaces of each.</param>
+    /// <param name="ocean">Whether each cell counts as ocean.</param>
+    /// <param name="rules">The limits.</param>
+    /// <param name="errorLengthMeters">The correlation length of cell errors, in m.</param>
+    public SceneScore(Scene scene, IReadOnlyList<string> methods, bool[] ocean, TotalsRules rules, double errorLengthMeters)
+    {
+        (this.scene, this.rules) = (scene, rules);
+        HemisphereTuning tuning = scene.Sensor.In(scene.Grid.Hemisphere);
+        CellMask mask = new(scene.Grid, ocean, scene.Sensor.PolarGapLatitudeDegrees);
+        retrievals = [.. methods.Select(name => new DayRetrieval(
+            ConcentrationMethods.Create(name, tuning, scene.Grid.Hemisphere), tuning.Screens, scene.Sensor.Scatter, mask))];
+        region = TotalsRegion.Hemisphere(scene.Grid, ocean);
+        correlation = new(scene.Grid, errorLengthMeters);
+    }
+
+    /// <summary>Scores days, several at a time; the result does not depend on how many.</summary>
+    public IReadOnlyList<SeasonScore> Run(IEnumerable<DateOnly> days, int workers, CancellationToken cancellation)
+    {
+        DateOnly[] seen = [.. days.Where(day => !scene.IsMissing(day))];
+        DayOfMethods[] scored = new DayOfMethods[seen.Length];
+        using ThreadLocal<Bench> benches = new(() => new Bench(scene, correlation));
+        Parallel.For(0, seen.Length, new ParallelOptions { MaxDegreeOfParallelism = workers, CancellationToken = cancellation }, index =>
+            scored[index] = Score(seen[index], benches.Value!));
+        return [.. retrievals.SelectMany((_, method) => Seasons.Select((_, season) => Summary(scored, method, season))).Where(score => score.Days > 0)];
+    }
+
+    private DayOfMethods Score(DateOnly day, Bench bench)
+    {
+        scene.Truth(day, bench.Workspace, bench.Truth);
+        scene.Observe(day, bench.Workspace, bench.Observed);
+        DayRetrieval.CheckRange(bench.Observed, scene.Sensor.Range, bench.RangeConditions);
+        (DayScore, double)[] methods = new (DayScore, double)[retrievals.Count];
+        for (int method = 0; method < methods.Length; method++)
+        {
+            retrievals[method].Retrieve(bench.Observed, bench.RangeConditions, bench.Concentration);
+            methods[method] = (
+                DayScore.Of(scene.Grid, region, bench.Concentration.Total, bench.Concentration.StandardError, bench.Truth.Concentration, rules),
+                bench.Uncertainty.StandardErrorsSquareMeters(region, bench.Concentration.Total, bench.Concentration.StandardError, rules.IceFraction).Extent);
+        }
+
+        return new((day.Month - 1) / 3, methods);
+    }
+
+    private SeasonScore Summary(DayOfMethods[] scored, int method, int season)
+    {
+        (DayScore Score, double ExtentError)[] days = [.. scored.Where(day => day.Season == season).Select(day => day.Methods[method])];
+        double[] errors = [.. days.Select(day => (day.Score.ExtentSquareMeters - day.Score.TrueExtentSquareMeters) / day.Score.TrueExtentSquareMeters)];
+        double[] edges = [.. days.Select(day => day.Score.EdgeErrorMeters / 1_000.0).Where(double.IsFinite)];
+        int held = days.Count(day => Math.Abs(day.Score.ExtentSquareMeters - day.Score.TrueExtentSquareMeters) <= Limit95 * day.ExtentError);
+        return new(
+            retrievals[method].Method.Name,
+            Seasons[season],
+            [.. Enum.GetValues<TruthClass>().Select(truth => days.Aggregate(default(CellScore), (sum, day) => sum + day.Score.Of(truth)))],
+            days.Length,
+            errors.DefaultIfEmpty(double.NaN).Average(),
+            Math.Sqrt(errors.DefaultIfEmpty(double.NaN).Average(error => error * error)),
+            days.Length == 0 ? double.NaN : (double)held / days.Length,
+            edges.DefaultIfEmpty(double.NaN).Average());
+    }
+
+    private sealed record DayOfMethods(int Season, IReadOnlyList<(DayScore Score, double ExtentError)> Methods);
+
+    // What one thread needs for a day.
+    private sealed class Bench(Scene scene, ErrorCorrelation correlation)
+    {
+        public SceneWorkspace Workspace { get; } = scene.CreateWorkspace();
+
+        public SceneTruth Truth { get; } = new(scene.Grid.CellCount);
+
+        public BrightnessPlanes Observed { get; } = new(scene.Grid.CellCount, scene.Channels);
+
+        public CellConditions[] RangeConditions { get; } = new CellConditions[scene.Grid.CellCount];
+
+        public ConcentrationPlanes Concentration { get; } = new(scene.Grid.CellCount);
+
+        public TotalsUncertainty Uncertainty { get; } = new(correlation);
+    }
+}
