@@ -21,7 +21,7 @@ internal static class SceneScoring
     /// <summary>Scores and prints.</summary>
     /// <exception cref="ConfigurationException">A method does not exist.</exception>
     public static int Score(
-        Scene scene, LandShare land, string[] methods, IEnumerable<DateOnly> days, int workers, bool json, CommandConsole console, CancellationToken cancellation)
+        Scene scene, LandShare land, string[] methods, string coast, IEnumerable<DateOnly> days, int workers, bool json, CommandConsole console, CancellationToken cancellation)
     {
         HemisphereTuning tuning = scene.Sensor.In(scene.Grid.Hemisphere);
         List<string> usable = [];
@@ -44,8 +44,8 @@ internal static class SceneScoring
             }
         }
 
-        SceneDefaults defaults = SceneDefaults.Load(ConfigFolder.BesideProgram);
-        SceneScore scoring = new(scene, usable, land.OceanBelow(defaults.LandLimitFraction), defaults.Rules, defaults.ErrorLengthMeters);
+        SceneDefaults defaults = SceneDefaults.Load(ConfigFolder.BesideProgram, scene.Grid, coast);
+        SceneScore scoring = new(scene, land, usable, defaults);
         IReadOnlyList<SeasonScore> scores = scoring.Run(days, workers, cancellation);
         ScoreReport.Print(scores, json, console);
         if (!json)

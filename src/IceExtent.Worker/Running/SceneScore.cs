@@ -3,6 +3,7 @@ using IceExtent.Retrieval;
 using IceExtent.Scenes;
 using IceExtent.Statistics;
 using IceExtent.Statistics.Scoring;
+using IceExtent.Worker.Configuration;
 
 namespace IceExtent.Worker.Running;
 
@@ -34,24 +35,37 @@ internal sealed class SceneScore
     private readonly Scene scene;
     private readonly TotalsRules rules;
     private readonly IReadOnlyList<DayRetrieval> retrievals;
+    private readonly CoastBrightness? coast;
     private readonly TotalsRegion region;
     private readonly ErrorCorrelation correlation;
 
     /// <summary>Prepares the methods.</summary>
     /// <param name="scene">The scene.</param>
+    /// <param name="land">The land of its grid.</param>
     /// <param name="methods">Their names; the sensor has the surfaces of each.</param>
-    /// <param name="ocean">Whether each cell counts as ocean.</param>
-    /// <param name="rules">The limits.</param>
-    /// <param name="errorLengthMeters">The correlation length of cell errors, in m.</param>
-    public SceneScore(Scene scene, IReadOnlyList<string> methods, bool[] ocean, TotalsRules rules, double errorLengthMeters)
+    /// <param name="defaults">Limits, error length, coast correction.</param>
+    public SceneScore(Scene scene, LandShare land, IReadOnlyList<string> methods, SceneDefaults defaults)
     {
-        (this.scene, this.rules) = (scene, rules);
+        (this.scene, rules) = (scene, defaults.Rules);
+        bool[] ocean = land.OceanBelow(defaults.LandLimitFraction);
         HemisphereTuning tuning = scene.Sensor.In(scene.Grid.Hemisphere);
         CellMask mask = new(scene.Grid, ocean, scene.Sensor.PolarGapLatitudeDegrees);
+        ICoastStep? step = defaults.Coast.Correction == CoastCorrection.Concentration
+            ? new CoastSpillStep(scene.Grid, land, ocean, defaults.Coast.Spill)
+            : null;
+        coast = defaults.Coast.Correction == CoastCorrection.Brightness
+            ? new(
+                scene.Grid,
+                land,
+                Array.ConvertAll(mask.Conditions.ToArray(), condition => condition == CellConditions.None),
+                scene.Channels.ToDictionary(channel => channel, channel => scene.Sensor.FootprintsMeters[channel]),
+                scene.Sensor.Range,
+                defaults.Coast.Brightness)
+            : null;
         retrievals = [.. methods.Select(name => new DayRetrieval(
-            ConcentrationMethods.Create(name, tuning, scene.Grid.Hemisphere), tuning.Screens, scene.Sensor.Scatter, mask))];
+            ConcentrationMethods.Create(name, tuning, scene.Grid.Hemisphere), tuning.Screens, scene.Sensor.Scatter, mask, step))];
         region = TotalsRegion.Hemisphere(scene.Grid, ocean);
-        correlation = new(scene.Grid, errorLengthMeters);
+        correlation = new(scene.Grid, defaults.ErrorLengthMeters);
     }
 
     /// <summary>Scores days, several at a time; the result does not depend on how many.</summary>
@@ -70,6 +84,7 @@ internal sealed class SceneScore
         scene.Truth(day, bench.Workspace, bench.Truth);
         scene.Observe(day, bench.Workspace, bench.Observed);
         DayRetrieval.CheckRange(bench.Observed, scene.Sensor.Range, bench.RangeConditions);
+        coast?.Correct(bench.Observed, bench.RangeConditions);
         (DayScore, double)[] methods = new (DayScore, double)[retrievals.Count];
         for (int method = 0; method < methods.Length; method++)
         {
