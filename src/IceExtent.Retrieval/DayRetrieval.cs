@@ -2,7 +2,7 @@ namespace IceExtent.Retrieval;
 
 /// <summary>Everything between one day's brightness temperatures and its concentration, for one method.</summary>
 /// <remarks>
-/// The steps, in order: retrieve, empty land and polar gap, screen weather, clip, correct the coast, standard error. The
+/// The steps, in order: retrieve, empty land and polar gap, screen weather, clip, correct the coast, standard error, smearing. The
 /// range check of the temperatures comes before them, once a day: <see cref="CheckRange"/>. Immutable and safe to use from several
 /// threads. The cells are handled in runs that stay in the processor's cache.
 /// </remarks>
@@ -15,6 +15,7 @@ public sealed class DayRetrieval
     private readonly RetrievalScatter scatter;
     private readonly CellMask mask;
     private readonly ICoastStep? coast;
+    private readonly double smearingFactor;
     private readonly Channel[] needed;
 
     /// <summary>Prepares the retrieval of one sensor on one grid.</summary>
@@ -23,14 +24,15 @@ public sealed class DayRetrieval
     /// <param name="scatter">The scatter over the pure surfaces.</param>
     /// <param name="mask">Land and polar gap.</param>
     /// <param name="coast">Corrects concentrations near land, or null.</param>
+    /// <param name="smearingFactor">How much a change from cell to cell widens the standard error, without unit; 0 for not at all.</param>
     public DayRetrieval(
-        IConcentrationMethod method, WeatherScreens screens, RetrievalScatter scatter, CellMask mask, ICoastStep? coast = null)
+        IConcentrationMethod method, WeatherScreens screens, RetrievalScatter scatter, CellMask mask, ICoastStep? coast = null, double smearingFactor = 0.0)
     {
         ArgumentNullException.ThrowIfNull(method);
         ArgumentNullException.ThrowIfNull(screens);
         ArgumentNullException.ThrowIfNull(scatter);
         ArgumentNullException.ThrowIfNull(mask);
-        (this.method, this.screens, this.scatter, this.mask, this.coast) = (method, screens, scatter, mask, coast);
+        (this.method, this.screens, this.scatter, this.mask, this.coast, this.smearingFactor) = (method, screens, scatter, mask, coast, smearingFactor);
         needed = [.. method.Channels];
     }
 
@@ -72,7 +74,9 @@ public sealed class DayRetrieval
             counts += RetrieveRun(observed, new(start, Math.Min(RunCells, observed.CellCount - start)), into);
         }
 
-        return coast is null ? counts : counts with { CoastCorrected = CorrectCoast(coast, into) };
+        counts = coast is null ? counts : counts with { CoastCorrected = CorrectCoast(coast, into) };
+        EdgeSmearing.Apply(into.Total, mask.Columns, smearingFactor, into.StandardError);
+        return counts;
     }
 
     // The step looks at neighbours, so it needs the whole plane; a new total has a new standard error.

@@ -23,6 +23,7 @@ public sealed class CellMask
             throw new ArgumentException($"The ocean plane has {ocean.Length} cells; the grid has {grid.CellCount}.", nameof(ocean));
         }
 
+        Columns = grid.Columns;
         double poleward = grid.Hemisphere == Hemisphere.North ? 1.0 : -1.0;
         ReadOnlySpan<double> latitudes = grid.LatitudesDegrees;
         conditions = new CellConditions[grid.CellCount];
@@ -32,6 +33,9 @@ public sealed class CellMask
             conditions[cell] = !ocean[cell] ? CellConditions.Land : gap ? CellConditions.PolarGap : CellConditions.None;
         }
     }
+
+    /// <summary>The number of columns of the grid.</summary>
+    public int Columns { get; }
 
     /// <summary><see cref="CellConditions.Land"/>, <see cref="CellConditions.PolarGap"/> or none. Shape: one value a cell.</summary>
     public ReadOnlySpan<CellConditions> Conditions => conditions;

@@ -16,6 +16,8 @@ public static class TableFile
     /// <summary>The start of the metadata keys that hold units.</summary>
     public const string UnitPrefix = "unit:";
 
+    private static readonly Lock Encoding = new();
+
     /// <summary>Writes a table beside its place, flushes it and renames it.</summary>
     /// <param name="path">The file; its folder is made when it is missing.</param>
     /// <param name="columns">The columns in their order.</param>
@@ -32,13 +34,12 @@ public static class TableFile
         ArgumentNullException.ThrowIfNull(rows);
         ArgumentNullException.ThrowIfNull(metadata);
 
-        // The library is asynchronous only; over memory it never waits.
-        PublishedFile.Write(path, EncodeAsync(columns, rows, metadata).GetAwaiter().GetResult());
+        PublishedFile.Write(path, Encode(columns, rows, metadata));
     }
 
     /// <summary>Encodes a table and drops it, so that the library is loaded before the first table is due.</summary>
     internal static void Rehearse<TRow>(IReadOnlyList<TableColumn<TRow>> columns, IReadOnlyList<TRow> rows) =>
-        _ = EncodeAsync(columns, rows, []).GetAwaiter().GetResult();
+        _ = Encode(columns, rows, []);
 
     /// <summary>Reads a whole table.</summary>
     /// <param name="path">A file that <see cref="Write{TRow}"/> wrote.</param>
@@ -60,6 +61,19 @@ public static class TableFile
                     "a Parquet table that this program wrote",
                     "Move the file away and run its days anew."),
                 cause);
+        }
+    }
+
+    // The library writes nesting levels into the columns' own fields whenever it makes a schema of them, and the columns of
+    // a table are shared: two tables at once would meet half-written levels. It is asynchronous only; over memory it never waits.
+    private static byte[] Encode<TRow>(
+        IReadOnlyList<TableColumn<TRow>> columns,
+        IReadOnlyList<TRow> rows,
+        IReadOnlyList<KeyValuePair<string, string>> metadata)
+    {
+        lock (Encoding)
+        {
+            return EncodeAsync(columns, rows, metadata).GetAwaiter().GetResult();
         }
     }
 

@@ -51,6 +51,9 @@ internal sealed record RunSettings
 
     public required double ErrorLengthMeters { get; init; }
 
+    /// <summary>How much a change from cell to cell widens a standard error, without unit.</summary>
+    public required double SmearingFactor { get; init; }
+
     /// <summary>A line that every output carries, or null.</summary>
     public required string? Notice { get; init; }
 

@@ -5,7 +5,7 @@ using IceExtent.Storage.Faults;
 namespace IceExtent.Worker.Configuration;
 
 /// <summary>What config/defaults.toml says of totals and coasts, for commands that have no run file.</summary>
-internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction, double ErrorLengthMeters, CoastSettings Coast)
+internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction, double ErrorLengthMeters, double SmearingFactor, CoastSettings Coast)
 {
     /// <summary>Reads them.</summary>
     /// <param name="config">Where they stand.</param>
@@ -27,9 +27,10 @@ internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction
         double? pack = layered.Number("totals", "pack_fraction", 0.01, 1.0, string.Empty);
         double? land = layered.Number("land", "limit_fraction", 0.01, 1.0, string.Empty);
         double? length = layered.Number("standard_error", "correlation_length_km", 1.0, 3_000.0, "km");
+        double? smearing = layered.Number("standard_error", "smearing_factor", 0.0, 1.0, string.Empty);
         CoastSettings? settings = CoastLoader.Load(layered, grid, config.Path, faults);
         return faults.Count == 0
-            ? new(new TotalsRules(ice!.Value, pack!.Value), land!.Value, length!.Value * 1_000.0, settings!)
+            ? new(new TotalsRules(ice!.Value, pack!.Value), land!.Value, length!.Value * 1_000.0, smearing!.Value, settings!)
             : throw new ConfigurationException(faults);
     }
 }
