@@ -115,16 +115,6 @@ public static class DailyTable
         return new([.. Enumerable.Range(0, table.Rows).Select(RowAt)], table.Metadata);
     }
 
-    /// <summary>Puts the days of a later run in the place of the same days of an earlier one.</summary>
-    /// <param name="earlier">What the table holds.</param>
-    /// <param name="later">What the run computed: every region of each day it covers.</param>
-    /// <returns>The later rows, and the earlier rows of days that the later ones do not cover; in no order.</returns>
-    public static IEnumerable<DailyRow> Merge(IEnumerable<DailyRow> earlier, IReadOnlyCollection<DailyRow> later)
-    {
-        HashSet<DateOnly> covered = [.. later.Select(row => row.Date)];
-        return earlier.Where(row => !covered.Contains(row.Date)).Concat(later);
-    }
-
     private static string NameOf(DayStatus status) => status == DayStatus.Final ? FinalName : ProvisionalName;
 
     private static DayStatus StatusOf(string path, string name) => name switch

@@ -1,3 +1,4 @@
+using IceExtent.Storage.Faults;
 using IceExtent.Grids;
 using IceExtent.Retrieval;
 using IceExtent.Scenes;

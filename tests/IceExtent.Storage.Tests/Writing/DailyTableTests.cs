@@ -71,17 +71,6 @@ public sealed class DailyTableTests : IDisposable
             threads: 1);
 
     [Fact]
-    public void Merge_LaterDays_ReplaceWholeDaysAndNothingElse() =>
-        Gen.Select(Tables, Tables).Sample((earlier, later) =>
-        {
-            HashSet<DailyRow> merged = [.. DailyTable.Merge(earlier, later)];
-            return later.All(merged.Contains)
-                && merged.Except(later).All(earlier.Contains)
-                && merged.Except(later).All(kept => later.All(row => row.Date != kept.Date))
-                && earlier.Where(row => later.All(other => other.Date != row.Date)).All(merged.Contains);
-        });
-
-    [Fact]
     public void Read_Metadata_HasTheCallersPairsThenEveryUnit()
     {
         DailyTable.Write(folder.PathOf("a.parquet"), [], [new("method", "any"), new("notice", "not for navigation — Öland")]);

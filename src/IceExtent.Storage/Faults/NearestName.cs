@@ -1,11 +1,13 @@
-namespace IceExtent.Worker.Configuration;
+namespace IceExtent.Storage.Faults;
 
 /// <summary>Guesses which name was meant.</summary>
-internal static class NearestName
+public static class NearestName
 {
     /// <summary>The candidate with the fewest edits, or null where none is close.</summary>
     public static string? Of(string written, IEnumerable<string> candidates)
     {
+        ArgumentNullException.ThrowIfNull(written);
+        ArgumentNullException.ThrowIfNull(candidates);
         int most = Math.Max(2, written.Length / 3);
         return candidates
             .Select(candidate => (candidate, edits: Edits(written.ToUpperInvariant(), candidate.ToUpperInvariant())))
