@@ -1,3 +1,5 @@
+using IceExtent.Retrieval;
+
 namespace IceExtent.Statistics;
 
 /// <summary>Whether a day may still change.</summary>
@@ -55,4 +57,7 @@ public sealed record DailyRow
 
     /// <summary>Whether the day may still change.</summary>
     public required DayStatus Status { get; init; }
+
+    /// <summary>Where the tie points come from.</summary>
+    public TiePointState TiePoints { get; init; }
 }

@@ -6,7 +6,7 @@ namespace IceExtent.Retrieval;
 public static class ConcentrationMethods
 {
     /// <summary>The names, in the order help texts list them.</summary>
-    public static IReadOnlyList<string> Names { get; } = [NasaTeam.MethodName, Bootstrap.MethodName, Bristol.MethodName, Polynomial89.MethodName];
+    public static IReadOnlyList<string> Names { get; } = [NasaTeam.MethodName, Bootstrap.MethodName, Bristol.MethodName, Polynomial89.MethodName, SelfTuning.MethodName];
 
     /// <summary>Tunes a method for one sensor and hemisphere.</summary>
     /// <param name="name">One of <see cref="Names"/>.</param>
@@ -22,6 +22,7 @@ public static class ConcentrationMethods
             NasaTeam.MethodName => new NasaTeam(tuning.TiePoints),
             Bootstrap.MethodName => tuning.Surfaces is { } surfaces ? new Bootstrap(surfaces, hemisphere) : null,
             Bristol.MethodName => tuning.Surfaces is { } surfaces ? new Bristol(surfaces) : null,
+            SelfTuning.MethodName => tuning.Surfaces is { } surfaces ? SelfTuning.From(surfaces, tuning.Samples) : null,
             Polynomial89.MethodName => tuning.Polarization89 is { } points ? new Polynomial89(points) : null,
             _ => throw new ArgumentException($"There is no method {name}.", nameof(name)),
         };

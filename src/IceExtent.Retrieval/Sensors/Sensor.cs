@@ -7,8 +7,13 @@ namespace IceExtent.Retrieval;
 /// <param name="Screens">The weather screens.</param>
 /// <param name="Surfaces">The pure surfaces of methods that are linear in temperature, or null where none are known.</param>
 /// <param name="Polarization89">The pure surfaces at 85 to 91 GHz, or null where none are known.</param>
+/// <param name="Samples">The samples the surfaces come from, or null for the sensor's own.</param>
 public sealed record HemisphereTuning(
-    TiePoints TiePoints, WeatherScreens Screens, SurfacePoints? Surfaces = null, PolarizationPoints? Polarization89 = null);
+    TiePoints TiePoints,
+    WeatherScreens Screens,
+    SurfacePoints? Surfaces = null,
+    PolarizationPoints? Polarization89 = null,
+    PureSamples? Samples = null);
 
 /// <summary>Gradient ratios above which a cell is open water.</summary>
 /// <param name="Gradient3719Limit">GR(37V/19V), without unit.</param>

@@ -41,6 +41,10 @@ public sealed partial class ArchiveLayout
     public string TableFile(string table, string method, Hemisphere hemisphere, int? year = null) =>
         Path.Join(Folder(table, method, hemisphere, year), $"{table}.parquet");
 
+    /// <summary>The tie points of one year; they belong to no single method.</summary>
+    public string TiePointFile(Hemisphere hemisphere, int year) => Path.Join(
+        Path.Join(Root, "tie_points"), $"hemisphere={NameOf(hemisphere)}", YearFolder(year), "tie_points.parquet");
+
     /// <summary>The grid file of one day.</summary>
     /// <exception cref="FaultException">IE3110: the method's name cannot be used.</exception>
     public string GridFile(string method, Hemisphere hemisphere, DateOnly day) => Path.Join(
@@ -60,9 +64,14 @@ public sealed partial class ArchiveLayout
             return folder;
         }
 
-        ArgumentOutOfRangeException.ThrowIfLessThan(number, DateOnly.MinValue.Year, nameof(year));
-        ArgumentOutOfRangeException.ThrowIfGreaterThan(number, DateOnly.MaxValue.Year, nameof(year));
-        return Path.Join(folder, string.Create(CultureInfo.InvariantCulture, $"year={number:D4}"));
+        return Path.Join(folder, YearFolder(number));
+    }
+
+    private static string YearFolder(int year)
+    {
+        ArgumentOutOfRangeException.ThrowIfLessThan(year, DateOnly.MinValue.Year);
+        ArgumentOutOfRangeException.ThrowIfGreaterThan(year, DateOnly.MaxValue.Year);
+        return string.Create(CultureInfo.InvariantCulture, $"year={year:D4}");
     }
 
     private string Checked(string name) => name is { Length: <= LongestName } && PlainName.IsMatch(name)

@@ -1,3 +1,4 @@
+using IceExtent.Retrieval;
 using IceExtent.Statistics;
 using IceExtent.Storage.Faults;
 
@@ -28,6 +29,7 @@ public static class DailyTable
         TableColumn.Number<DailyRow>("polar_gap_km2", SquareKilometers, row => row.PolarGapSquareKilometers),
         TableColumn.Text<DailyRow>("sensor", row => row.Sensor),
         TableColumn.Text<DailyRow>("status", row => NameOf(row.Status)),
+        TableColumn.Text<DailyRow>("tie_points", row => TiePointStates.NameOf(row.TiePoints)),
     ];
 
     /// <summary>Writes the rows in the order of date and region.</summary>
@@ -94,6 +96,7 @@ public static class DailyTable
         IReadOnlyList<double> polarGap = table.Column<double>("polar_gap_km2");
         IReadOnlyList<string> sensor = table.Column<string>("sensor");
         IReadOnlyList<string> status = table.Column<string>("status");
+        IReadOnlyList<string> tiePoints = table.Column<string>("tie_points");
 
         DailyRow RowAt(int row) => new()
         {
@@ -111,9 +114,14 @@ public static class DailyTable
             PolarGapSquareKilometers = polarGap[row],
             Sensor = sensor[row],
             Status = StatusOf(path, status[row]),
+            TiePoints = TiePointsOf(path, tiePoints[row]),
         };
         return new([.. Enumerable.Range(0, table.Rows).Select(RowAt)], table.Metadata);
     }
+
+    private static TiePointState TiePointsOf(string path, string name) => TiePointStates.Parse(name) ?? throw new FaultException(new(
+        "IE3122", path, $"the tie points {name}", string.Join(", ", Enum.GetValues<TiePointState>().Select(TiePointStates.NameOf)),
+        "The file is from another program: move it away and run that year anew."));
 
     private static string NameOf(DayStatus status) => status == DayStatus.Final ? FinalName : ProvisionalName;
 

@@ -57,7 +57,8 @@ public sealed record DigestedFile(string Path, string Sha256);
 /// <param name="Gaps">Days without input, or with input that could not be used.</param>
 /// <param name="Rejected">Of the gaps, those whose input was there and could not be used.</param>
 /// <param name="PolarGapFallbacks">Of the days done, those whose polar gap was to be filled and was not, for some method: too little of its rim was observed.</param>
-public sealed record RunCounts(int DaysDone, int Gaps, int Rejected, int PolarGapFallbacks = 0);
+/// <param name="TiePointFallbacks">Of the days done, those whose tie points were to move and did not, or not all: too few samples.</param>
+public sealed record RunCounts(int DaysDone, int Gaps, int Rejected, int PolarGapFallbacks = 0, int TiePointFallbacks = 0);
 
 /// <summary>How one day of one hemisphere went.</summary>
 public enum DayOutcome
@@ -78,8 +79,9 @@ public enum DayOutcome
 /// <param name="Outcome">How it went.</param>
 /// <param name="Cells">What befell its cells, one entry a method in the order of the run file; empty where there are no numbers.</param>
 /// <param name="Faults">Why it is not, or not wholly, done.</param>
+/// <param name="TiePoints">Where its tie points come from, by name; <c>fixed</c> where the run takes no samples.</param>
 public sealed record DayRecord(
-    DateOnly Date, Hemisphere Hemisphere, DayOutcome Outcome, IReadOnlyList<CellCounts> Cells, IReadOnlyList<Fault> Faults);
+    DateOnly Date, Hemisphere Hemisphere, DayOutcome Outcome, IReadOnlyList<CellCounts> Cells, IReadOnlyList<Fault> Faults, string TiePoints = "fixed");
 
 /// <summary>How many cells of one day fell under each condition with one method. A cell may count under several.</summary>
 /// <param name="Method">The method.</param>

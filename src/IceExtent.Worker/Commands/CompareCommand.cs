@@ -32,7 +32,7 @@ internal static class CompareCommand
 
             string folder = Path.GetFullPath(parsed.GetValue(output)!);
             RunPlan plan = RunPlanner.Plan(settings, period.From(parsed), period.To(parsed), cancellation);
-            (List<MethodComparisonRow> rows, List<Fault> faults) = Compare(settings, plan, folder, cancellation);
+            (List<MethodComparisonRow> rows, List<Fault> faults) = Compare(settings, plan, (period.From(parsed), period.To(parsed)), folder, cancellation);
             ComparisonTable.Write(Path.Combine(folder, "comparison.parquet"), rows, Metadata(settings));
             console.Tell(faults);
             Print(settings, rows, folder, parsed.GetValue(json), console);
@@ -42,11 +42,12 @@ internal static class CompareCommand
     }
 
     private static (List<MethodComparisonRow> Rows, List<Fault> Faults) Compare(
-        RunSettings settings, RunPlan plan, string folder, CancellationToken cancellation)
+        RunSettings settings, RunPlan plan, (DateOnly? From, DateOnly? To) wanted, string folder, CancellationToken cancellation)
     {
         List<MethodComparisonRow> rows = [];
         List<Fault> faults = [.. plan.Gaps.Select(gap => gap.Fault)];
-        MethodComparison comparison = new(settings, folder);
+        DayPreparation preparation = new(settings);
+        MethodComparison comparison = new(settings, preparation, SampleSeries.For(preparation, plan, wanted, Environment.ProcessorCount, cancellation), folder);
         foreach (PlannedDay day in plan.Days)
         {
             cancellation.ThrowIfCancellationRequested();

@@ -12,6 +12,9 @@ internal sealed class LayeredScope(ConfigScope run, ConfigScope defaults)
     public int? WholeNumber(string table, string key, int lowest, int highest) =>
         Take(table, key, (scope, required) => scope.WholeNumber(key, lowest, highest, required));
 
+    public bool? Flag(string table, string key) =>
+        Take(table, key, (scope, required) => scope.Flag(key, required));
+
     /// <summary>A text that must be one of some names.</summary>
     public string? Name(string table, string key, IReadOnlyCollection<string> names) =>
         Take(table, key, (scope, required) => scope.Name(key, names, required));

@@ -40,8 +40,9 @@ internal static class RunFileLoader
         int? neighbours = layered.WholeNumber("filling", "neighbours", 0, NeighbourFilling.MostNeighbours);
         double? rimShare = layered.Number("polar_gap", "least_rim_share", 0.01, 1.0, string.Empty);
         CoastSettings? coast = CoastLoader.Load(layered, grid?.Grid, folder, faults);
+        TiePointSettings? tiePoints = TiePointLoader.Load(layered, rules?.IceFraction ?? double.NaN);
         layered.RefuseUnknown();
-        SourceLoader sources = new(folder, config, methods, needsFootprints: coast?.Correction == CoastCorrection.Brightness);
+        SourceLoader sources = new(folder, config, methods, needsFootprints: coast?.Correction == CoastCorrection.Brightness, needsSamples: tiePoints?.NeedsSamples(methods) ?? false);
         List<RunSource?> loaded = [.. scope.Tables("source").Select(source => sources.Load(source, grid?.Grid))];
         scope.RefuseUnknown();
         LandShare? land = grid is null ? null : Land(grid, faults);
@@ -59,6 +60,7 @@ internal static class RunFileLoader
             Ocean = land!.OceanBelow(landLimit!.Value),
             Land = land,
             Coast = coast,
+            TiePoints = tiePoints!,
             Methods = methods,
             WriteGrids = writeGrids ?? true,
             Rules = rules!,

@@ -35,6 +35,9 @@ internal sealed record RunSettings
     /// <summary>What is done about land in the footprints of ocean cells.</summary>
     public required CoastSettings Coast { get; init; }
 
+    /// <summary>Whether and how tie points follow samples.</summary>
+    public required TiePointSettings TiePoints { get; init; }
+
     public required IReadOnlyList<string> Methods { get; init; }
 
     public required bool WriteGrids { get; init; }

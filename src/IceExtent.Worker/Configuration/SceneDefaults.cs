@@ -5,7 +5,7 @@ using IceExtent.Storage.Faults;
 namespace IceExtent.Worker.Configuration;
 
 /// <summary>What config/defaults.toml says of totals and coasts, for commands that have no run file.</summary>
-internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction, double ErrorLengthMeters, double SmearingFactor, CoastSettings Coast)
+internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction, double ErrorLengthMeters, double SmearingFactor, CoastSettings Coast, TiePointSettings TiePoints)
 {
     /// <summary>Reads them.</summary>
     /// <param name="config">Where they stand.</param>
@@ -29,8 +29,9 @@ internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction
         double? length = layered.Number("standard_error", "correlation_length_km", 1.0, 3_000.0, "km");
         double? smearing = layered.Number("standard_error", "smearing_factor", 0.0, 1.0, string.Empty);
         CoastSettings? settings = CoastLoader.Load(layered, grid, config.Path, faults);
+        TiePointSettings? tiePoints = TiePointLoader.Load(layered, ice ?? double.NaN);
         return faults.Count == 0
-            ? new(new TotalsRules(ice!.Value, pack!.Value), land!.Value, length!.Value * 1_000.0, smearing!.Value, settings!)
+            ? new(new TotalsRules(ice!.Value, pack!.Value), land!.Value, length!.Value * 1_000.0, smearing!.Value, settings!, tiePoints!)
             : throw new ConfigurationException(faults);
     }
 }

@@ -11,7 +11,8 @@ namespace IceExtent.Worker.Configuration;
 /// <param name="config">The program's own files.</param>
 /// <param name="methods">The methods of the run.</param>
 /// <param name="needsFootprints">Whether the footprint of every channel must be known.</param>
-internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadOnlyList<string> methods, bool needsFootprints)
+/// <param name="needsSamples">Whether samples of pure surfaces are taken.</param>
+internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadOnlyList<string> methods, bool needsFootprints, bool needsSamples)
 {
     private static readonly Dictionary<string, RawNumber> Numbers = new(StringComparer.Ordinal)
     {
@@ -105,6 +106,16 @@ internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadO
                 $"the sensor {sensor.Name}, whose file has no footprint of {ChannelNames.NameOf(channel)}",
                 "a sensor with [footprints_km] for every channel of the source, as coast.correction = \"brightness\" needs them",
                 "Add the footprint to a sensor file of your own with its source, or choose another correction."));
+        }
+
+        foreach (Channel channel in TiePointSettings.SampleChannels.Where(channel => needsSamples && !channels.ContainsKey(channel)))
+        {
+            scope.Faults.Add(new(
+                "IE1009",
+                scope.Where("channels", scope.PositionOf("channels")),
+                $"no {ChannelNames.NameOf(channel)}, by which samples for moving tie points are chosen",
+                string.Join(", ", TiePointSettings.SampleChannels.Select(ChannelNames.NameOf)),
+                "Map the channel to its variable, or leave self-tuning and tie_points.moving out."));
         }
 
         foreach (string name in methods)

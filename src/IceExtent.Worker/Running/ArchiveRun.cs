@@ -31,6 +31,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
     private readonly List<Gap> gaps = [];
     private readonly SortedSet<string> filesRead = new(StringComparer.Ordinal);
     private int polarGapFallbacks;
+    private int tiePointFallbacks;
 
     /// <summary>Runs.</summary>
     /// <param name="observer">Watches.</param>
@@ -44,6 +45,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         PublishedFile.RemoveLeftovers(settings.Output);
         string digest = ConfigurationDigest.Of(settings);
         DailySeries series = new(layout, settings.Grid.Hemisphere, settings.Methods, method => TableMetadata(method, digest));
+        TiePointArchive tiePoints = new(layout, settings.Grid.Hemisphere, TiePointMetadata(digest));
         Task<DayPreparation> preparing = Task.Run(() => new DayPreparation(settings), CancellationToken.None); // Needs no file, so it need not wait for them.
         RunPlan plan = RunPlanner.Plan(settings, options.From, options.To, cancellation);
         observer.Planned(plan);
@@ -53,8 +55,9 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         gaps.AddRange(plan.Gaps);
         DateOnly[] lost = [.. plan.Gaps.Select(gap => gap.Date).OfType<DateOnly>().Except(plan.Days.Select(day => day.Date)).Distinct()];
         series.Remove(lost);
+        tiePoints.Remove(lost);
         RemoveGrids(lost);
-        await ProcessAsync(plan, await preparing, series, GlobalAttributes(digest), observer, cancellation);
+        await ProcessAsync(plan, await preparing, (series, tiePoints), GlobalAttributes(digest), observer, cancellation);
 
         int done = dayRecords.Count(day => day.Outcome == DayOutcome.Done);
         int exitCode = done == 0 ? ExitCode.NoUsableInput : gaps.Count > 0 ? ExitCode.DoneWithGaps : ExitCode.Done;
@@ -65,7 +68,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
     private async Task ProcessAsync(
         RunPlan plan,
         DayPreparation preparation,
-        DailySeries series,
+        (DailySeries Daily, TiePointArchive TiePoints) series,
         IReadOnlyList<KeyValuePair<string, string>> attributes,
         IRunObserver observer,
         CancellationToken cancellation)
@@ -75,19 +78,22 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             return;
         }
 
+        SampleSeries? samples = SampleSeries.For(preparation, plan, (options.From, options.To), options.Workers, cancellation);
         GridArchive? grids = settings.WriteGrids ? new(settings, layout, attributes) : null;
         await RunPipeline.RunAsync(
             plan.Days,
             Math.Min(options.Workers, plan.Days.Count),
-            () => new DayWorker(preparation, grids),
+            () => new DayWorker(preparation, samples, grids),
             result =>
             {
-                series.Add(result);
+                series.Daily.Add(result);
+                series.TiePoints.Add(result);
                 Remember(result);
                 observer.DayDone(result);
             },
             cancellation);
-        series.Flush();
+        series.Daily.Flush();
+        series.TiePoints.Flush();
     }
 
     private void Remember(DayResult result)
@@ -99,13 +105,15 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             RemoveGrids([result.Day.Date]);
         }
 
+        tiePointFallbacks += result.Tuned is { } tuned && tuned.State != TiePointState.Moving ? 1 : 0;
         polarGapFallbacks += result.Methods.Any(method => method.PolarGapFilled == 0) ? 1 : 0;
         dayRecords.Add(new(
             result.Day.Date,
             settings.Grid.Hemisphere,
             result.Fault is null ? DayOutcome.Done : DayOutcome.Rejected,
             [.. result.Methods.Select(method => Counts(method, result.OutOfRange))],
-            result.Fault is null ? [] : [result.Fault]));
+            result.Fault is null ? [] : [result.Fault],
+            TiePointStates.NameOf(result.Tuned?.State ?? TiePointState.Fixed)));
     }
 
     private static CellCounts Counts(MethodResult method, int outOfRange) => new(
@@ -173,6 +181,16 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         return metadata;
     }
 
+    private KeyValuePair<string, string>[] TiePointMetadata(string digest) =>
+    [
+        new("method_source", "[Tonboe2016], [Lavergne2019]"),
+        new("grid", settings.Grid.Name),
+        new("program_version", ProgramVersion.Text),
+        new(DailySeries.DigestKey, digest),
+        new("rules", settings.TiePoints.Rules.ToString()),
+        new("notice", settings.Notice ?? "none"),
+    ];
+
     private string WriteRecord(RunPlan plan, DateTimeOffset started, string digest, int done, int exitCode)
     {
         IEnumerable<DayRecord> unread = plan.Gaps
@@ -191,7 +209,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             RunFile = new(settings.RunFile, Convert.ToHexStringLower(SHA256.HashData(File.ReadAllBytes(settings.RunFile)))),
             ConfigurationDigest = digest,
             CommandLine = options.CommandLine,
-            Counts = new(done, rejected + plan.DaysWithoutInput, rejected, polarGapFallbacks),
+            Counts = new(done, rejected + plan.DaysWithoutInput, rejected, polarGapFallbacks, tiePointFallbacks),
             Days = days,
             Faults = [.. plan.Gaps.Where(gap => gap.Date is null).Select(gap => gap.Fault)],
             FilesRead = [.. filesRead],

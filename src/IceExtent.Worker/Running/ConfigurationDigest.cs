@@ -30,6 +30,11 @@ internal static class ConfigurationDigest
             $"{settings.Rules.IceFraction:R} {settings.Rules.PackFraction:R} {settings.LandLimitFraction:R} {settings.ErrorLengthMeters:R} {settings.SmearingFactor:R}");
         yield return FormattableString.Invariant($"{settings.LeastNeighbours} {settings.Rules.PolarGap} {settings.LeastRimShare:R}");
         yield return CoastText(settings.Coast);
+        if (settings.TiePoints.NeedsSamples(settings.Methods))
+        {
+            yield return settings.TiePoints.ToString(); // Records print their numbers in full and without culture.
+        }
+
         foreach (RunSource source in settings.Sources)
         {
             string channels = string.Join(' ', source.Description.Channels.OrderBy(pair => pair.Key).Select(pair => $"{ChannelNames.NameOf(pair.Key)}={pair.Value}"));

@@ -4,14 +4,12 @@ using IceExtent.Worker.Configuration;
 
 namespace IceExtent.Worker.Running;
 
-/// <summary>Everything that days share and nobody changes: retrievals by source and method, filling, regions, error correlation.</summary>
+/// <summary>Everything that days share and nobody changes: retrievals by source, filling, regions, error correlation.</summary>
 internal sealed class DayPreparation
 {
     private readonly Dictionary<double, SharedMask> masks = [];
-    private readonly Channel[][] channels;
-    private readonly DayRetrieval[][] retrievals;
+    private readonly SourceRetrieval[] sources;
     private readonly PolarGapSystem?[] gaps;
-    private readonly CoastBrightness?[] coasts;
 
     public DayPreparation(RunSettings settings)
     {
@@ -19,10 +17,10 @@ internal sealed class DayPreparation
         Regions = [TotalsRegion.Hemisphere(settings.Grid, settings.Ocean)];
         Correlation = new(settings.Grid, settings.ErrorLengthMeters);
         Neighbours = settings.LeastNeighbours > 0 ? new(settings.Grid, settings.LeastNeighbours) : null;
-        channels = [.. settings.Sources.Select(Needed)];
         ICoastStep? coast = settings.Coast.Correction == CoastCorrection.Concentration ? ConcentrationStep() : null;
-        retrievals = [.. settings.Sources.Select(source => Retrievals(source, coast))];
-        coasts = [.. settings.Sources.Select(source => settings.Coast.Correction == CoastCorrection.Brightness ? BrightnessStep(source) : null)];
+        RetrievalChoices choices = new(
+            settings.Grid, settings.Ocean, settings.Land, settings.Methods, settings.Coast, settings.SmearingFactor, settings.TiePoints);
+        sources = [.. settings.Sources.Select(source => new SourceRetrieval(choices, source.Sensor, [.. source.Description.Channels.Keys], MaskOf(source).Mask, coast))];
         gaps = [.. settings.Sources.Select(source => MaskOf(source).Gap)];
     }
 
@@ -38,41 +36,12 @@ internal sealed class DayPreparation
     /// <summary>The gap of a source's sensor, or null where there is nothing to fill.</summary>
     public PolarGapSystem? PolarGapOf(int source) => gaps[source];
 
-    /// <summary>The channels of a source that the run uses, in order: no other one is read.</summary>
-    public IReadOnlyList<Channel> ChannelsOf(int source) => channels[source];
-
-    /// <summary>One retrieval a method, in the run's order.</summary>
-    public IReadOnlyList<DayRetrieval> RetrievalsOf(int source) => retrievals[source];
-
-    /// <summary>The correction of brightness temperatures near land, or null where the run has none.</summary>
-    public CoastBrightness? CoastOf(int source) => coasts[source];
-
-    private Channel[] Needed(RunSource source)
-    {
-        HemisphereTuning tuning = source.Sensor.In(Settings.Grid.Hemisphere);
-        IEnumerable<Channel> methods = Settings.Methods.SelectMany(name => ConcentrationMethods.Create(name, tuning, Settings.Grid.Hemisphere).Channels);
-        IEnumerable<Channel> screens = tuning.Screens.Gradient2219Limit is null ? [Channel.V19, Channel.V37] : [Channel.V19, Channel.V22, Channel.V37];
-        return [.. methods.Concat(screens).Distinct().Where(source.Description.Channels.ContainsKey).Order()];
-    }
+    /// <summary>What the days of a source share.</summary>
+    public SourceRetrieval Of(OpenedSource source) => sources[source.Index];
 
     private ICoastStep ConcentrationStep() => Settings.Coast.MinimumFraction is { } minima
         ? new CoastMinimumStep(new(Settings.Grid, Settings.Ocean), minima, Settings.Coast.Minimum)
         : new CoastSpillStep(Settings.Grid, Settings.Land, Settings.Ocean, Settings.Coast.Spill);
-
-    private CoastBrightness BrightnessStep(RunSource source) => new(
-        Settings.Grid,
-        Settings.Land,
-        Array.ConvertAll(MaskOf(source).Mask.Conditions.ToArray(), condition => condition == CellConditions.None),
-        Needed(source).ToDictionary(channel => channel, channel => source.Sensor.FootprintsMeters[channel]),
-        source.Sensor.Range,
-        Settings.Coast.Brightness);
-
-    private DayRetrieval[] Retrievals(RunSource source, ICoastStep? coast)
-    {
-        HemisphereTuning tuning = source.Sensor.In(Settings.Grid.Hemisphere);
-        return [.. Settings.Methods.Select(name => new DayRetrieval(
-            ConcentrationMethods.Create(name, tuning, Settings.Grid.Hemisphere), tuning.Screens, source.Sensor.Scatter, MaskOf(source).Mask, coast, Settings.SmearingFactor))];
-    }
 
     // Sensors with the same gap share a mask.
     private SharedMask MaskOf(RunSource source)

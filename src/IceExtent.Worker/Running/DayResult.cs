@@ -9,7 +9,11 @@ namespace IceExtent.Worker.Running;
 /// <param name="Fault">Why it became a gap, or null.</param>
 /// <param name="OutOfRange">Brightness temperatures made missing.</param>
 /// <param name="Methods">One entry a method of the run, in its order; empty for a gap.</param>
-internal sealed record DayResult(PlannedDay Day, Fault? Fault, int OutOfRange, IReadOnlyList<MethodResult> Methods);
+internal sealed record DayResult(PlannedDay Day, Fault? Fault, int OutOfRange, IReadOnlyList<MethodResult> Methods)
+{
+    /// <summary>The day's pure surfaces, or null where the run takes no samples.</summary>
+    public TunedDay? Tuned { get; init; }
+}
 
 /// <summary>What one method made of one day.</summary>
 /// <param name="Method">The method.</param>

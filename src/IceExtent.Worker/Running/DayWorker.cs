@@ -6,11 +6,10 @@ namespace IceExtent.Worker.Running;
 
 /// <summary>Carries days from their files to totals and grid files, one at a time, in memory of its own.</summary>
 /// <remarks>A day stays with one worker from reading to writing, so its planes stay in one core's cache. Not shared between threads.</remarks>
-internal sealed class DayWorker(DayPreparation preparation, GridArchive? grids)
+internal sealed class DayWorker(DayPreparation preparation, SampleSeries? samples, GridArchive? grids)
 {
-    private readonly Dictionary<string, BrightnessPlanes> planesByChannels = new(StringComparer.Ordinal);
+    private readonly DayReader reader = new(preparation);
     private readonly ConcentrationPlanes concentration = new(preparation.Settings.Grid.CellCount);
-    private readonly CellConditions[] rangeConditions = new CellConditions[preparation.Settings.Grid.CellCount];
     private readonly Dictionary<PolarGapSystem, PolarGapFilling> gapFillings = [];
     private readonly TotalsUncertainty uncertainty = new(preparation.Correlation);
 
@@ -18,31 +17,36 @@ internal sealed class DayWorker(DayPreparation preparation, GridArchive? grids)
     /// <exception cref="FaultException">A grid file cannot be written: that stops the run.</exception>
     public DayResult Handle(PlannedDay day)
     {
-        BrightnessPlanes observed = PlanesFor(day.Source);
+        ObservedDay observed;
         try
         {
-            day.Source.Reader.Read(day.Input, observed);
+            observed = reader.Read(day);
         }
         catch (FaultException unreadable)
         {
             return new(day, unreadable.Fault, 0, []);
         }
 
-        int outOfRange = DayRetrieval.CheckRange(observed, day.Source.Settings.Sensor.Range, rangeConditions);
-        CoastBrightness? coast = preparation.CoastOf(day.Source.Index);
-        int coastCorrected = coast?.Correct(observed, rangeConditions) ?? 0;
-        IReadOnlyList<DayRetrieval> retrievals = preparation.RetrievalsOf(day.Source.Index);
+        TunedDay? tuned = samples?.Tune(day);
+        IReadOnlyList<DayRetrieval> retrievals = preparation.Of(day.Source).RetrievalsWith(tuned);
         MethodResult[] results = new MethodResult[retrievals.Count];
         for (int index = 0; index < results.Length; index++)
         {
-            RetrievalCounts counts = retrievals[index].Retrieve(observed, rangeConditions, concentration);
-            counts = coast is null ? counts : counts with { CoastCorrected = coastCorrected };
-            (int filled, int? gapFilled) = Fill(day.Source.Index);
-            grids?.Write(day, retrievals[index].Method, concentration);
-            results[index] = new(retrievals[index].Method.Name, counts, filled, gapFilled, [.. preparation.Regions.Select(region => Row(day, region))]);
+            results[index] = Retrieve(day, observed, retrievals[index], tuned);
         }
 
-        return new(day, null, outOfRange, results);
+        return new(day, null, observed.OutOfRange, results) { Tuned = tuned };
+    }
+
+    private MethodResult Retrieve(PlannedDay day, ObservedDay observed, DayRetrieval retrieval, TunedDay? tuned)
+    {
+        RetrievalCounts counts = retrieval.Retrieve(observed.Planes, observed.Conditions, concentration);
+        counts = observed.CoastCorrected is { } corrected ? counts with { CoastCorrected = corrected } : counts;
+        (int filled, int? gapFilled) = Fill(day.Source.Index);
+        string method = retrieval.Method.Name;
+        TiePointState state = tuned is not null && preparation.Settings.TiePoints.Moves(method) ? tuned.State : TiePointState.Fixed;
+        grids?.Write(day, retrieval.Method, state, concentration);
+        return new(method, counts, filled, gapFilled, [.. preparation.Regions.Select(region => Row(day, region, state))]);
     }
 
     // Each from observed cells alone, so their order does not matter.
@@ -63,20 +67,7 @@ internal sealed class DayWorker(DayPreparation preparation, GridArchive? grids)
         return (cells, filling.Fill(concentration));
     }
 
-    private BrightnessPlanes PlanesFor(OpenedSource source)
-    {
-        IReadOnlyList<Channel> channels = preparation.ChannelsOf(source.Index);
-        string key = string.Join(' ', channels);
-        if (!planesByChannels.TryGetValue(key, out BrightnessPlanes? planes))
-        {
-            planes = new(preparation.Settings.Grid.CellCount, channels);
-            planesByChannels.Add(key, planes);
-        }
-
-        return planes;
-    }
-
-    private DailyRow Row(PlannedDay day, TotalsRegion region)
+    private DailyRow Row(PlannedDay day, TotalsRegion region, TiePointState tiePoints)
     {
         const double SquareMetersPerSquareKilometer = 1e6;
         TotalsRules rules = preparation.Settings.Rules;
@@ -101,6 +92,7 @@ internal sealed class DayWorker(DayPreparation preparation, GridArchive? grids)
             PolarGapSquareKilometers = totals.PolarGap / SquareMetersPerSquareKilometer,
             Sensor = day.Source.Settings.Sensor.Name,
             Status = day.Source.Settings.Status,
+            TiePoints = tiePoints,
         };
 
         double? Known(double squareMeters) => observed ? squareMeters / SquareMetersPerSquareKilometer : null;

@@ -29,7 +29,7 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
     private readonly double[] limits = [settings.Rules.IceFraction, settings.Rules.PackFraction];
 
     /// <summary>Writes one day of one method.</summary>
-    public void Write(PlannedDay day, IConcentrationMethod method, ConcentrationPlanes planes)
+    public void Write(PlannedDay day, IConcentrationMethod method, TiePointState tiePoints, ConcentrationPlanes planes)
     {
         List<GridVariable> variables =
         [
@@ -59,6 +59,6 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
             settings.Grid,
             day.Date,
             variables,
-            [.. attributes, new("method", method.Name), new("method_source", method.Source), new("sensor", day.Source.Settings.Sensor.Name)]);
+            [.. attributes, new("method", method.Name), new("method_source", method.Source), new("sensor", day.Source.Settings.Sensor.Name), new("tie_points", TiePointStates.NameOf(tiePoints))]);
     }
 }

@@ -7,27 +7,23 @@ using IceExtent.Worker.Configuration;
 namespace IceExtent.Worker.Running;
 
 /// <summary>Runs every method of a run file on the same days and holds them against the first. Fills nothing: what is compared was observed.</summary>
-internal sealed class MethodComparison(RunSettings settings, string folder)
+internal sealed class MethodComparison(RunSettings settings, DayPreparation preparation, SampleSeries? samples, string folder)
 {
     private static readonly KeyValuePair<string, string>[] Nothing = [];
 
-    private readonly DayPreparation preparation = new(settings);
+    private readonly DayReader reader = new(preparation);
     private readonly ConcentrationPlanes[] planes = [.. settings.Methods.Select(_ => new ConcentrationPlanes(settings.Grid.CellCount))];
-    private readonly CellConditions[] rangeConditions = new CellConditions[settings.Grid.CellCount];
     private readonly float[] spread = new float[settings.Grid.CellCount];
 
     /// <summary>Compares one day and writes its map: each method's concentration, and the spread between the highest and the lowest.</summary>
     /// <exception cref="FaultException">The day cannot be read, or the map cannot be written.</exception>
     public IReadOnlyList<MethodComparisonRow> Compare(PlannedDay day)
     {
-        BrightnessPlanes observed = new(settings.Grid.CellCount, preparation.ChannelsOf(day.Source.Index));
-        day.Source.Reader.Read(day.Input, observed);
-        DayRetrieval.CheckRange(observed, day.Source.Settings.Sensor.Range, rangeConditions);
-        preparation.CoastOf(day.Source.Index)?.Correct(observed, rangeConditions);
-        IReadOnlyList<DayRetrieval> retrievals = preparation.RetrievalsOf(day.Source.Index);
+        ObservedDay observed = reader.Read(day);
+        IReadOnlyList<DayRetrieval> retrievals = preparation.Of(day.Source).RetrievalsWith(samples?.Tune(day));
         for (int method = 0; method < planes.Length; method++)
         {
-            retrievals[method].Retrieve(observed, rangeConditions, planes[method]);
+            retrievals[method].Retrieve(observed.Planes, observed.Conditions, planes[method]);
         }
 
         WriteMap(day);

@@ -34,8 +34,8 @@ internal sealed class SceneScore
 
     private readonly Scene scene;
     private readonly TotalsRules rules;
-    private readonly IReadOnlyList<DayRetrieval> retrievals;
-    private readonly CoastBrightness? coast;
+    private readonly RetrievalChoices choices;
+    private readonly SourceRetrieval source;
     private readonly TotalsRegion region;
     private readonly ErrorCorrelation correlation;
 
@@ -48,22 +48,12 @@ internal sealed class SceneScore
     {
         (this.scene, rules) = (scene, defaults.Rules);
         bool[] ocean = land.OceanBelow(defaults.LandLimitFraction);
-        HemisphereTuning tuning = scene.Sensor.In(scene.Grid.Hemisphere);
+        choices = new(scene.Grid, ocean, land, methods, defaults.Coast, defaults.SmearingFactor, defaults.TiePoints);
         CellMask mask = new(scene.Grid, ocean, scene.Sensor.PolarGapLatitudeDegrees);
         ICoastStep? step = defaults.Coast.Correction == CoastCorrection.Concentration
             ? new CoastSpillStep(scene.Grid, land, ocean, defaults.Coast.Spill)
             : null;
-        coast = defaults.Coast.Correction == CoastCorrection.Brightness
-            ? new(
-                scene.Grid,
-                land,
-                Array.ConvertAll(mask.Conditions.ToArray(), condition => condition == CellConditions.None),
-                scene.Channels.ToDictionary(channel => channel, channel => scene.Sensor.FootprintsMeters[channel]),
-                scene.Sensor.Range,
-                defaults.Coast.Brightness)
-            : null;
-        retrievals = [.. methods.Select(name => new DayRetrieval(
-            ConcentrationMethods.Create(name, tuning, scene.Grid.Hemisphere), tuning.Screens, scene.Sensor.Scatter, mask, step, defaults.SmearingFactor))];
+        source = new(choices, scene.Sensor, [.. scene.Channels], mask, step);
         region = TotalsRegion.Hemisphere(scene.Grid, ocean);
         correlation = new(scene.Grid, defaults.ErrorLengthMeters);
     }
@@ -73,22 +63,50 @@ internal sealed class SceneScore
     {
         DateOnly[] seen = [.. days.Where(day => !scene.IsMissing(day))];
         DayOfMethods[] scored = new DayOfMethods[seen.Length];
-        using ThreadLocal<Bench> benches = new(() => new Bench(scene, correlation));
-        Parallel.For(0, seen.Length, new ParallelOptions { MaxDegreeOfParallelism = workers, CancellationToken = cancellation }, index =>
-            scored[index] = Score(seen[index], benches.Value!));
-        return [.. retrievals.SelectMany((_, method) => Seasons.Select((_, season) => Summary(scored, method, season))).Where(score => score.Days > 0)];
+        using ThreadLocal<Bench> benches = new(() => new Bench(scene, source, correlation));
+        ParallelOptions options = new() { MaxDegreeOfParallelism = workers, CancellationToken = cancellation };
+        Dictionary<DateOnly, DaySamples> samples = Samples(seen, benches, options);
+        Parallel.For(0, seen.Length, options, index => scored[index] = Score(seen[index], Tune(seen[index], samples), benches.Value!));
+        return [.. choices.Methods.SelectMany((_, method) => Seasons.Select((_, season) => Summary(scored, method, season))).Where(score => score.Days > 0)];
     }
 
-    private DayOfMethods Score(DateOnly day, Bench bench)
+    // Of every day that a window reaches, those before and after the period included.
+    private Dictionary<DateOnly, DaySamples> Samples(DateOnly[] days, ThreadLocal<Bench> benches, ParallelOptions options)
     {
+        if (!choices.TiePoints.NeedsSamples(choices.Methods))
+        {
+            return [];
+        }
+
+        TuningRules tuning = choices.TiePoints.Rules;
+        DateOnly[] reached =
+        [
+            .. days.SelectMany(day => Enumerable.Range(-tuning.DaysBehind, tuning.DaysBehind + tuning.DaysAhead + 1).Select(day.AddDays))
+                .Distinct()
+                .Where(day => !scene.IsMissing(day))
+                .Order(),
+        ];
+        DaySamples[] taken = new DaySamples[reached.Length];
+        Parallel.For(0, reached.Length, options, index => taken[index] = benches.Value!.Sample(reached[index]));
+        return reached.Zip(taken).ToDictionary(pair => pair.First, pair => pair.Second);
+    }
+
+    private TunedDay? Tune(DateOnly day, Dictionary<DateOnly, DaySamples> samples)
+    {
+        TuningRules tuning = choices.TiePoints.Rules;
+        return samples.Count == 0 ? null : source.Tune(
+            [.. Enumerable.Range(-tuning.DaysBehind, tuning.DaysBehind + tuning.DaysAhead + 1).Select(day.AddDays).Where(samples.ContainsKey).Select(near => samples[near])]);
+    }
+
+    private DayOfMethods Score(DateOnly day, TunedDay? tuned, Bench bench)
+    {
+        bench.Observe(day);
         scene.Truth(day, bench.Workspace, bench.Truth);
-        scene.Observe(day, bench.Workspace, bench.Observed);
-        DayRetrieval.CheckRange(bench.Observed, scene.Sensor.Range, bench.RangeConditions);
-        coast?.Correct(bench.Observed, bench.RangeConditions);
+        IReadOnlyList<DayRetrieval> retrievals = source.RetrievalsWith(tuned);
         (DayScore, double)[] methods = new (DayScore, double)[retrievals.Count];
         for (int method = 0; method < methods.Length; method++)
         {
-            retrievals[method].Retrieve(bench.Observed, bench.RangeConditions, bench.Concentration);
+            retrievals[method].Retrieve(bench.Observed, bench.Conditions, bench.Concentration);
             methods[method] = (
                 DayScore.Of(scene.Grid, region, bench.Concentration.Total, bench.Concentration.StandardError, bench.Truth.Concentration, rules),
                 bench.Uncertainty.StandardErrorsSquareMeters(region, bench.Concentration.Total, bench.Concentration.StandardError, rules.IceFraction).Extent);
@@ -104,7 +122,7 @@ internal sealed class SceneScore
         double[] edges = [.. days.Select(day => day.Score.EdgeErrorMeters / 1_000.0).Where(double.IsFinite)];
         int held = days.Count(day => Math.Abs(day.Score.ExtentSquareMeters - day.Score.TrueExtentSquareMeters) <= Limit95 * day.ExtentError);
         return new(
-            retrievals[method].Method.Name,
+            choices.Methods[method],
             Seasons[season],
             [.. Enum.GetValues<TruthClass>().Select(truth => days.Aggregate(default(CellScore), (sum, day) => sum + day.Score.Of(truth)))],
             days.Length,
@@ -117,18 +135,33 @@ internal sealed class SceneScore
     private sealed record DayOfMethods(int Season, IReadOnlyList<(DayScore Score, double ExtentError)> Methods);
 
     // What one thread needs for a day.
-    private sealed class Bench(Scene scene, ErrorCorrelation correlation)
+    private sealed class Bench(Scene scene, SourceRetrieval source, ErrorCorrelation correlation)
     {
+        private readonly Lazy<SurfaceSampling> sampling = new(source.MakeSampling);
+
         public SceneWorkspace Workspace { get; } = scene.CreateWorkspace();
 
         public SceneTruth Truth { get; } = new(scene.Grid.CellCount);
 
-        public BrightnessPlanes Observed { get; } = new(scene.Grid.CellCount, scene.Channels);
+        public BrightnessPlanes Observed { get; } = new(scene.Grid.CellCount, source.Channels);
 
-        public CellConditions[] RangeConditions { get; } = new CellConditions[scene.Grid.CellCount];
+        public CellConditions[] Conditions { get; } = new CellConditions[scene.Grid.CellCount];
 
         public ConcentrationPlanes Concentration { get; } = new(scene.Grid.CellCount);
 
         public TotalsUncertainty Uncertainty { get; } = new(correlation);
+
+        public void Observe(DateOnly day)
+        {
+            scene.Observe(day, Workspace, Observed);
+            DayRetrieval.CheckRange(Observed, scene.Sensor.Range, Conditions);
+            source.Coast?.Correct(Observed, Conditions);
+        }
+
+        public DaySamples Sample(DateOnly day)
+        {
+            Observe(day);
+            return sampling.Value.Take(Observed, Conditions);
+        }
     }
 }

@@ -30,7 +30,7 @@ public sealed class DailyTableQueryTests : IDisposable
         [
             "date DATE", "region VARCHAR", "extent_km2 DOUBLE", "extent_se_km2 DOUBLE", "area_km2 DOUBLE", "area_se_km2 DOUBLE",
             "marginal_zone_km2 DOUBLE", "pack_km2 DOUBLE", "ocean_km2 DOUBLE", "observed_share DOUBLE", "filled_share DOUBLE",
-            "polar_gap_km2 DOUBLE", "sensor VARCHAR", "status VARCHAR",
+            "polar_gap_km2 DOUBLE", "sensor VARCHAR", "status VARCHAR", "tie_points VARCHAR",
             "hemisphere VARCHAR", "method VARCHAR", "year BIGINT",
         ],
         Query($"SELECT column_name || ' ' || column_type FROM (DESCRIBE SELECT * FROM read_parquet({files}, hive_partitioning = true))"));

@@ -147,11 +147,13 @@ public sealed class DailyTableTests : IDisposable
         Assert.Contains("Double", fault.Allowed, StringComparison.Ordinal);
     }
 
-    [Fact]
-    public void Read_StatusUnknown_NamesIt()
+    [Theory]
+    [InlineData("status")]
+    [InlineData("tie_points")]
+    public void Read_NameUnknown_NamesIt(string column)
     {
         List<TableColumn<DailyRow>> columns = [.. DailyTable.Columns];
-        columns[^1] = TableColumn.Text<DailyRow>("status", _ => "hearsay");
+        columns[columns.FindIndex(known => known.Name == column)] = TableColumn.Text<DailyRow>(column, _ => "hearsay");
         TableFile.Write(folder.PathOf("a.parquet"), columns, [RowGen.Single()], []);
 
         Fault fault = FaultOf("a.parquet");

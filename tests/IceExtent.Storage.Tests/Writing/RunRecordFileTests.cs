@@ -87,7 +87,8 @@ public sealed class RunRecordFileTests : IDisposable
                 "days_done": 1,
                 "gaps": 1,
                 "rejected": 1,
-                "polar_gap_fallbacks": 0
+                "polar_gap_fallbacks": 0,
+                "tie_point_fallbacks": 0
               },
               "days": [
                 {
@@ -108,7 +109,8 @@ public sealed class RunRecordFileTests : IDisposable
                       "coast_corrected": 9
                     }
                   ],
-                  "faults": []
+                  "faults": [],
+                  "tie_points": "fixed"
                 },
                 {
                   "date": "1988-02-29",
@@ -123,7 +125,8 @@ public sealed class RunRecordFileTests : IDisposable
                       "allowed": "something",
                       "remedy": "Do it."
                     }
-                  ]
+                  ],
+                  "tie_points": "fixed"
                 }
               ],
               "faults": [],

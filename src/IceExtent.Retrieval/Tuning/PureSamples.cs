@@ -1,0 +1,10 @@
+namespace IceExtent.Retrieval;
+
+/// <summary>The samples behind a day's tie points.</summary>
+/// <param name="OpenWater">Of all days of the window.</param>
+/// <param name="ClosedIce">Of all days of the window.</param>
+/// <param name="IceDirection">The unit vector of the ice line in 19V, 37V and 37H; empty where the radiometer lacks one of them.</param>
+/// <param name="BlendFrom">See <see cref="TuningRules.BlendFrom"/>.</param>
+/// <param name="BlendTo">See <see cref="TuningRules.BlendTo"/>.</param>
+public sealed record PureSamples(
+    SurfaceMoments OpenWater, SurfaceMoments ClosedIce, IReadOnlyList<double> IceDirection, double BlendFrom, double BlendTo);

@@ -1,0 +1,91 @@
+using IceExtent.Grids;
+using IceExtent.Retrieval;
+using IceExtent.Worker.Configuration;
+
+namespace IceExtent.Worker.Running;
+
+/// <summary>What a retrieval needs beside the sensor.</summary>
+/// <param name="Grid">The grid.</param>
+/// <param name="Ocean">Whether each cell counts as ocean.</param>
+/// <param name="Land">How much of each cell is land.</param>
+/// <param name="Methods">The methods, in the run's order.</param>
+/// <param name="Coast">What is done about land in footprints.</param>
+/// <param name="SmearingFactor">How much a change from cell to cell widens a standard error.</param>
+/// <param name="TiePoints">Whether and how tie points move.</param>
+internal sealed record RetrievalChoices(
+    Grid Grid,
+    bool[] Ocean,
+    LandShare Land,
+    IReadOnlyList<string> Methods,
+    CoastSettings Coast,
+    double SmearingFactor,
+    TiePointSettings TiePoints);
+
+/// <summary>Everything that the days of one sensor share and nobody changes: channels, coast correction, retrievals, sampling.</summary>
+internal sealed class SourceRetrieval
+{
+    private readonly RetrievalChoices choices;
+    private readonly Sensor sensor;
+    private readonly CellMask mask;
+    private readonly ICoastStep? step;
+    private readonly IReadOnlyList<DayRetrieval> withOwnPoints;
+
+    /// <summary>Prepares.</summary>
+    /// <param name="choices">What the run wants.</param>
+    /// <param name="sensor">The sensor.</param>
+    /// <param name="available">The channels that its days have.</param>
+    /// <param name="mask">Land and polar gap.</param>
+    /// <param name="step">The correction of concentrations near land, or null.</param>
+    public SourceRetrieval(RetrievalChoices choices, Sensor sensor, IReadOnlyCollection<Channel> available, CellMask mask, ICoastStep? step)
+    {
+        (this.choices, this.sensor, this.mask, this.step) = (choices, sensor, mask, step);
+        Channels = Needed(available);
+        Coast = choices.Coast.Correction == CoastCorrection.Brightness ? BrightnessStep() : null;
+        withOwnPoints = [.. choices.Methods.Select(name => Make(name, Own))];
+    }
+
+    /// <summary>The channels in use, in order: no other one is read.</summary>
+    public IReadOnlyList<Channel> Channels { get; }
+
+    /// <summary>The correction of brightness temperatures near land, or null where the run has none.</summary>
+    public CoastBrightness? Coast { get; }
+
+    /// <summary>The sensor's own surfaces.</summary>
+    private HemisphereTuning Own => sensor.In(choices.Grid.Hemisphere);
+
+    /// <summary>One retrieval a method, in the run's order.</summary>
+    /// <param name="tuned">The surfaces of the day, or null for the sensor's own.</param>
+    public IReadOnlyList<DayRetrieval> RetrievalsWith(TunedDay? tuned) => tuned is null
+        ? withOwnPoints
+        : [.. choices.Methods.Select((name, index) => choices.TiePoints.Moves(name) ? Make(name, tuned.Tuning) : withOwnPoints[index])];
+
+    /// <summary>Makes a sampling of pure surfaces with memory of its own.</summary>
+    public SurfaceSampling MakeSampling() =>
+        new(choices.Grid, choices.Ocean, Make(NasaTeam.MethodName, Own), Own, Channels, choices.TiePoints.Rules.Samples);
+
+    /// <summary>One day's surfaces.</summary>
+    /// <param name="window">The samples of the days round it, in date order.</param>
+    public TunedDay Tune(IReadOnlyList<DaySamples> window) => MovingTiePoints.Tune(Own, window, choices.TiePoints.Rules);
+
+    private DayRetrieval Make(string name, HemisphereTuning tuning)
+    {
+        IConcentrationMethod method = ConcentrationMethods.Create(name, tuning, choices.Grid.Hemisphere);
+        return new(method, tuning.Screens, sensor.Scatter, mask, step, choices.SmearingFactor);
+    }
+
+    private Channel[] Needed(IReadOnlyCollection<Channel> available)
+    {
+        IEnumerable<Channel> methods = choices.Methods.SelectMany(name => ConcentrationMethods.Create(name, Own, choices.Grid.Hemisphere).Channels);
+        IEnumerable<Channel> screens = Own.Screens.Gradient2219Limit is null ? [Channel.V19, Channel.V37] : [Channel.V19, Channel.V22, Channel.V37];
+        IEnumerable<Channel> samples = choices.TiePoints.NeedsSamples(choices.Methods) ? TiePointSettings.SampleChannels : [];
+        return [.. methods.Concat(screens).Concat(samples).Distinct().Where(available.Contains).Order()];
+    }
+
+    private CoastBrightness BrightnessStep() => new(
+        choices.Grid,
+        choices.Land,
+        Array.ConvertAll(mask.Conditions.ToArray(), condition => condition == CellConditions.None),
+        Channels.ToDictionary(channel => channel, channel => sensor.FootprintsMeters[channel]),
+        sensor.Range,
+        choices.Coast.Brightness);
+}
