@@ -43,6 +43,9 @@ public sealed record Sensor
     /// </summary>
     public IReadOnlyDictionary<Channel, double> FootprintsMeters { get; init; } = new Dictionary<Channel, double>();
 
+    /// <summary>The noise of one measurement of each channel for which it is known; a daily mean of several has less.</summary>
+    public ChannelNoise NoiseKelvins { get; init; } = ChannelNoise.None;
+
     /// <summary>The first day of service.</summary>
     public required DateOnly FirstDay { get; init; }
 
@@ -55,7 +58,7 @@ public sealed record Sensor
     /// <summary>The unseen circle round the pole begins at this latitude (absolute value, degrees), or null where there is none.</summary>
     public required double? PolarGapLatitudeDegrees { get; init; }
 
-    /// <summary>Scatter of the retrieval over the two pure surfaces.</summary>
+    /// <summary>Scatter of the retrieval over the two pure surfaces, noise included.</summary>
     public required RetrievalScatter Scatter { get; init; }
 
     /// <summary>Tie points and screens north of the equator.</summary>

@@ -71,7 +71,7 @@ internal sealed class DayPreparation
     {
         HemisphereTuning tuning = source.Sensor.In(Settings.Grid.Hemisphere);
         return [.. Settings.Methods.Select(name => new DayRetrieval(
-            ConcentrationMethods.Create(name, tuning, Settings.Grid.Hemisphere), tuning.Screens, source.Sensor.Scatter, MaskOf(source).Mask, coast, Settings.SmearingFactor))];
+            ConcentrationMethods.Create(name, tuning, Settings.Grid.Hemisphere), tuning.Screens, source.Sensor.Scatter, MaskOf(source).Mask, coast, Settings.SmearingFactor, source.Sensor.NoiseKelvins))];
     }
 
     // Sensors with the same gap share a mask.

@@ -63,7 +63,7 @@ internal sealed class SceneScore
                 defaults.Coast.Brightness)
             : null;
         retrievals = [.. methods.Select(name => new DayRetrieval(
-            ConcentrationMethods.Create(name, tuning, scene.Grid.Hemisphere), tuning.Screens, scene.Sensor.Scatter, mask, step, defaults.SmearingFactor))];
+            ConcentrationMethods.Create(name, tuning, scene.Grid.Hemisphere), tuning.Screens, scene.Sensor.Scatter, mask, step, defaults.SmearingFactor, scene.Sensor.NoiseKelvins))];
         region = TotalsRegion.Hemisphere(scene.Grid, ocean);
         correlation = new(scene.Grid, defaults.ErrorLengthMeters);
     }
