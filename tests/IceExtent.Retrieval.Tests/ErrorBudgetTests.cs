@@ -114,6 +114,21 @@ public sealed class ErrorBudgetTests
         Assert.Equal(Math.Sqrt(left + TunedMethods.Noise.VarianceOf(method.TangentAt(windy))), day.StandardError[0], 1e-6);
     }
 
+    /// <summary>A cell that a coast correction empties has the scatter of open water and still the noise of its own temperatures.</summary>
+    [Fact]
+    public void Retrieve_CoastCorrectedCell_HasTheNoiseOfItsTemperatures()
+    {
+        NasaTeam method = new(TiePointSets.F13North);
+        ChannelKelvins half = TunedMethods.Mixture(0.3, 0.2);
+        ConcentrationPlanes day = new(1);
+
+        new DayRetrieval(method, new(0.05, null), File, Mask(1), new Emptying(), noise: TunedMethods.Noise)
+            .Retrieve(TunedMethods.Planes(half), new CellConditions[1], day);
+
+        double left = 0.0025 - TunedMethods.Noise.VarianceOf(method.PureTangents.OpenWater);
+        Assert.Equal(Math.Sqrt(left + TunedMethods.Noise.VarianceOf(method.TangentAt(half))), day.StandardError[0], 1e-6);
+    }
+
     private static (float[] Total, float[] Error) Day(IConcentrationMethod method, ChannelNoise? noise)
     {
         const int Cells = 77;
@@ -129,6 +144,16 @@ public sealed class ErrorBudgetTests
         bool[] ocean = new bool[cells];
         Array.Fill(ocean, true);
         return new(grid, ocean, null);
+    }
+
+    /// <summary>Takes all ice away.</summary>
+    private sealed class Emptying : ICoastStep
+    {
+        public int Correct(ConcentrationPlanes planes)
+        {
+            planes.Total.Clear();
+            return planes.CellCount;
+        }
     }
 
     /// <summary>A method that is one linear form, so that all can be worked by hand.</summary>
