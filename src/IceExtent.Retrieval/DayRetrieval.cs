@@ -12,7 +12,7 @@ public sealed class DayRetrieval
 
     private readonly IConcentrationMethod method;
     private readonly WeatherScreens screens;
-    private readonly RetrievalScatter scatter;
+    private readonly ErrorBudget errors;
     private readonly CellMask mask;
     private readonly ICoastStep? coast;
     private readonly double smearingFactor;
@@ -21,18 +21,21 @@ public sealed class DayRetrieval
     /// <summary>Prepares the retrieval of one sensor on one grid.</summary>
     /// <param name="method">The tuned method.</param>
     /// <param name="screens">The weather screens.</param>
-    /// <param name="scatter">The scatter over the pure surfaces.</param>
+    /// <param name="scatter">The scatter over the pure surfaces, instrument noise included.</param>
     /// <param name="mask">Land and polar gap.</param>
     /// <param name="coast">Corrects concentrations near land, or null.</param>
     /// <param name="smearingFactor">How much a change from cell to cell widens the standard error, without unit; 0 for not at all.</param>
+    /// <param name="noise">The instrument noise, or null where it is not told apart.</param>
     public DayRetrieval(
-        IConcentrationMethod method, WeatherScreens screens, RetrievalScatter scatter, CellMask mask, ICoastStep? coast = null, double smearingFactor = 0.0)
+        IConcentrationMethod method, WeatherScreens screens, RetrievalScatter scatter, CellMask mask, ICoastStep? coast = null, double smearingFactor = 0.0,
+        ChannelNoise? noise = null)
     {
         ArgumentNullException.ThrowIfNull(method);
         ArgumentNullException.ThrowIfNull(screens);
         ArgumentNullException.ThrowIfNull(scatter);
         ArgumentNullException.ThrowIfNull(mask);
-        (this.method, this.screens, this.scatter, this.mask, this.coast, this.smearingFactor) = (method, screens, scatter, mask, coast, smearingFactor);
+        (this.method, this.screens, this.mask, this.coast, this.smearingFactor) = (method, screens, mask, coast, smearingFactor);
+        errors = new(method, scatter, noise ?? ChannelNoise.None);
         needed = [.. method.Channels];
     }
 
@@ -74,18 +77,18 @@ public sealed class DayRetrieval
             counts += RetrieveRun(observed, new(start, Math.Min(RunCells, observed.CellCount - start)), into);
         }
 
-        counts = coast is null ? counts : counts with { CoastCorrected = CorrectCoast(coast, into) };
+        counts = coast is null ? counts : counts with { CoastCorrected = CorrectCoast(coast, observed, into) };
         EdgeSmearing.Apply(into.Total, mask.Columns, smearingFactor, into.StandardError);
         return counts;
     }
 
     // The step looks at neighbours, so it needs the whole plane; a new total has a new standard error.
-    private int CorrectCoast(ICoastStep step, ConcentrationPlanes into)
+    private int CorrectCoast(ICoastStep step, BrightnessPlanes observed, ConcentrationPlanes into)
     {
         int corrected = step.Correct(into);
         if (corrected > 0)
         {
-            CellScatter.Apply(into.Total, scatter, into.StandardError);
+            errors.Apply(observed, new(0, observed.CellCount), into.Total, into.StandardError);
         }
 
         return corrected;
@@ -103,7 +106,7 @@ public sealed class DayRetrieval
         int screened3719 = Screen(Channel.V37, screens.Gradient3719Limit, CellConditions.WeatherGradient3719);
         int screened2219 = Screen(Channel.V22, screens.Gradient2219Limit, CellConditions.WeatherGradient2219);
         (int below, int above) = Clipping.Apply(total, cells.Of(into.Multiyear), cells.Of(into.FirstYear), conditions);
-        CellScatter.Apply(total, scatter, cells.Of(into.StandardError));
+        errors.Apply(observed, cells, total, cells.Of(into.StandardError));
         return new(0, screened3719, screened2219, below, above, noObservation, noSolution);
 
         int Screen(Channel upper, double? limit, CellConditions condition) =>

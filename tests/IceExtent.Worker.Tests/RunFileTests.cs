@@ -1,4 +1,5 @@
 using IceExtent.Statistics;
+using IceExtent.Retrieval;
 using IceExtent.Storage.Faults;
 using IceExtent.TestKit;
 using IceExtent.Worker.Configuration;
@@ -193,6 +194,37 @@ public sealed class RunFileTests : IDisposable
         Fault fault = Assert.Single(faulty.Faults);
         Assert.Equal(code, fault.Code);
         Assert.Contains(words, fault.ToString(), StringComparison.Ordinal);
+    }
+
+    [Theory]
+    [InlineData("89v = 0.7", "IE1011", "a channel that frequencies_ghz does not have")]
+    [InlineData("19v = -0.1", "IE1006", "from 0 to 10 K")]
+    [InlineData("19v = 10.5", "IE1006", "from 0 to 10 K")]
+    [InlineData("19v = nan", "IE1006", "from 0 to 10 K")]
+    [InlineData("19v = \"0.45\"", "IE1005", "from 0 to 10 K")]
+    [InlineData("19v = [0.45, 0.42]", "IE1005", "from 0 to 10 K")]
+    [InlineData("19x = 0.45", "IE1003", "Did you mean 19")]
+    public void Load_SensorWithWrongNoise_IsRefused(string noise, string code, string words)
+    {
+        run.WriteDay(new(1990, 1, 1), _ => 0.5);
+        run.Write("tiny.toml", TinyRun.Sensor("1990-01-01", "1999-12-31") + "\n[noise_k]\n" + noise);
+
+        ConfigurationException faulty = Assert.Throws<ConfigurationException>(() => RunFileLoader.Load(run.RunFile, ConfigFolder.BesideProgram));
+
+        Fault fault = Assert.Single(faulty.Faults);
+        Assert.Equal(code, fault.Code);
+        Assert.Contains(words, fault.ToString(), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Load_SensorWithNoise_HasItAndNoneElsewhere()
+    {
+        run.WriteDay(new(1990, 1, 1), _ => 0.5);
+        run.Write("tiny.toml", TinyRun.Sensor("1990-01-01", "1999-12-31") + "\n[noise_k]\n19v = 0.45\n37v = 0\n");
+
+        ChannelNoise noise = Assert.Single(RunFileLoader.Load(run.RunFile, ConfigFolder.BesideProgram).Sources).Sensor.NoiseKelvins;
+
+        Assert.Equal(new(new Dictionary<Channel, double> { [Channel.V19] = 0.45 }), noise);
     }
 
     [Theory]

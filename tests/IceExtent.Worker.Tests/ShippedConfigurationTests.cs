@@ -39,6 +39,19 @@ public sealed class ShippedConfigurationTests
         }
     }
 
+    /// <summary>Origin: printed, [Hollinger1989]; F8 itself, and F11 and F13 as F8.</summary>
+    [Theory]
+    [InlineData("ssmi-f08")]
+    [InlineData("ssmi-f11")]
+    [InlineData("ssmi-f13")]
+    [Trait("Reference", "Hollinger1989")]
+    public void Sensor_SpecialSensorMicrowaveImager_HasThePrintedNoise(string name)
+    {
+        Sensor sensor = SensorLoader.Load(Path.Combine(ConfigFolder.BesideProgram.Sensors, name + ".toml"), [])!;
+
+        Assert.Equal([0.45, 0.42, 0.74, 0.37, 0.38, 0.69, 0.73], ChannelNames.All.Select(channel => sensor.NoiseKelvins[channel]));
+    }
+
     [Theory]
     [MemberData(nameof(Grids))]
     public void Grid_Shipped_IsValidAndHasLand(string name)

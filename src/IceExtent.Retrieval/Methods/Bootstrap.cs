@@ -18,6 +18,8 @@ public sealed class Bootstrap : IConcentrationMethod
     /// <summary>How far below the ice line a cell may lie and still be in polarisation mode. Unit: K.</summary>
     public const double ClosedIceMarginKelvins = 5.0;
 
+    private readonly LinearForm openForm;
+    private readonly LinearForm closedForm;
     private readonly LinearKernel frequency;
     private readonly LinearKernel? polarization;
     private readonly LinearKernel? aboveLine;
@@ -31,14 +33,18 @@ public sealed class Bootstrap : IConcentrationMethod
         ArgumentNullException.ThrowIfNull(points);
         FrequencyMode = IceLine.Through(new(0.0, (Channel.V37, 1.0)), new(0.0, (Channel.V19, 1.0)), points.FirstYear, points.Multiyear);
         PolarizationMode = IceLine.Through(new(0.0, (Channel.V37, 1.0)), new(0.0, (Channel.H37, 1.0)), points.FirstYear, points.Multiyear);
-        frequency = new(FrequencyMode.Concentration(points.OpenWater));
+        openForm = FrequencyMode.Concentration(points.OpenWater);
+        closedForm = PolarizationMode.Concentration(points.OpenWater);
+        frequency = new(openForm);
         Channels = [Channel.V19, Channel.V37];
         if (hemisphere == Hemisphere.North)
         {
-            polarization = new(PolarizationMode.Concentration(points.OpenWater));
+            polarization = new(closedForm);
             aboveLine = new(PolarizationMode.AboveLine);
             Channels = [Channel.V19, Channel.V37, Channel.H37];
         }
+
+        PureTangents = new(TangentAt(points.OpenWater), TangentAt(points.FirstYear), TangentAt(points.Multiyear));
     }
 
     /// <summary>The line of closed ice in (37V, 19V).</summary>
@@ -60,6 +66,9 @@ public sealed class Bootstrap : IConcentrationMethod
     public bool SeparatesIceTypes => false;
 
     /// <inheritdoc/>
+    public PureTangents PureTangents { get; }
+
+    /// <inheritdoc/>
     public void Retrieve(BrightnessPlanes observed, CellRange cells, ConcentrationPlanes into)
     {
         ArgumentNullException.ThrowIfNull(into);
@@ -76,6 +85,44 @@ public sealed class Bootstrap : IConcentrationMethod
         }
 
         cells.Of(into.Multiyear).Fill(float.NaN);
+    }
+
+    /// <inheritdoc/>
+    /// <remarks>The form of the mode that the surface is in; where modes meet the concentration has a step that no derivative tells.</remarks>
+    public LinearForm TangentAt(ChannelKelvins surface) =>
+        polarization is not null && PolarizationMode.AboveLine.At(surface) > -ClosedIceMarginKelvins ? closedForm : openForm;
+
+    /// <inheritdoc/>
+    public void WriteNoiseVariance(BrightnessPlanes observed, CellRange cells, ChannelNoise noise, Span<float> variance)
+    {
+        ArgumentNullException.ThrowIfNull(noise);
+        float open = (float)noise.VarianceOf(openForm);
+        if (aboveLine is null)
+        {
+            variance.Fill(open);
+            return;
+        }
+
+        aboveLine.Evaluate(observed, cells, variance);
+        ByMode((float)noise.VarianceOf(closedForm), open, variance);
+    }
+
+    // Takes the distance above the line, gives the variance of the mode that it chooses.
+    private static void ByMode(float closed, float open, Span<float> kelvinsThenVariance)
+    {
+        const float Margin = (float)-ClosedIceMarginKelvins;
+        int cell = 0;
+        for (; cell <= kelvinsThenVariance.Length - Vector<float>.Count; cell += Vector<float>.Count)
+        {
+            Vector.ConditionalSelect(
+                Vector.GreaterThan(new Vector<float>(kelvinsThenVariance[cell..]), new Vector<float>(Margin)), new Vector<float>(closed), new Vector<float>(open))
+                .CopyTo(kelvinsThenVariance[cell..]);
+        }
+
+        for (; cell < kelvinsThenVariance.Length; cell++)
+        {
+            kelvinsThenVariance[cell] = kelvinsThenVariance[cell] > Margin ? closed : open;
+        }
     }
 
     private static void Choose(ReadOnlySpan<float> aboveKelvins, ReadOnlySpan<float> closed, Span<float> total)

@@ -10,6 +10,7 @@ public sealed class Bristol : IConcentrationMethod
     /// <summary>The name run files use.</summary>
     public const string MethodName = "bristol";
 
+    private readonly LinearForm form;
     private readonly LinearKernel concentration;
 
     /// <summary>Tunes the method.</summary>
@@ -19,7 +20,8 @@ public sealed class Bristol : IConcentrationMethod
     {
         ArgumentNullException.ThrowIfNull(points);
         Line = IceLine.Through(Abscissa, Ordinate, points.FirstYear, points.Multiyear);
-        concentration = new(Line.Concentration(points.OpenWater));
+        form = Line.Concentration(points.OpenWater);
+        concentration = new(form);
     }
 
     /// <summary>The axis along the plane of ice, in K.</summary>
@@ -44,10 +46,23 @@ public sealed class Bristol : IConcentrationMethod
     public bool SeparatesIceTypes => false;
 
     /// <inheritdoc/>
+    public PureTangents PureTangents => new(form, form, form);
+
+    /// <inheritdoc/>
     public void Retrieve(BrightnessPlanes observed, CellRange cells, ConcentrationPlanes into)
     {
         ArgumentNullException.ThrowIfNull(into);
         concentration.Evaluate(observed, cells, cells.Of(into.Total));
         cells.Of(into.Multiyear).Fill(float.NaN);
+    }
+
+    /// <inheritdoc/>
+    public LinearForm TangentAt(ChannelKelvins surface) => form;
+
+    /// <inheritdoc/>
+    public void WriteNoiseVariance(BrightnessPlanes observed, CellRange cells, ChannelNoise noise, Span<float> variance)
+    {
+        ArgumentNullException.ThrowIfNull(noise);
+        variance.Fill((float)noise.VarianceOf(form));
     }
 }

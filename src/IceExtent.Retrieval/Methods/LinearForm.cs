@@ -18,6 +18,16 @@ public sealed record LinearForm
         }
     }
 
+    /// <summary>Makes the form that has a value over a surface and given weights.</summary>
+    /// <param name="value">What <see cref="At(ChannelKelvins)"/> gives for the surface.</param>
+    /// <param name="surface">Holds every channel with a weight.</param>
+    /// <param name="terms">A weight a channel, in the form's unit per K; no channel twice.</param>
+    public static LinearForm Through(double value, ChannelKelvins surface, params ReadOnlySpan<(Channel Channel, double Weight)> terms)
+    {
+        LinearForm weighted = new(0.0, terms);
+        return new(value - weighted.At(surface), weighted.weights);
+    }
+
     private LinearForm(double offset, double[] weights) => (Offset, this.weights) = (offset, weights);
 
     /// <summary>The constant.</summary>

@@ -7,11 +7,20 @@ public sealed class NasaTeam : IConcentrationMethod
     /// <summary>The name run files use.</summary>
     public const string MethodName = "nasa-team";
 
+    private readonly NasaTeamCoefficients coefficients;
     private readonly NasaTeamKernel kernel;
+    private readonly NasaTeamNoiseKernel noiseKernel;
 
     /// <summary>Tunes the method.</summary>
     /// <param name="points">The three pure surfaces of one sensor and hemisphere.</param>
-    public NasaTeam(TiePoints points) => kernel = new(NasaTeamCoefficients.From(points));
+    public NasaTeam(TiePoints points)
+    {
+        ArgumentNullException.ThrowIfNull(points);
+        coefficients = NasaTeamCoefficients.From(points);
+        kernel = new(coefficients);
+        noiseKernel = new(coefficients);
+        PureTangents = new(TangentAt(points.OpenWater.Kelvins), TangentAt(points.FirstYear.Kelvins), TangentAt(points.Multiyear.Kelvins));
+    }
 
     /// <inheritdoc/>
     public string Name => MethodName;
@@ -26,6 +35,9 @@ public sealed class NasaTeam : IConcentrationMethod
     public bool SeparatesIceTypes => true;
 
     /// <inheritdoc/>
+    public PureTangents PureTangents { get; }
+
+    /// <inheritdoc/>
     public void Retrieve(BrightnessPlanes observed, CellRange cells, ConcentrationPlanes into)
     {
         ArgumentNullException.ThrowIfNull(observed);
@@ -36,5 +48,20 @@ public sealed class NasaTeam : IConcentrationMethod
             cells.Of(observed.Kelvins(Channel.V37)),
             cells.Of(into.Total),
             cells.Of(into.Multiyear));
+    }
+
+    /// <inheritdoc/>
+    public LinearForm TangentAt(ChannelKelvins surface) => NasaTeamPlain.TangentAt(coefficients, surface);
+
+    /// <inheritdoc/>
+    public void WriteNoiseVariance(BrightnessPlanes observed, CellRange cells, ChannelNoise noise, Span<float> variance)
+    {
+        ArgumentNullException.ThrowIfNull(observed);
+        noiseKernel.Write(
+            cells.Of(observed.Kelvins(Channel.V19)),
+            cells.Of(observed.Kelvins(Channel.H19)),
+            cells.Of(observed.Kelvins(Channel.V37)),
+            noise,
+            variance);
     }
 }

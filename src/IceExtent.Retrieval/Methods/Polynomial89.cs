@@ -1,3 +1,6 @@
+using System.Numerics;
+using System.Runtime.CompilerServices;
+
 namespace IceExtent.Retrieval;
 
 /// <summary>The polynomial in the polarisation difference at 85 to 91 GHz.</summary>
@@ -12,12 +15,17 @@ public sealed class Polynomial89 : IConcentrationMethod
     /// <summary>The name run files use.</summary>
     public const string MethodName = "polynomial-89";
 
+    private static readonly LinearForm Difference = new(0.0, (Channel.V89, 1.0), (Channel.H89, -1.0));
+
     private const double SlopeAtWater = -1.14;
     private const double SlopeAtIce = -0.14;
 
     private readonly double[] coefficients;
     private readonly float water;
     private readonly float ice;
+    private readonly float slope0;
+    private readonly float slope1;
+    private readonly float slope2;
 
     /// <summary>Tunes the method.</summary>
     /// <param name="points">The polarisation differences over the two pure surfaces.</param>
@@ -32,6 +40,8 @@ public sealed class Polynomial89 : IConcentrationMethod
 
         coefficients = Solve(points.WaterKelvins, points.IceKelvins);
         (water, ice) = ((float)points.WaterKelvins, (float)points.IceKelvins);
+        (slope0, slope1, slope2) = ((float)coefficients[1], (float)(2.0 * coefficients[2]), (float)(3.0 * coefficients[3]));
+        PureTangents = new(TangentAt(points.WaterKelvins), TangentAt(points.IceKelvins), TangentAt(points.IceKelvins));
     }
 
     /// <summary>d0 to d3, in 1/K to the power of the index.</summary>
@@ -48,6 +58,9 @@ public sealed class Polynomial89 : IConcentrationMethod
 
     /// <inheritdoc/>
     public bool SeparatesIceTypes => false;
+
+    /// <inheritdoc/>
+    public PureTangents PureTangents { get; }
 
     /// <inheritdoc/>
     public void Retrieve(BrightnessPlanes observed, CellRange cells, ConcentrationPlanes into)
@@ -69,9 +82,55 @@ public sealed class Polynomial89 : IConcentrationMethod
         cells.Of(into.Multiyear).Fill(float.NaN);
     }
 
+    /// <inheritdoc/>
+    /// <remarks>At and beyond a tie point the value is 0 or 1 and the slope that of the end, so that noise does not vanish there.</remarks>
+    public LinearForm TangentAt(ChannelKelvins surface)
+    {
+        ArgumentNullException.ThrowIfNull(surface);
+        return TangentAt(surface[Channel.V89] - surface[Channel.H89]);
+    }
+
+    /// <inheritdoc/>
+    public void WriteNoiseVariance(BrightnessPlanes observed, CellRange cells, ChannelNoise noise, Span<float> variance)
+    {
+        ArgumentNullException.ThrowIfNull(observed);
+        ArgumentNullException.ThrowIfNull(noise);
+        ReadOnlySpan<float> vertical = cells.Of(observed.Kelvins(Channel.V89));
+        ReadOnlySpan<float> horizontal = cells.Of(observed.Kelvins(Channel.H89));
+        Vector<float> differenceVariance = new((float)noise.VarianceOf(Difference));
+        int cell = 0;
+        for (; cell <= variance.Length - Vector<float>.Count; cell += Vector<float>.Count)
+        {
+            Vector<float> slope = SlopeAt(new Vector<float>(vertical[cell..]) - new Vector<float>(horizontal[cell..]));
+            (slope * slope * differenceVariance).CopyTo(variance[cell..]);
+        }
+
+        for (; cell < variance.Length; cell++)
+        {
+            Vector<float> slope = SlopeAt(new Vector<float>(vertical[cell] - horizontal[cell]));
+            variance[cell] = (slope * slope * differenceVariance)[0];
+        }
+    }
+
     /// <summary>The polynomial's value in double precision, without the ends: the plain twin.</summary>
     public double At(double differenceKelvins) =>
         (((((coefficients[3] * differenceKelvins) + coefficients[2]) * differenceKelvins) + coefficients[1]) * differenceKelvins) + coefficients[0];
+
+    // The slope in 1/K, held at the tie points.
+    [MethodImpl(MethodImplOptions.AggressiveInlining)] // Called once a vector.
+    private Vector<float> SlopeAt(Vector<float> difference)
+    {
+        Vector<float> held = Vector.Min(Vector.Max(difference, new Vector<float>(ice)), new Vector<float>(water));
+        return (((held * slope2) + new Vector<float>(slope1)) * held) + new Vector<float>(slope0);
+    }
+
+    private LinearForm TangentAt(double differenceKelvins)
+    {
+        double held = Math.Clamp(differenceKelvins, ice, water);
+        double value = differenceKelvins >= water ? 0.0 : differenceKelvins <= ice ? 1.0 : At(differenceKelvins);
+        double slope = (((3.0 * coefficients[3] * held) + (2.0 * coefficients[2])) * held) + coefficients[1];
+        return Difference.Times(slope).Plus(1.0, new LinearForm(value - (slope * differenceKelvins)));
+    }
 
     // Hermite interpolation between the two tie points, expanded in powers of P.
     private static double[] Solve(double water, double ice)

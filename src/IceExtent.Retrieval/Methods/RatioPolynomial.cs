@@ -21,4 +21,10 @@ public readonly record struct RatioPolynomial(double Constant, double Polarizati
     public double At(double polarizationRatio, double gradientRatio) =>
         Constant + (Polarization * polarizationRatio) + (Gradient * gradientRatio)
         + (Product * polarizationRatio * gradientRatio);
+
+    /// <summary>The derivative by PR.</summary>
+    public double PolarizationSlope(double gradientRatio) => Polarization + (Product * gradientRatio);
+
+    /// <summary>The derivative by GR.</summary>
+    public double GradientSlope(double polarizationRatio) => Gradient + (Product * polarizationRatio);
 }

@@ -14,6 +14,8 @@ public sealed class SelfTuning : IConcentrationMethod
     /// <summary>The name run files use.</summary>
     public const string MethodName = "self-tuning";
 
+    private const int PieceCells = 512; // Small enough for the stack.
+
     private readonly LinearKernel overWater;
     private readonly LinearKernel overIce;
     private readonly float blendFrom;
@@ -76,6 +78,51 @@ public sealed class SelfTuning : IConcentrationMethod
         Blend(closed, total);
         closed.Fill(float.NaN);
     }
+
+    /// <inheritdoc/>
+    public PureTangents PureTangents => new(OverWater, OverIce, OverIce);
+
+    /// <inheritdoc/>
+    public LinearForm TangentAt(ChannelKelvins surface)
+    {
+        (double open, double closed) = (OverWater.At(surface), OverIce.At(surface));
+        double share = ShareOverIce(open);
+        double slope = share is > 0.0 and < 1.0 ? inverseBlend : 0.0;
+        LinearForm form = OverWater.Times(1.0 - share + (slope * (closed - open))).Plus(share, OverIce);
+        return form.Plus(1.0, new LinearForm(open + (share * (closed - open)) - form.At(surface)));
+    }
+
+    /// <inheritdoc/>
+    public void WriteNoiseVariance(BrightnessPlanes observed, CellRange cells, ChannelNoise noise, Span<float> variance)
+    {
+        ArgumentNullException.ThrowIfNull(noise);
+        Span<float> closed = stackalloc float[PieceCells];
+        NoiseOfForms forms = new(
+            (float)noise.VarianceOf(OverWater), (float)noise.CovarianceOf(OverWater, OverIce), (float)noise.VarianceOf(OverIce));
+        for (int start = 0; start < cells.Length; start += PieceCells)
+        {
+            CellRange piece = new(cells.Start + start, Math.Min(PieceCells, cells.Length - start));
+            Span<float> open = variance.Slice(start, piece.Length);
+            overWater.Evaluate(observed, piece, open);
+            overIce.Evaluate(observed, piece, closed[..piece.Length]);
+            ToVariance(closed, forms, open);
+        }
+    }
+
+    // Takes concentrations over water, gives variances.
+    private void ToVariance(ReadOnlySpan<float> closed, NoiseOfForms forms, Span<float> openThenVariance)
+    {
+        for (int cell = 0; cell < openThenVariance.Length; cell++)
+        {
+            float open = openThenVariance[cell];
+            float share = Math.Clamp((open - blendFrom) * inverseBlend, 0f, 1f);
+            float slope = share > 0f && share < 1f ? inverseBlend : 0f;
+            float weight = 1f - share + (slope * (closed[cell] - open));
+            openThenVariance[cell] = (weight * weight * forms.Open) + (2f * weight * share * forms.Both) + (share * share * forms.Closed);
+        }
+    }
+
+    private readonly record struct NoiseOfForms(float Open, float Both, float Closed);
 
     /// <summary>The share of the closed-ice projection at a concentration found by the other: the plain twin of the kernel.</summary>
     public double ShareOverIce(double overWaterFraction) => Math.Clamp((overWaterFraction - blendFrom) * inverseBlend, 0.0, 1.0);

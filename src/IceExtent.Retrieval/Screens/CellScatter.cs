@@ -5,8 +5,8 @@ namespace IceExtent.Retrieval;
 
 /// <summary>The standard error that the scatter of the two pure surfaces gives a mixed cell.</summary>
 /// <remarks>
-/// σ² = (1 − C)²·σ_water² + C²·σ_ice². Source: [Tonboe2016], [Lavergne2019]; the scatter is the sensor file's and
-/// holds instrument noise. Footprint smearing at the edge is not in it.
+/// σ² = (1 − C)²·σ_water² + C²·σ_ice² + σ_noise². Source: [Tonboe2016], [Lavergne2019]. Footprint smearing at the edge is
+/// not in it.
 /// </remarks>
 public static class CellScatter
 {
@@ -38,11 +38,49 @@ public static class CellScatter
         }
     }
 
+    /// <summary>Writes the standard error of a run of cells with the noise of each.</summary>
+    /// <param name="totalFraction">Clipped concentrations; NaN is missing.</param>
+    /// <param name="scatter">The scatter over the pure surfaces, without noise.</param>
+    /// <param name="noiseVariance">The variance that noise gives each cell, without unit; above 1 it counts as 1, which is all there is to be wrong by.</param>
+    /// <param name="standardErrorFraction">
+    /// Receives one standard error a cell, NaN where the concentration is. May be the same memory as <paramref name="noiseVariance"/>.
+    /// </param>
+    /// <exception cref="ArgumentException">The spans differ in length.</exception>
+    public static void Apply(
+        ReadOnlySpan<float> totalFraction, RetrievalScatter scatter, ReadOnlySpan<float> noiseVariance, Span<float> standardErrorFraction)
+    {
+        ArgumentNullException.ThrowIfNull(scatter);
+        int cells = totalFraction.Length;
+        if (noiseVariance.Length != cells || standardErrorFraction.Length != cells)
+        {
+            throw new ArgumentException("All planes must have the same number of cells.", nameof(standardErrorFraction));
+        }
+
+        Vector<float> water = new((float)scatter.OpenWaterFraction);
+        Vector<float> ice = new((float)scatter.ClosedIceFraction);
+        int cell = 0;
+        for (; cell <= cells - Vector<float>.Count; cell += Vector<float>.Count)
+        {
+            Vector<float> noise = Vector.Min(new Vector<float>(noiseVariance[cell..]), Vector<float>.One);
+            Vector.SquareRoot(VarianceOf(new Vector<float>(totalFraction[cell..]), water, ice) + noise).CopyTo(standardErrorFraction[cell..]);
+        }
+
+        for (; cell < cells; cell++)
+        {
+            Vector<float> noise = Vector.Min(new Vector<float>(noiseVariance[cell]), Vector<float>.One);
+            standardErrorFraction[cell] = Vector.SquareRoot(VarianceOf(new Vector<float>(totalFraction[cell]), water, ice) + noise)[0];
+        }
+    }
+
     [MethodImpl(MethodImplOptions.AggressiveInlining)] // Called once a vector.
-    private static Vector<float> Of(Vector<float> fraction, Vector<float> water, Vector<float> ice)
+    private static Vector<float> Of(Vector<float> fraction, Vector<float> water, Vector<float> ice) =>
+        Vector.SquareRoot(VarianceOf(fraction, water, ice));
+
+    [MethodImpl(MethodImplOptions.AggressiveInlining)] // Called once a vector.
+    private static Vector<float> VarianceOf(Vector<float> fraction, Vector<float> water, Vector<float> ice)
     {
         Vector<float> fromWater = (Vector<float>.One - fraction) * water;
         Vector<float> fromIce = fraction * ice;
-        return Vector.SquareRoot((fromWater * fromWater) + (fromIce * fromIce));
+        return (fromWater * fromWater) + (fromIce * fromIce);
     }
 }

@@ -28,7 +28,21 @@ public sealed record KelvinRange(double LowestKelvins, double HighestKelvins);
 /// <summary>How well a sensor and its tie points are known, for standard errors.</summary>
 /// <param name="OpenWaterFraction">Standard deviation of concentration over open water. Unit: 1.</param>
 /// <param name="ClosedIceFraction">Standard deviation of concentration over closed ice. Unit: 1.</param>
-public sealed record RetrievalScatter(double OpenWaterFraction, double ClosedIceFraction);
+public sealed record RetrievalScatter(double OpenWaterFraction, double ClosedIceFraction)
+{
+    /// <summary>The scatter of a method over samples: their covariance through its derivatives at their centres.</summary>
+    /// <param name="method">The tuned method; the samples hold its channels.</param>
+    /// <param name="samples">The samples of the day's window, instrument noise included.</param>
+    /// <remarks>Source: [Tonboe2016], [Lavergne2019].</remarks>
+    public static RetrievalScatter Of(IConcentrationMethod method, PureSamples samples)
+    {
+        ArgumentNullException.ThrowIfNull(method);
+        ArgumentNullException.ThrowIfNull(samples);
+        return new(Scatter(samples.OpenWater), Scatter(samples.ClosedIce));
+
+        double Scatter(SurfaceMoments surface) => Math.Sqrt(surface.VarianceOf(method.TangentAt(surface.Center)));
+    }
+}
 
 /// <summary>A radiometer: what it measures, when it served and how it is tuned. Read from config/sensors.</summary>
 public sealed record Sensor
@@ -48,6 +62,9 @@ public sealed record Sensor
     /// </summary>
     public IReadOnlyDictionary<Channel, double> FootprintsMeters { get; init; } = new Dictionary<Channel, double>();
 
+    /// <summary>The noise of one measurement of each channel for which it is known; a daily mean of several has less.</summary>
+    public ChannelNoise NoiseKelvins { get; init; } = ChannelNoise.None;
+
     /// <summary>The first day of service.</summary>
     public required DateOnly FirstDay { get; init; }
 
@@ -60,7 +77,7 @@ public sealed record Sensor
     /// <summary>The unseen circle round the pole begins at this latitude (absolute value, degrees), or null where there is none.</summary>
     public required double? PolarGapLatitudeDegrees { get; init; }
 
-    /// <summary>Scatter of the retrieval over the two pure surfaces.</summary>
+    /// <summary>Scatter of the retrieval over the two pure surfaces, noise included.</summary>
     public required RetrievalScatter Scatter { get; init; }
 
     /// <summary>Tie points and screens north of the equator.</summary>

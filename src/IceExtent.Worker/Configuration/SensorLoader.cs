@@ -27,6 +27,7 @@ internal static class SensorLoader
         double[]? range = scope.Numbers("range_k", 2, RangeScreen.Physical.LowestKelvins, RangeScreen.Physical.HighestKelvins, "K");
         Dictionary<Channel, double> frequencies = Frequencies(scope);
         Dictionary<Channel, double> footprints = Footprints(scope, frequencies);
+        ChannelNoise noise = Noise(scope, frequencies);
         RetrievalScatter? scatter = Scatter(scope.Table("scatter"));
         HemisphereTuning? north = Tuning(scope.Table("north"));
         HemisphereTuning? south = Tuning(scope.Table("south"));
@@ -47,6 +48,7 @@ internal static class SensorLoader
             Title = title!,
             FrequenciesGigahertz = frequencies,
             FootprintsMeters = footprints,
+            NoiseKelvins = noise,
             FirstDay = first!.Value,
             LastDay = last,
             Range = new(range![0], range[1]),
@@ -103,6 +105,31 @@ internal static class SensorLoader
         }
 
         return footprints;
+    }
+
+    private static ChannelNoise Noise(ConfigScope scope, Dictionary<Channel, double> frequencies)
+    {
+        Dictionary<Channel, double> noise = [];
+        if (scope.Table("noise_k", required: false) is { } table)
+        {
+            foreach (Channel channel in ChannelNames.All)
+            {
+                string name = ChannelNames.NameOf(channel);
+                if (table.Number(name, 0.0, 10.0, "K", required: false) is { } kelvins)
+                {
+                    noise[channel] = kelvins;
+                }
+
+                if (table.Has(name) && !frequencies.ContainsKey(channel))
+                {
+                    Refuse(table, name, "the noise of a channel that frequencies_ghz does not have", "noise of the sensor's own channels");
+                }
+            }
+
+            table.RefuseUnknown();
+        }
+
+        return new(noise);
     }
 
     private static RetrievalScatter? Scatter(ConfigScope? scope)

@@ -70,7 +70,8 @@ internal sealed class SourceRetrieval
     private DayRetrieval Make(string name, HemisphereTuning tuning)
     {
         IConcentrationMethod method = ConcentrationMethods.Create(name, tuning, choices.Grid.Hemisphere);
-        return new(method, tuning.Screens, sensor.Scatter, mask, step, choices.SmearingFactor);
+        RetrievalScatter scatter = tuning.Samples is { } samples ? RetrievalScatter.Of(method, samples) : sensor.Scatter;
+        return new(method, tuning.Screens, scatter, mask, step, choices.SmearingFactor, sensor.NoiseKelvins);
     }
 
     private Channel[] Needed(IReadOnlyCollection<Channel> available)

@@ -55,6 +55,8 @@ public sealed class DemoFilesTests
             frequencies.Keys.Select(key => (key, Number(frequencies, key))).OrderBy(pair => ChannelNames.Parse(pair.key)));
         TomlTable scatter = (TomlTable)file["scatter"];
         Assert.Equal(sensor.Scatter, new(Number(scatter, "open_water"), Number(scatter, "closed_ice")));
+        Assert.Equal(ChannelNoise.None, sensor.NoiseKelvins);
+        Assert.False(file.ContainsKey("noise_k"));
         Assert.Equal(sensor.North, Tuning((TomlTable)file["north"]));
         Assert.Equal(sensor.South, Tuning((TomlTable)file["south"]));
     }

@@ -1,0 +1,56 @@
+namespace IceExtent.Retrieval;
+
+/// <summary>What the standard error of a cell of one method is made of: pure surfaces that vary, and instrument noise.</summary>
+/// <remarks>
+/// The scatter of the sensor's file holds noise. What noise the method has over its own pure surfaces is taken out of it, never
+/// below 0, and each cell gets the noise of its own temperatures instead. Immutable and safe to use from several threads.
+/// </remarks>
+public sealed class ErrorBudget
+{
+    private readonly IConcentrationMethod method;
+    private readonly ChannelNoise noise;
+    private readonly bool hasNoise;
+
+    /// <summary>Parts the scatter of one method.</summary>
+    /// <param name="method">The tuned method.</param>
+    /// <param name="scatter">The scatter over the pure surfaces, noise included.</param>
+    /// <param name="noise">The noise of the channels.</param>
+    public ErrorBudget(IConcentrationMethod method, RetrievalScatter scatter, ChannelNoise noise)
+    {
+        ArgumentNullException.ThrowIfNull(method);
+        ArgumentNullException.ThrowIfNull(scatter);
+        ArgumentNullException.ThrowIfNull(noise);
+        (this.method, this.noise) = (method, noise);
+        hasNoise = method.Channels.Any(channel => noise[channel] > 0.0);
+
+        // Two kinds of ice have one scatter but not the same noise: the smaller leaves more, which is the safe side.
+        PureTangents pure = method.PureTangents;
+        double iceVariance = Math.Min(noise.VarianceOf(pure.FirstYear), noise.VarianceOf(pure.Multiyear));
+        SurfaceScatter = hasNoise
+            ? new(Rest(scatter.OpenWaterFraction, noise.VarianceOf(pure.OpenWater)), Rest(scatter.ClosedIceFraction, iceVariance))
+            : scatter;
+    }
+
+    /// <summary>The scatter over the pure surfaces without noise.</summary>
+    public RetrievalScatter SurfaceScatter { get; }
+
+    /// <summary>Writes the standard errors of a run of cells.</summary>
+    /// <param name="observed">Holds every channel of the method, in K.</param>
+    /// <param name="cells">The run.</param>
+    /// <param name="totalFraction">The run's clipped concentrations; NaN is missing.</param>
+    /// <param name="standardErrorFraction">Receives the run's standard errors, NaN where the concentration is.</param>
+    public void Apply(BrightnessPlanes observed, CellRange cells, ReadOnlySpan<float> totalFraction, Span<float> standardErrorFraction)
+    {
+        if (!hasNoise)
+        {
+            CellScatter.Apply(totalFraction, SurfaceScatter, standardErrorFraction);
+            return;
+        }
+
+        method.WriteNoiseVariance(observed, cells, noise, standardErrorFraction);
+        CellScatter.Apply(totalFraction, SurfaceScatter, noiseVariance: standardErrorFraction, standardErrorFraction);
+    }
+
+    private static double Rest(double scatterFraction, double noiseVariance) =>
+        Math.Sqrt(Math.Max(0.0, (scatterFraction * scatterFraction) - noiseVariance));
+}
