@@ -109,6 +109,26 @@ public sealed class Scene
         }
     }
 
+    /// <summary>Writes how much of the ice's surface is melting: wet snow or ponds, whichever is more.</summary>
+    /// <param name="day">The day, UTC.</param>
+    /// <param name="workspace">Room of this scene.</param>
+    /// <param name="share">Receives 0 to 1, for cells without ice too. Shape: one value a cell, row-major; none missing.</param>
+    /// <exception cref="ArgumentException">The workspace belongs to another scene, or the plane has another length.</exception>
+    public void Melt(DateOnly day, SceneWorkspace workspace, Span<float> share)
+    {
+        Check(workspace);
+        if (share.Length != Grid.CellCount)
+        {
+            throw new ArgumentException($"The plane has {share.Length} cells; the grid has {Grid.CellCount}.", nameof(share));
+        }
+
+        FillSurfaces(TimeOf(day), workspace);
+        for (int cell = 0; cell < share.Length; cell++)
+        {
+            share[cell] = Math.Max(workspace.Cells.Wetness[cell], workspace.Cells.PondShare[cell]);
+        }
+    }
+
     /// <summary>Writes what the radiometer reports for a day.</summary>
     /// <param name="day">The day, UTC.</param>
     /// <param name="workspace">Room of this scene.</param>
@@ -132,13 +152,10 @@ public sealed class Scene
             return;
         }
 
-        double time = TimeOf(day);
-        CellPlanes cells = workspace.Cells;
-        ice.Fill(time, workspace.Scratch, (workspace.First, workspace.Second), cells);
-        weather.Fill(time, ice.Clock.Summerness(time), workspace.Scratch, (workspace.First, workspace.Second), workspace.Storms, cells);
+        FillSurfaces(TimeOf(day), workspace);
         foreach (EmissionKernel kernel in kernels)
         {
-            kernel.Paint(cells, landShare, workspace.PlaneOf);
+            kernel.Paint(workspace.Cells, landShare, workspace.PlaneOf);
         }
 
         coverage.MarkLost(day, workspace.Lost);
@@ -149,6 +166,13 @@ public sealed class Scene
                 day, channel, workspace.PlaneOf(channel).AsSpan(0, Grid.CellCount), Grid.Columns, workspace.First, observed);
             Blank(workspace.Lost, observed);
         }
+    }
+
+    private void FillSurfaces(double time, SceneWorkspace workspace)
+    {
+        ice.Fill(time, workspace.Scratch, (workspace.First, workspace.Second), workspace.Cells);
+        weather.Fill(
+            time, ice.Clock.Summerness(time), workspace.Scratch, (workspace.First, workspace.Second), workspace.Storms, workspace.Cells);
     }
 
     private static double TimeOf(DateOnly day) => day.DayNumber + 0.5;

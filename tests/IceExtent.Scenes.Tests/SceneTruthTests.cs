@@ -179,4 +179,22 @@ public sealed class SceneTruthTests
 
         return highest;
     }
+
+    // Law: nothing melts anywhere poleward of 75 degrees in February, and most of it does in July; the share is from 0 to 1.
+    [Fact]
+    public void Melt_NorthernSeasons_IsASummerThing()
+    {
+        Scene scene = Make("north");
+        SceneWorkspace workspace = scene.CreateWorkspace();
+        float[] share = new float[scene.Grid.CellCount];
+        int[] poleward = [.. Enumerable.Range(0, share.Length).Where(cell => scene.Grid.LatitudesDegrees[cell] > 75.0)];
+
+        scene.Melt(new(2001, 2, 10), workspace, share);
+        Assert.All(poleward, cell => Assert.InRange(share[cell], 0f, 0.05f));
+
+        scene.Melt(new(2001, 7, 10), workspace, share);
+        Assert.All(share, value => Assert.InRange(value, 0f, 1f));
+        Assert.True(poleward.Count(cell => share[cell] > 0.05f) > 0.5 * poleward.Length);
+        Assert.Throws<ArgumentException>(() => scene.Melt(new(2001, 7, 10), workspace, new float[3]));
+    }
 }

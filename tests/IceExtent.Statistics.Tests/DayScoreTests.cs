@@ -40,6 +40,22 @@ public sealed class DayScoreTests
         Assert.Equal(1, score.Of(TruthClass.Pack).Cells);
     }
 
+    /// <summary>Origin: worked. Of six cells the last three melt by 0, 4 and 6 %: only the last, above 5 %, leaves its class; open water cannot melt.</summary>
+    [Fact]
+    public void Of_MeltingCells_StandInAClassOfTheirOwn()
+    {
+        Grid grid = SmallGrid.EqualArea(1, 6);
+        float[] truth = [0f, 0f, 0f, 0.9f, 0.9f, 0.9f];
+        float[] error = Enumerable.Repeat(0.06f, 6).ToArray();
+
+        DayScore score = DayScore.Of(
+            grid, TotalsRegion.Hemisphere(grid, SmallGrid.AllOcean(grid)), truth, error, truth, Rules, [0.9f, 0.9f, 0.9f, 0f, 0.04f, 0.06f]);
+
+        Assert.Equal(3, score.Of(TruthClass.OpenWater).Cells);
+        Assert.Equal(2, score.Of(TruthClass.Pack).Cells);
+        Assert.Equal(1, score.Of(TruthClass.Melting).Cells);
+    }
+
     [Fact]
     public void Of_NoEdge_HasNoEdgeError()
     {

@@ -5,6 +5,9 @@ namespace IceExtent.Statistics.Scoring;
 /// <summary>How one day of one method stands to the truth, over the cells that it observed.</summary>
 public sealed class DayScore
 {
+    // From this share of wet or ponded surface on ice counts as melting: own choice, a tenth of what melts in full summer.
+    private const float MeltingShare = 0.05f;
+
     private readonly CellScore[] byClass;
 
     private DayScore(CellScore[] byClass, double trueExtent, double extent, double disagreeing, double edgeMeters) =>
@@ -39,13 +42,15 @@ public sealed class DayScore
     /// <param name="standardError">Their standard errors.</param>
     /// <param name="truth">True concentrations; NaN is not scored.</param>
     /// <param name="rules">The limits.</param>
+    /// <param name="melting">The share of the ice's surface that melts, one value a cell, or nothing where no ice does.</param>
     public static DayScore Of(
         Grid grid,
         TotalsRegion region,
         ReadOnlySpan<float> retrieved,
         ReadOnlySpan<float> standardError,
         ReadOnlySpan<float> truth,
-        TotalsRules rules)
+        TotalsRules rules,
+        ReadOnlySpan<float> melting = default)
     {
         ArgumentNullException.ThrowIfNull(grid);
         ArgumentNullException.ThrowIfNull(region);
@@ -68,7 +73,7 @@ public sealed class DayScore
             disagreeing += trueIce != ice ? area : 0.0;
             sides += Differs(cell, 1, (cell + 1) % grid.Columns != 0, retrieved, truth, limit)
                 + Differs(cell, grid.Columns, cell + grid.Columns < grid.CellCount, retrieved, truth, limit);
-            ref CellScore score = ref byClass[(int)ClassOf(truth[cell], rules)];
+            ref CellScore score = ref byClass[(int)ClassOf(truth[cell], melting.IsEmpty ? 0f : melting[cell], rules)];
             score = score.With(retrieved[cell], standardError[cell], truth[cell]);
         }
 
@@ -82,8 +87,9 @@ public sealed class DayScore
             ? 1
             : 0;
 
-    private static TruthClass ClassOf(float truth, TotalsRules rules) =>
+    private static TruthClass ClassOf(float truth, float melting, TotalsRules rules) =>
         truth <= 0f ? TruthClass.OpenWater
+        : melting >= MeltingShare ? TruthClass.Melting
         : truth < (float)rules.IceFraction ? TruthClass.BelowLimit
         : truth < (float)rules.PackFraction ? TruthClass.MarginalZone
         : TruthClass.Pack;

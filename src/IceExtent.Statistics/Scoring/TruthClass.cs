@@ -14,4 +14,7 @@ public enum TruthClass
 
     /// <summary>At or above the pack limit.</summary>
     Pack,
+
+    /// <summary>Ice of any concentration whose surface melts: wet snow or ponds, which no method here sees as dry ice.</summary>
+    Melting,
 }

@@ -7,7 +7,7 @@ namespace IceExtent.Worker.Commands;
 /// <summary>Prints scores: one table of cells and one of extents.</summary>
 internal static class ScoreReport
 {
-    private static readonly string[] ClassNames = ["open water", "below limit", "marginal", "pack"];
+    private static readonly string[] ClassNames = ["open water", "below limit", "marginal", "pack", "melting"];
 
     public static void Print(IReadOnlyList<SeasonScore> scores, bool json, CommandConsole console)
     {

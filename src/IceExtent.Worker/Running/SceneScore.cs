@@ -101,6 +101,7 @@ internal sealed class SceneScore
     private DayOfMethods Score(DateOnly day, TunedDay? tuned, Bench bench)
     {
         bench.Observe(day);
+        scene.Melt(day, bench.Workspace, bench.Melting);
         scene.Truth(day, bench.Workspace, bench.Truth);
         IReadOnlyList<DayRetrieval> retrievals = source.RetrievalsWith(tuned);
         (DayScore, double)[] methods = new (DayScore, double)[retrievals.Count];
@@ -108,7 +109,7 @@ internal sealed class SceneScore
         {
             retrievals[method].Retrieve(bench.Observed, bench.Conditions, bench.Concentration);
             methods[method] = (
-                DayScore.Of(scene.Grid, region, bench.Concentration.Total, bench.Concentration.StandardError, bench.Truth.Concentration, rules),
+                DayScore.Of(scene.Grid, region, bench.Concentration.Total, bench.Concentration.StandardError, bench.Truth.Concentration, rules, bench.Melting),
                 bench.Uncertainty.StandardErrorsSquareMeters(region, bench.Concentration.Total, bench.Concentration.StandardError, rules.IceFraction).Extent);
         }
 
@@ -142,6 +143,8 @@ internal sealed class SceneScore
         public SceneWorkspace Workspace { get; } = scene.CreateWorkspace();
 
         public SceneTruth Truth { get; } = new(scene.Grid.CellCount);
+
+        public float[] Melting { get; } = new float[scene.Grid.CellCount];
 
         public BrightnessPlanes Observed { get; } = new(scene.Grid.CellCount, source.Channels);
 
