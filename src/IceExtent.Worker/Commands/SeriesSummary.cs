@@ -1,5 +1,4 @@
 using System.Globalization;
-using IceExtent.Retrieval;
 using IceExtent.Statistics;
 using IceExtent.Worker.Running;
 
@@ -11,7 +10,7 @@ internal sealed class SeriesSummary
     private const double WellObservedShare = 0.98;
 
     private readonly Dictionary<string, DailyRow> lastByMethod = new(StringComparer.Ordinal);
-    private readonly Dictionary<string, RetrievalCounts> masked = new(StringComparer.Ordinal);
+    private readonly Dictionary<string, (long OutsideIceMask, long WarmWater)> masked = new(StringComparer.Ordinal);
     private int days;
     private int emptiedDays;
     private int poorDays;
@@ -23,7 +22,8 @@ internal sealed class SeriesSummary
         foreach (MethodResult method in result.Methods)
         {
             lastByMethod[method.Method] = method.Rows[0];
-            masked[method.Method] = masked.GetValueOrDefault(method.Method) + method.Counts;
+            (long outside, long warm) = masked.GetValueOrDefault(method.Method);
+            masked[method.Method] = (outside + method.Counts.OutsideIceMask, warm + method.Counts.WarmWater);
         }
 
         if (result.Methods is [{ Rows: [var first, ..] }, ..])
@@ -47,11 +47,11 @@ internal sealed class SeriesSummary
                     $"{row.Date:yyyy-MM-dd} {method}: extent {row.ExtentSquareKilometers / 1e6:F3} ± {row.ExtentStandardErrorSquareKilometers / 1e6:F3}, area {row.AreaSquareKilometers / 1e6:F3} ± {row.AreaStandardErrorSquareKilometers / 1e6:F3} million km², {row.ObservedShare:P0} observed"));
         }
 
-        foreach ((string method, RetrievalCounts counts) in masked.Where(method => method.Value.OutsideIceMask + method.Value.WarmWater > 0))
+        foreach ((string method, (long outside, long warm)) in masked.Where(method => method.Value.OutsideIceMask + method.Value.WarmWater > 0))
         {
             console.Print(string.Create(
                 CultureInfo.InvariantCulture,
-                $"{method}: ice taken away from {(double)counts.OutsideIceMask / days:F0} cells a day outside the ice mask, from {(double)counts.WarmWater / days:F0} in warm water."));
+                $"{method}: ice taken away from {(double)outside / days:F0} cells a day outside the ice mask, from {(double)warm / days:F0} in warm water."));
         }
 
         if (emptiedDays > 0)
