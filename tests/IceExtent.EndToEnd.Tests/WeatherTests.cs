@@ -41,8 +41,8 @@ public sealed class WeatherTests : IDisposable
     }
 
     /// <summary>
-    /// Origin: worked. The mask of January has columns 1 and 2 alone: 8 cells are ice, 4 cells of column 3 lose theirs, and column 4
-    /// had none. February has all columns, and row 0 has no value in either: it masks nothing, so cell 3 of January stays too.
+    /// Origin: worked. The mask of January has columns 1 and 2 alone, but no value in row 0, so nothing is masked there: 8 + 1 cells
+    /// are ice, 3 cells of column 3 lose theirs, and column 4 had none. February has all columns.
     /// </summary>
     [Fact]
     public async Task Run_IceMask_SetsTheMonthsCellsToOpenWater()
@@ -102,8 +102,8 @@ public sealed class WeatherTests : IDisposable
     }
 
     /// <summary>
-    /// Origin: worked. Column 3 is outside in January, but for cell 18. Cell 8 is empty; its seven observed neighbours fill it with
-    /// ice, and the mask takes that away again.
+    /// Origin: worked. Cell 8 is empty and outside in January; its eight observed neighbours fill it with ice, and the mask takes
+    /// that away again: 15 of 16 cells.
     /// </summary>
     [Fact]
     public async Task Run_FilledOutsideTheMask_IsOpenWaterToo()
@@ -121,7 +121,7 @@ public sealed class WeatherTests : IDisposable
 
     /// <summary>
     /// Origin: worked. The tie points of F17 give at 10 % first-year ice 19V 191.25, 37V 210.62, ratio 0.0482; the fixed limit of the small
-    /// sensor is 0.07. Ice of 8 % has 0.0498 and goes, ice of 12 % has 0.0465 and stays; below 10 % of no use for extent, either way.
+    /// sensor is 0.07. Ice of 8 % has 0.0498 and goes, ice of 12 % has 0.0465 and stays.
     /// </summary>
     [Theory]
     [InlineData("fixed", 0.08f, 0)]
