@@ -9,8 +9,8 @@ namespace IceExtent.Retrieval;
 /// <param name="NoObservation">Cells without a channel the method needs.</param>
 /// <param name="NoSolution">Cells whose temperatures the method cannot explain.</param>
 /// <param name="CoastCorrected">Cells that the coast correction changed.</param>
-/// <param name="OutsideIceMask">Cells with ice before any screen that lie outside the month's ice mask.</param>
-/// <param name="WarmWater">Cells with ice before any screen in a sea that the month knows as too warm.</param>
+/// <param name="OutsideIceMask">Cells with ice left by the screens that lie outside the month's ice mask.</param>
+/// <param name="WarmWater">Cells with ice left by the screens in a sea that is too warm in the month.</param>
 public readonly record struct RetrievalCounts(
     int OutOfRange,
     int Gradient3719,

@@ -52,13 +52,12 @@ public sealed class MonthMask
         return cleared;
     }
 
-    /// <summary>Sets the masked cells of a run to open water; counts those that had ice before any screen.</summary>
+    /// <summary>Sets the masked cells of a run to open water; counts those that still had ice.</summary>
     internal (int OutsideIceMask, int WarmWater) Apply(CellRange cells, ConcentrationPlanes planes)
     {
         CheckLength(planes);
         ReadOnlySpan<CellConditions> masked = cells.Of(conditions);
         Span<float> total = cells.Of(planes.Total);
-        Span<float> unscreened = cells.Of(planes.Unscreened);
         Span<CellConditions> marks = cells.Of(planes.Conditions);
         (int outside, int warm) = (0, 0);
         for (int cell = 0; cell < masked.Length; cell++)
@@ -69,13 +68,14 @@ public sealed class MonthMask
                 continue;
             }
 
-            total[cell] = 0f;
-            marks[cell] |= why;
-            if (unscreened[cell] > 0f)
+            if (total[cell] > 0f) // Else a screen was there first, or there was no ice.
             {
                 outside += (why & CellConditions.OutsideIceMask) != 0 ? 1 : 0;
                 warm += (why & CellConditions.WarmWater) != 0 ? 1 : 0;
             }
+
+            total[cell] = 0f;
+            marks[cell] |= why;
         }
 
         return (outside, warm);

@@ -95,8 +95,8 @@ public sealed record DayRecord(
 /// <param name="Filled">Filled from the neighbours; 0 in a record that does not say it.</param>
 /// <param name="PolarGapFilled">Filled inside the polar gap; 0 in a record that does not say it.</param>
 /// <param name="CoastCorrected">The coast correction changed the cell.</param>
-/// <param name="OutsideIceMask">It had ice before any screen, and lies outside the month's ice mask.</param>
-/// <param name="WarmWater">It had ice before any screen, in a sea that is too warm in its month.</param>
+/// <param name="OutsideIceMask">The screens left ice in it, and it lies outside the month's ice mask.</param>
+/// <param name="WarmWater">The screens left ice in it, in a sea that is too warm in the month.</param>
 public sealed record CellCounts(
     string Method,
     int OutOfRange,

@@ -31,6 +31,17 @@ public sealed class MonthMaskTests
         Assert.Equal(0, counts.ClippedBelow); // A masked cell is 0 before it is clipped.
     }
 
+    /// <summary>Origin: worked. 1 % first-year ice has a 37/19 ratio of 0.0503: the screen at 0.05 takes it, and the mask marks it and takes nothing.</summary>
+    [Fact]
+    public void Retrieve_CellThatAScreenTook_CountsThereAlone()
+    {
+        (ConcentrationPlanes planes, RetrievalCounts counts) = Retrieve([0.01, 0.6], new([true, true], null), gradient3719Limit: 0.05);
+
+        Assert.Equal((1, 1), (counts.Gradient3719, counts.OutsideIceMask));
+        Assert.Equal(CellConditions.WeatherGradient3719 | Outside, planes.Conditions[0]);
+        Assert.Equal(0.01f, planes.Unscreened[0], 1e-5f);
+    }
+
     /// <summary>Cells that no mask holds are those of the retrieval without one, bit by bit; across runs of cells too.</summary>
     [Fact]
     public void Retrieve_AnyMask_LeavesOtherCellsAlone() =>
@@ -75,7 +86,7 @@ public sealed class MonthMaskTests
         Assert.Throws<ArgumentException>(() => new MonthMask(new bool[3], null).ClearFilled(new(4)));
     }
 
-    private static (ConcentrationPlanes Planes, RetrievalCounts Counts) Retrieve(double[] firstYear, MonthMask? month)
+    private static (ConcentrationPlanes Planes, RetrievalCounts Counts) Retrieve(double[] firstYear, MonthMask? month, double gradient3719Limit = 0.2)
     {
         Grid grid = new("row", null, new PolarEqualArea(Ellipsoid.Wgs84, Hemisphere.North, 0.0), new GridFrame(firstYear.Length, 1, 100.0, 0.0, 50.0));
         CellMask mask = new(grid, Enumerable.Repeat(true, firstYear.Length).ToArray(), null);
@@ -89,7 +100,7 @@ public sealed class MonthMaskTests
         }
 
         ConcentrationPlanes planes = new(firstYear.Length);
-        RetrievalCounts counts = new DayRetrieval(new NasaTeam(TiePointSets.F13North), new(0.2, null), new(0.05, 0.05), mask)
+        RetrievalCounts counts = new DayRetrieval(new NasaTeam(TiePointSets.F13North), new(gradient3719Limit, null), new(0.05, 0.05), mask)
             .Retrieve(observed, new CellConditions[firstYear.Length], planes, month);
         return (planes, counts);
     }
