@@ -45,4 +45,10 @@ public enum CellConditions : ushort
 
     /// <summary>In the polar gap, and given the solution of Laplace's equation there.</summary>
     FilledPolarGap = 1 << 11,
+
+    /// <summary>The month's ice mask has no ice here: set to open water.</summary>
+    OutsideIceMask = 1 << 13,
+
+    /// <summary>The month's sea is too warm for ice here: set to open water.</summary>
+    WarmWater = 1 << 14,
 }

@@ -2,7 +2,7 @@ namespace IceExtent.Retrieval;
 
 /// <summary>Everything between one day's brightness temperatures and its concentration, for one method.</summary>
 /// <remarks>
-/// The steps, in order: retrieve, empty land and polar gap, screen weather, clip, correct the coast, standard error, smearing. The
+/// The steps, in order: retrieve, empty land and polar gap, screen weather, mask what cannot be ice in its month, clip, correct the coast, standard error, smearing. The
 /// range check of the temperatures comes before them, once a day: <see cref="CheckRange"/>. Immutable and safe to use from several
 /// threads. The cells are handled in runs that stay in the processor's cache.
 /// </remarks>
@@ -64,9 +64,10 @@ public sealed class DayRetrieval
     /// <param name="observed">Brightness temperatures after <see cref="CheckRange"/>; only read.</param>
     /// <param name="rangeConditions">What <see cref="CheckRange"/> marked.</param>
     /// <param name="into">Receives the day.</param>
+    /// <param name="month">Where ice cannot be in the day's month, or null for nowhere.</param>
     /// <returns>What happened to the cells; <see cref="RetrievalCounts.OutOfRange"/> is left 0.</returns>
     public RetrievalCounts Retrieve(
-        BrightnessPlanes observed, ReadOnlySpan<CellConditions> rangeConditions, ConcentrationPlanes into)
+        BrightnessPlanes observed, ReadOnlySpan<CellConditions> rangeConditions, ConcentrationPlanes into, MonthMask? month = null)
     {
         ArgumentNullException.ThrowIfNull(observed);
         ArgumentNullException.ThrowIfNull(into);
@@ -74,7 +75,7 @@ public sealed class DayRetrieval
         RetrievalCounts counts = default;
         for (int start = 0; start < observed.CellCount; start += RunCells)
         {
-            counts += RetrieveRun(observed, new(start, Math.Min(RunCells, observed.CellCount - start)), into);
+            counts += RetrieveRun(observed, new(start, Math.Min(RunCells, observed.CellCount - start)), into, month);
         }
 
         counts = coast is null ? counts : counts with { CoastCorrected = CorrectCoast(coast, observed, into) };
@@ -94,7 +95,7 @@ public sealed class DayRetrieval
         return corrected;
     }
 
-    private RetrievalCounts RetrieveRun(BrightnessPlanes observed, CellRange cells, ConcentrationPlanes into)
+    private RetrievalCounts RetrieveRun(BrightnessPlanes observed, CellRange cells, ConcentrationPlanes into, MonthMask? month)
     {
         Span<float> total = cells.Of(into.Total);
         Span<CellConditions> conditions = cells.Of(into.Conditions);
@@ -105,9 +106,14 @@ public sealed class DayRetrieval
         Clipping.Copy(total, cells.Of(into.Unscreened));
         int screened3719 = Screen(Channel.V37, screens.Gradient3719Limit, CellConditions.WeatherGradient3719);
         int screened2219 = Screen(Channel.V22, screens.Gradient2219Limit, CellConditions.WeatherGradient2219);
+        (int outside, int warm) = month?.Apply(cells, into) ?? default;
         (int below, int above) = Clipping.Apply(total, cells.Of(into.Multiyear), cells.Of(into.FirstYear), conditions);
         errors.Apply(observed, cells, total, cells.Of(into.StandardError));
-        return new(0, screened3719, screened2219, below, above, noObservation, noSolution);
+        return new(0, screened3719, screened2219, below, above, noObservation, noSolution)
+        {
+            OutsideIceMask = outside,
+            WarmWater = warm,
+        };
 
         int Screen(Channel upper, double? limit, CellConditions condition) =>
             limit is { } value && observed.Has(upper) && observed.Has(Channel.V19)

@@ -9,6 +9,8 @@ namespace IceExtent.Retrieval;
 /// <param name="NoObservation">Cells without a channel the method needs.</param>
 /// <param name="NoSolution">Cells whose temperatures the method cannot explain.</param>
 /// <param name="CoastCorrected">Cells that the coast correction changed.</param>
+/// <param name="OutsideIceMask">Cells with ice left by the screens that lie outside the month's ice mask.</param>
+/// <param name="WarmWater">Cells with ice left by the screens in a sea that is too warm in the month.</param>
 public readonly record struct RetrievalCounts(
     int OutOfRange,
     int Gradient3719,
@@ -17,7 +19,9 @@ public readonly record struct RetrievalCounts(
     int ClippedAbove,
     int NoObservation,
     int NoSolution,
-    int CoastCorrected = 0)
+    int CoastCorrected = 0,
+    int OutsideIceMask = 0,
+    int WarmWater = 0)
 {
     /// <summary>Adds count by count.</summary>
     public static RetrievalCounts operator +(RetrievalCounts left, RetrievalCounts right) => left.Add(right);
@@ -31,5 +35,7 @@ public readonly record struct RetrievalCounts(
         ClippedAbove + other.ClippedAbove,
         NoObservation + other.NoObservation,
         NoSolution + other.NoSolution,
-        CoastCorrected + other.CoastCorrected);
+        CoastCorrected + other.CoastCorrected,
+        OutsideIceMask + other.OutsideIceMask,
+        WarmWater + other.WarmWater);
 }

@@ -49,6 +49,10 @@ public sealed class RunFileTests : IDisposable
     {
         // What stands before the source, what in it, the code, and words the message must hold.
         { "ice_limit = 0.15", "", "IE1003", "ice_limit" },
+        { "[weather]\nretuned_ice_fraction = 10", "", "IE1006", "Write the fraction: 0.1, not 10" },
+        { "[weather]\nwarm_water_north_k = 5.0", "", "IE1006", "270 to 300 K" },
+        { "[weather]\nice_mask_fil = \"mask.nc\"", "", "IE1003", "Did you mean ice_mask_file?" },
+        { "[ice_mask]\nleast_days = 0", "", "IE1006", "1 to 1000" },
         { "write_grid = true", "", "IE1003", "Did you mean write_grids?" },
         { "", "sensr = \"x\"", "IE1003", "Did you mean sensor?" },
         { "write_grids = \"yes\"", "", "IE1005", "true or false" },

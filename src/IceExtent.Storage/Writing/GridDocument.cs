@@ -11,9 +11,11 @@ internal sealed class GridDocument : IDisposable
     private const string Conventions = "Conventions";
     private const string MappingName = "crs";
     private const string BoundsName = "time_bnds";
+    private const int MonthsOfTheYear = 12;
     private static readonly DateOnly Epoch = new(1970, 1, 1);
 
     private readonly Grid grid;
+    private readonly int values;
     private readonly NetcdfText text = new();
     private readonly H5File file = [];
     private readonly NetcdfDimension[] planeDimensions;
@@ -22,12 +24,14 @@ internal sealed class GridDocument : IDisposable
     /// <summary>Starts a file with its coordinates and its map.</summary>
     /// <param name="grid">The grid.</param>
     /// <param name="day">The day, UTC, or null for what holds on every day: the file then has no time.</param>
-    public GridDocument(Grid grid, DateOnly? day)
+    /// <param name="months">Whether each variable has twelve planes, January first, in place of a time.</param>
+    public GridDocument(Grid grid, DateOnly? day, bool months = false)
     {
         this.grid = grid;
+        values = grid.CellCount * (months ? MonthsOfTheYear : 1);
         file.Attributes[Conventions] = text.Of("CF-1.11");
 
-        int timeDimensions = day is null ? 0 : 1;
+        int timeDimensions = day is null && !months ? 0 : 1;
         NetcdfDimension y = NetcdfDimension.WithCoordinate(text, timeDimensions, "y", Centers(grid.Rows, grid.RowCenterMeters));
         NetcdfDimension x = NetcdfDimension.WithCoordinate(text, timeDimensions + 1, "x", Centers(grid.Columns, grid.ColumnCenterMeters));
         Describe(y, "projection_y_coordinate", "y of the center of the cell", "m", "Y");
@@ -35,6 +39,10 @@ internal sealed class GridDocument : IDisposable
         if (day is { } dated)
         {
             planeDimensions = [AddTime(dated, y, x), y, x];
+        }
+        else if (months)
+        {
+            planeDimensions = [AddMonths(y, x), y, x];
         }
         else
         {
@@ -60,11 +68,12 @@ internal sealed class GridDocument : IDisposable
     {
         H5Dataset plane = variable switch
         {
-            PackedVariable packed when packed.Values.Length == grid.CellCount => Packed(packed),
-            BytePackedVariable packed when packed.Values.Length == grid.CellCount => Packed(packed),
-            MaskVariable mask when mask.Values.Length == grid.CellCount => Mask(mask),
+            PackedVariable packed when packed.Values.Length == values => Packed(packed),
+            BytePackedVariable packed when packed.Values.Length == values => Packed(packed),
+            MaskVariable mask when mask.Values.Length == values => Mask(mask),
+            FlagVariable flags when flags.Values.Length == values => Flags(flags),
             _ => throw new ArgumentException(
-                $"The plane of {variable.Name} does not have the {grid.CellCount} cells of the grid {grid.Name}.", nameof(variable)),
+                $"{variable.Name} does not have {values} values, as the {grid.CellCount} cells of the grid {grid.Name} ask for.", nameof(variable)),
         };
         foreach (KeyValuePair<string, string> attribute in variable.Attributes)
         {
@@ -122,11 +131,21 @@ internal sealed class GridDocument : IDisposable
         return plane;
     }
 
+    private H5Dataset<byte[]> Flags(FlagVariable variable)
+    {
+        H5Dataset<byte[]> plane = Plane(variable, units: null, out Span<byte> stored);
+        variable.Values.Span.CopyTo(stored);
+        plane.Attributes["_FillValue"] = BytePacking.Fill;
+        plane.Attributes["flag_values"] = variable.Meanings.Select(flag => flag.Value).ToArray();
+        plane.Attributes["flag_meanings"] = text.Of(string.Join(' ', variable.Meanings.Select(flag => flag.Meaning)));
+        return plane;
+    }
+
     // The caller fills the plane's memory; it is read when the file is encoded.
     private unsafe H5Dataset<T[]> Plane<T>(GridVariable variable, string? units, out Span<T> stored)
         where T : unmanaged
     {
-        int length = grid.CellCount * sizeof(T);
+        int length = values * sizeof(T);
         byte[] memory = ArrayPool<byte>.Shared.Rent(length);
         rented.Add(memory);
         stored = MemoryMarshal.Cast<byte, T>(memory.AsSpan(0, length));
@@ -170,6 +189,15 @@ internal sealed class GridDocument : IDisposable
         NetcdfDimension.Attach(bounds, [time, ends]);
         file[BoundsName] = bounds;
         return time;
+    }
+
+    private NetcdfDimension AddMonths(NetcdfDimension y, NetcdfDimension x)
+    {
+        NetcdfDimension month = NetcdfDimension.WithCoordinate(text, 0, "month", [.. Enumerable.Range(1, MonthsOfTheYear).Select(number => (double)number)]);
+        AddScales(month, y, x);
+        month.Scale.Attributes["long_name"] = text.Of("month of the year, January is 1");
+        month.Scale.Attributes["units"] = text.Of("1");
+        return month;
     }
 
     private void AddScales(params ReadOnlySpan<NetcdfDimension> dimensions)

@@ -33,7 +33,7 @@ public static class GridFile
         Grid grid,
         DateOnly day,
         IReadOnlyList<GridVariable> variables,
-        IReadOnlyList<KeyValuePair<string, string>> attributes) => Write(path, grid, (DateOnly?)day, variables, attributes);
+        IReadOnlyList<KeyValuePair<string, string>> attributes) => Write(path, grid, day, months: false, variables, attributes);
 
     /// <summary>Writes one file of what holds on every day, such as land: the same but for <c>time</c>, which it has not.</summary>
     /// <param name="path">The file; its folder is made when it is missing.</param>
@@ -46,12 +46,26 @@ public static class GridFile
         string path,
         Grid grid,
         IReadOnlyList<GridVariable> variables,
-        IReadOnlyList<KeyValuePair<string, string>> attributes) => Write(path, grid, null, variables, attributes);
+        IReadOnlyList<KeyValuePair<string, string>> attributes) => Write(path, grid, null, months: false, variables, attributes);
+
+    /// <summary>Writes one file of what holds in each month of every year: twelve planes a variable along <c>month</c>, January first.</summary>
+    /// <param name="path">The file; its folder is made when it is missing.</param>
+    /// <param name="grid">The grid of every variable.</param>
+    /// <param name="variables">The variables, each with twelve values a cell, month by month.</param>
+    /// <param name="attributes">Global text attributes, none empty, in the order they are written after <c>Conventions</c>.</param>
+    /// <exception cref="FaultException">IE3101 to IE3107: the file cannot be written.</exception>
+    /// <exception cref="ArgumentException">A variable has another size, or a name is taken or empty.</exception>
+    public static void WriteMonths(
+        string path,
+        Grid grid,
+        IReadOnlyList<GridVariable> variables,
+        IReadOnlyList<KeyValuePair<string, string>> attributes) => Write(path, grid, null, months: true, variables, attributes);
 
     private static void Write(
         string path,
         Grid grid,
         DateOnly? day,
+        bool months,
         IReadOnlyList<GridVariable> variables,
         IReadOnlyList<KeyValuePair<string, string>> attributes)
     {
@@ -59,7 +73,7 @@ public static class GridFile
         ArgumentNullException.ThrowIfNull(variables);
         ArgumentNullException.ThrowIfNull(attributes);
 
-        using GridDocument document = new(grid, day);
+        using GridDocument document = new(grid, day, months);
         foreach (KeyValuePair<string, string> attribute in attributes)
         {
             document.Describe(attribute.Key, attribute.Value);

@@ -63,3 +63,19 @@ public sealed record MaskVariable(
     ReadOnlyMemory<ushort> Values,
     IReadOnlyList<(ushort Mask, string Meaning)> Meanings)
     : GridVariable(Name, LongName, StandardName, Attributes);
+
+/// <summary>A plane of single bytes that each have a meaning.</summary>
+/// <param name="Name">The variable's name.</param>
+/// <param name="LongName">What it is, for people.</param>
+/// <param name="StandardName">The [CF] standard name, or null.</param>
+/// <param name="Attributes">Further text attributes.</param>
+/// <param name="Values">One value a cell, row-major; 255 is missing. Read before the call returns, never kept.</param>
+/// <param name="Meanings">The meaning of each value but 255, one word with underscores.</param>
+public sealed record FlagVariable(
+    string Name,
+    string LongName,
+    string? StandardName,
+    IReadOnlyList<KeyValuePair<string, string>> Attributes,
+    ReadOnlyMemory<byte> Values,
+    IReadOnlyList<(byte Value, string Meaning)> Meanings)
+    : GridVariable(Name, LongName, StandardName, Attributes);

@@ -58,7 +58,8 @@ public sealed record DigestedFile(string Path, string Sha256);
 /// <param name="Rejected">Of the gaps, those whose input was there and could not be used.</param>
 /// <param name="PolarGapFallbacks">Of the days done, those whose polar gap was to be filled and was not, for some method: too little of its rim was observed.</param>
 /// <param name="TiePointFallbacks">Of the days done, those whose tie points were to move and did not, or not all: too few samples.</param>
-public sealed record RunCounts(int DaysDone, int Gaps, int Rejected, int PolarGapFallbacks = 0, int TiePointFallbacks = 0);
+/// <param name="EmptiedDays">Of the days done, those on which screens, masks and coast correction left no cell that counts as ice, for some method, though there were such cells before them.</param>
+public sealed record RunCounts(int DaysDone, int Gaps, int Rejected, int PolarGapFallbacks = 0, int TiePointFallbacks = 0, int EmptiedDays = 0);
 
 /// <summary>How one day of one hemisphere went.</summary>
 public enum DayOutcome
@@ -94,6 +95,8 @@ public sealed record DayRecord(
 /// <param name="Filled">Filled from the neighbours; 0 in a record that does not say it.</param>
 /// <param name="PolarGapFilled">Filled inside the polar gap; 0 in a record that does not say it.</param>
 /// <param name="CoastCorrected">The coast correction changed the cell.</param>
+/// <param name="OutsideIceMask">The screens left ice in it, and it lies outside the month's ice mask.</param>
+/// <param name="WarmWater">The screens left ice in it, in a sea that is too warm in the month.</param>
 public sealed record CellCounts(
     string Method,
     int OutOfRange,
@@ -104,4 +107,6 @@ public sealed record CellCounts(
     int NoSolution,
     int Filled = 0,
     int PolarGapFilled = 0,
-    int CoastCorrected = 0);
+    int CoastCorrected = 0,
+    int OutsideIceMask = 0,
+    int WarmWater = 0);

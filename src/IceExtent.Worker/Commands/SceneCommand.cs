@@ -31,6 +31,7 @@ internal static class SceneCommand
         Option<bool> score = new("--score") { Description = "Write nothing: run methods on the scene and print how they stand to its truth." };
         Option<string[]> methods = new("--methods") { Description = "With --score: the methods, separated by spaces.", HelpName = "METHOD", AllowMultipleArgumentsPerToken = true, DefaultValueFactory = _ => [.. ConcentrationMethods.Names] };
         Option<string> coast = new("--coast") { Description = "With --score: off, brightness or concentration, as coast.correction of a run file.", HelpName = "CORRECTION", DefaultValueFactory = _ => "off" };
+        Option<string> limits = new("--limits") { Description = "With --score: fixed or retuned, as weather.limits of a run file.", HelpName = "LIMITS", DefaultValueFactory = _ => "fixed" };
         Option<int> every = CommonOptions.Count("--every", "With --score: take one day of so many.", _ => 5, 366);
         Option<bool> json = CommonOptions.Json();
         Option<int> workers = CommonOptions.Workers();
@@ -39,7 +40,7 @@ internal static class SceneCommand
             "scene",
             "Write invented brightness temperatures with a known truth, and a run file for them.\n\nExample:\n  iceextent scene --grid north-25km --sensor ssmi-f13 --from 2000-01-01 --to 2000-01-31 --out scene\n  iceextent scene --score --methods nasa-team bristol --from 2000-01-01 --to 2000-12-31 --sensor ssmi-f13")
         {
-            grid, sensor, parameters, from, to, seed, noTruth, output, score, methods, coast, every, json, workers,
+            grid, sensor, parameters, from, to, seed, noTruth, output, score, methods, coast, limits, every, json, workers,
         };
         command.SetAction((parsed, cancellation) =>
         {
@@ -50,7 +51,7 @@ internal static class SceneCommand
             if (parsed.GetValue(score))
             {
                 return Task.FromResult(SceneScoring.Score(
-                    scene, land, parsed.GetValue(methods)!, parsed.GetValue(coast)!, SceneScoring.Days(first, last, parsed.GetValue(every)), parsed.GetValue(workers), parsed.GetValue(json), console, cancellation));
+                    scene, land, parsed.GetValue(methods)!, parsed.GetValue(coast)!, parsed.GetValue(limits)!, SceneScoring.Days(first, last, parsed.GetValue(every)), parsed.GetValue(workers), parsed.GetValue(json), console, cancellation));
             }
 
             string folder = Path.GetFullPath(parsed.GetValue(output) ?? throw new ConfigurationException(

@@ -22,7 +22,7 @@ internal static class SceneScoring
     /// <summary>Scores and prints.</summary>
     /// <exception cref="ConfigurationException">A method does not exist.</exception>
     public static int Score(
-        Scene scene, LandShare land, string[] methods, string coast, IEnumerable<DateOnly> days, int workers, bool json, CommandConsole console, CancellationToken cancellation)
+        Scene scene, LandShare land, string[] methods, string coast, string limits, IEnumerable<DateOnly> days, int workers, bool json, CommandConsole console, CancellationToken cancellation)
     {
         HemisphereTuning tuning = scene.Sensor.In(scene.Grid.Hemisphere);
         List<string> usable = [];
@@ -45,7 +45,7 @@ internal static class SceneScoring
             }
         }
 
-        SceneDefaults defaults = SceneDefaults.Load(ConfigFolder.BesideProgram, scene.Grid, coast);
+        SceneDefaults defaults = SceneDefaults.Load(ConfigFolder.BesideProgram, scene.Grid, coast, limits);
         SceneScore scoring = new(scene, land, usable, defaults);
         IReadOnlyList<SeasonScore> scores = scoring.Run(days, workers, cancellation);
         ScoreReport.Print(scores, json, console);

@@ -10,6 +10,9 @@ internal sealed class SeriesSummary
     private const double WellObservedShare = 0.98;
 
     private readonly Dictionary<string, DailyRow> lastByMethod = new(StringComparer.Ordinal);
+    private readonly Dictionary<string, (long OutsideIceMask, long WarmWater)> masked = new(StringComparer.Ordinal);
+    private int days;
+    private int emptiedDays;
     private int poorDays;
     private double lowestShare = 1.0;
 
@@ -19,10 +22,14 @@ internal sealed class SeriesSummary
         foreach (MethodResult method in result.Methods)
         {
             lastByMethod[method.Method] = method.Rows[0];
+            (long outside, long warm) = masked.GetValueOrDefault(method.Method);
+            masked[method.Method] = (outside + method.Counts.OutsideIceMask, warm + method.Counts.WarmWater);
         }
 
         if (result.Methods is [{ Rows: [var first, ..] }, ..])
         {
+            days++;
+            emptiedDays += result.Methods.Any(method => method.Emptied) ? 1 : 0;
             poorDays += first.ObservedShare < WellObservedShare ? 1 : 0;
             lowestShare = Math.Min(lowestShare, first.ObservedShare);
         }
@@ -38,6 +45,18 @@ internal sealed class SeriesSummary
                 : string.Create(
                     CultureInfo.InvariantCulture,
                     $"{row.Date:yyyy-MM-dd} {method}: extent {row.ExtentSquareKilometers / 1e6:F3} ± {row.ExtentStandardErrorSquareKilometers / 1e6:F3}, area {row.AreaSquareKilometers / 1e6:F3} ± {row.AreaStandardErrorSquareKilometers / 1e6:F3} million km², {row.ObservedShare:P0} observed"));
+        }
+
+        foreach ((string method, (long outside, long warm)) in masked.Where(method => method.Value.OutsideIceMask + method.Value.WarmWater > 0))
+        {
+            console.Print(string.Create(
+                CultureInfo.InvariantCulture,
+                $"{method}: ice taken away from {(double)outside / days:F0} cells a day outside the ice mask, from {(double)warm / days:F0} in warm water."));
+        }
+
+        if (emptiedDays > 0)
+        {
+            console.Print($"{Counted.Days(emptiedDays)} with ice before screens, masks and coast correction and none after them: their totals are 0.");
         }
 
         if (poorDays > 0)

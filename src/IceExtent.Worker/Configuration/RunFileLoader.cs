@@ -41,6 +41,8 @@ internal static class RunFileLoader
         double? rimShare = layered.Number("polar_gap", "least_rim_share", 0.01, 1.0, string.Empty);
         CoastSettings? coast = CoastLoader.Load(layered, grid?.Grid, folder, faults);
         TiePointSettings? tiePoints = TiePointLoader.Load(layered, rules?.IceFraction ?? double.NaN);
+        WeatherSettings? weather = WeatherLoader.Load(layered, grid?.Grid, folder, faults);
+        IceMaskRules? iceMask = WeatherLoader.IceMask(layered);
         layered.RefuseUnknown();
         SourceLoader sources = new(folder, config, methods, needsFootprints: coast?.Correction == CoastCorrection.Brightness, needsSamples: tiePoints?.NeedsSamples(methods) ?? false);
         List<RunSource?> loaded = [.. scope.Tables("source").Select(source => sources.Load(source, grid?.Grid))];
@@ -56,11 +58,13 @@ internal static class RunFileLoader
             RunFile = path,
             Output = Path.GetFullPath(output!, folder),
             Grid = grid!.Grid,
-            ConfigPaths = [config.Defaults, grid.ConfigPath, grid.LandPath, .. coast!.MinimumPath is { } minimum ? [minimum] : Array.Empty<string>()],
+            ConfigPaths = [config.Defaults, grid.ConfigPath, grid.LandPath, .. coast!.MinimumPath is { } minimum ? [minimum] : Array.Empty<string>(), .. weather!.Paths],
             Ocean = land!.OceanBelow(landLimit!.Value),
             Land = land,
             Coast = coast,
             TiePoints = tiePoints!,
+            Weather = weather,
+            IceMask = iceMask!,
             Methods = methods,
             WriteGrids = writeGrids ?? true,
             Rules = rules!,

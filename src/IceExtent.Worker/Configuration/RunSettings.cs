@@ -38,6 +38,12 @@ internal sealed record RunSettings
     /// <summary>Whether and how tie points follow samples.</summary>
     public required TiePointSettings TiePoints { get; init; }
 
+    /// <summary>What is done about weather that looks like ice.</summary>
+    public required WeatherSettings Weather { get; init; }
+
+    /// <summary>How an ice mask is made of the archive; decides no number of the archive itself.</summary>
+    public required IceMaskRules IceMask { get; init; }
+
     public required IReadOnlyList<string> Methods { get; init; }
 
     public required bool WriteGrids { get; init; }

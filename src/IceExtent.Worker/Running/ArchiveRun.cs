@@ -32,6 +32,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
     private readonly SortedSet<string> filesRead = new(StringComparer.Ordinal);
     private int polarGapFallbacks;
     private int tiePointFallbacks;
+    private int emptiedDays;
 
     /// <summary>Runs.</summary>
     /// <param name="observer">Watches.</param>
@@ -107,6 +108,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
 
         tiePointFallbacks += result.Tuned is { } tuned && tuned.State != TiePointState.Moving ? 1 : 0;
         polarGapFallbacks += result.Methods.Any(method => method.PolarGapFilled == 0) ? 1 : 0;
+        emptiedDays += result.Methods.Any(method => method.Emptied) ? 1 : 0;
         dayRecords.Add(new(
             result.Day.Date,
             settings.Grid.Hemisphere,
@@ -126,7 +128,9 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         method.Counts.NoSolution,
         method.Filled,
         method.PolarGapFilled ?? 0,
-        method.Counts.CoastCorrected);
+        method.Counts.CoastCorrected,
+        method.Counts.OutsideIceMask,
+        method.Counts.WarmWater);
 
     private void RemoveGrids(IEnumerable<DateOnly> days)
     {
@@ -147,6 +151,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             new(DailySeries.DigestKey, digest),
             new("filling_neighbours", NeighboursText),
             new("polar_gap_rule", PolarGapRules.TextOf(settings.Rules.PolarGap)),
+            new("weather_rules", settings.Weather.Text),
             new("caution", Cautions.Text),
         ];
         if (settings.Notice is { } notice)
@@ -171,6 +176,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             new("pack_fraction", settings.Rules.PackFraction.ToString("R", System.Globalization.CultureInfo.InvariantCulture)),
             new("filling_neighbours", NeighboursText),
             new("polar_gap_rule", PolarGapRules.TextOf(settings.Rules.PolarGap)),
+            new("weather_rules", settings.Weather.Text),
             new("caution", Cautions.Text),
         ];
         if (settings.Notice is { } notice)
@@ -209,7 +215,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             RunFile = new(settings.RunFile, Convert.ToHexStringLower(SHA256.HashData(File.ReadAllBytes(settings.RunFile)))),
             ConfigurationDigest = digest,
             CommandLine = options.CommandLine,
-            Counts = new(done, rejected + plan.DaysWithoutInput, rejected, polarGapFallbacks, tiePointFallbacks),
+            Counts = new(done, rejected + plan.DaysWithoutInput, rejected, polarGapFallbacks, tiePointFallbacks, emptiedDays),
             Days = days,
             Faults = [.. plan.Gaps.Where(gap => gap.Date is null).Select(gap => gap.Fault)],
             FilesRead = [.. filesRead],

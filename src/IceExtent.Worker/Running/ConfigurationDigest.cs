@@ -30,6 +30,7 @@ internal static class ConfigurationDigest
             $"{settings.Rules.IceFraction:R} {settings.Rules.PackFraction:R} {settings.LandLimitFraction:R} {settings.ErrorLengthMeters:R} {settings.SmearingFactor:R}");
         yield return FormattableString.Invariant($"{settings.LeastNeighbours} {settings.Rules.PolarGap} {settings.LeastRimShare:R}");
         yield return CoastText(settings.Coast);
+        yield return settings.Weather.Text; // The bytes of its files are counted above.
         if (settings.TiePoints.NeedsSamples(settings.Methods))
         {
             yield return settings.TiePoints.ToString(); // Records print their numbers in full and without culture.

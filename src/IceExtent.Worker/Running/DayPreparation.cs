@@ -19,7 +19,7 @@ internal sealed class DayPreparation
         Neighbours = settings.LeastNeighbours > 0 ? new(settings.Grid, settings.LeastNeighbours) : null;
         ICoastStep? coast = settings.Coast.Correction == CoastCorrection.Concentration ? ConcentrationStep() : null;
         RetrievalChoices choices = new(
-            settings.Grid, settings.Ocean, settings.Land, settings.Methods, settings.Coast, settings.SmearingFactor, settings.TiePoints);
+            settings.Grid, settings.Ocean, settings.Land, settings.Methods, settings.Coast, settings.SmearingFactor, settings.TiePoints, settings.Weather);
         sources = [.. settings.Sources.Select(source => new SourceRetrieval(choices, source.Sensor, [.. source.Description.Channels.Keys], MaskOf(source).Mask, coast))];
         gaps = [.. settings.Sources.Select(source => MaskOf(source).Gap)];
     }

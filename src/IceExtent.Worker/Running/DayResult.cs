@@ -21,4 +21,5 @@ internal sealed record DayResult(PlannedDay Day, Fault? Fault, int OutOfRange, I
 /// <param name="Filled">Cells filled from their neighbours.</param>
 /// <param name="PolarGapFilled">Cells filled in the polar gap, 0 where the day's rim was too empty; null where the run fills no gap.</param>
 /// <param name="Rows">One a region.</param>
-internal sealed record MethodResult(string Method, RetrievalCounts Counts, int Filled, int? PolarGapFilled, IReadOnlyList<DailyRow> Rows);
+/// <param name="Emptied">Whether screens, masks and coast correction left no cell that counts as ice, though there were such cells before them.</param>
+internal sealed record MethodResult(string Method, RetrievalCounts Counts, int Filled, int? PolarGapFilled, IReadOnlyList<DailyRow> Rows, bool Emptied = false);

@@ -40,13 +40,23 @@ internal sealed class DayWorker(DayPreparation preparation, SampleSeries? sample
 
     private MethodResult Retrieve(PlannedDay day, ObservedDay observed, DayRetrieval retrieval, TunedDay? tuned)
     {
-        RetrievalCounts counts = retrieval.Retrieve(observed.Planes, observed.Conditions, concentration);
+        MonthMask? month = preparation.Settings.Weather.MaskOf(day.Date);
+        RetrievalCounts counts = retrieval.Retrieve(observed.Planes, observed.Conditions, concentration, month);
         counts = observed.CoastCorrected is { } corrected ? counts with { CoastCorrected = corrected } : counts;
         (int filled, int? gapFilled) = Fill(day.Source.Index);
+        month?.ClearFilled(concentration);
         string method = retrieval.Method.Name;
         TiePointState state = tuned is not null && preparation.Settings.TiePoints.Moves(method) ? tuned.State : TiePointState.Fixed;
         grids?.Write(day, retrieval.Method, state, concentration);
-        return new(method, counts, filled, gapFilled, [.. preparation.Regions.Select(region => Row(day, region, state))]);
+        DailyRow[] rows = [.. preparation.Regions.Select(region => Row(day, region, state))];
+        return new(method, counts, filled, gapFilled, rows, IsEmptied(rows));
+    }
+
+    // Whether what follows the retrieval took every cell that would count as ice: the totals are 0 km², and not missing.
+    private bool IsEmptied(DailyRow[] rows)
+    {
+        float ice = (float)preparation.Settings.Rules.IceFraction;
+        return rows[0].AreaSquareKilometers == 0.0 && concentration.Unscreened.ContainsAnyInRange(ice, 1f);
     }
 
     // Each from observed cells alone, so their order does not matter.

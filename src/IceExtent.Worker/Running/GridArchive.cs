@@ -21,6 +21,8 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
         ((ushort)CellConditions.CoastCorrected, "coast_corrected"),
         ((ushort)CellConditions.FilledFromNeighbours, "filled_from_neighbours"),
         ((ushort)CellConditions.FilledPolarGap, "filled_polar_gap"),
+        ((ushort)CellConditions.OutsideIceMask, "outside_ice_mask"),
+        ((ushort)CellConditions.WarmWater, "warm_water"),
     ];
 
     private static readonly KeyValuePair<string, string>[] Nothing = [];
@@ -41,7 +43,7 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
             new PackedVariable(
                 "concentration_se", "standard error of the sea-ice concentration", "sea_ice_area_fraction standard_error", Nothing, "1", planes.StandardErrorMemory, Packing.Fraction),
             new PackedVariable(
-                "concentration_unscreened", "sea-ice concentration as it would be without weather screens, clipped to 0-1", null, Nothing, "1", planes.UnscreenedMemory, Packing.Fraction),
+                "concentration_unscreened", "sea-ice concentration as it would be without weather screens and masks, clipped to 0-1", null, Nothing, "1", planes.UnscreenedMemory, Packing.Fraction),
         ];
         if (method.SeparatesIceTypes)
         {

@@ -23,7 +23,7 @@ internal sealed class MethodComparison(RunSettings settings, DayPreparation prep
         IReadOnlyList<DayRetrieval> retrievals = preparation.Of(day.Source).RetrievalsWith(samples?.Tune(day));
         for (int method = 0; method < planes.Length; method++)
         {
-            retrievals[method].Retrieve(observed.Planes, observed.Conditions, planes[method]);
+            retrievals[method].Retrieve(observed.Planes, observed.Conditions, planes[method], settings.Weather.MaskOf(day.Date));
         }
 
         WriteMap(day);

@@ -43,12 +43,12 @@ internal sealed class SceneScore
     /// <param name="scene">The scene.</param>
     /// <param name="land">The land of its grid.</param>
     /// <param name="methods">Their names; the sensor has the surfaces of each.</param>
-    /// <param name="defaults">Limits, error length, coast correction.</param>
+    /// <param name="defaults">Limits, error length, coast correction, screens.</param>
     public SceneScore(Scene scene, LandShare land, IReadOnlyList<string> methods, SceneDefaults defaults)
     {
         (this.scene, rules) = (scene, defaults.Rules);
         bool[] ocean = land.OceanBelow(defaults.LandLimitFraction);
-        choices = new(scene.Grid, ocean, land, methods, defaults.Coast, defaults.SmearingFactor, defaults.TiePoints);
+        choices = new(scene.Grid, ocean, land, methods, defaults.Coast, defaults.SmearingFactor, defaults.TiePoints, defaults.Weather);
         CellMask mask = new(scene.Grid, ocean, scene.Sensor.PolarGapLatitudeDegrees);
         ICoastStep? step = defaults.Coast.Correction == CoastCorrection.Concentration
             ? new CoastSpillStep(scene.Grid, land, ocean, defaults.Coast.Spill)

@@ -12,6 +12,7 @@ namespace IceExtent.Worker.Running;
 /// <param name="Coast">What is done about land in footprints.</param>
 /// <param name="SmearingFactor">How much a change from cell to cell widens a standard error.</param>
 /// <param name="TiePoints">Whether and how tie points move.</param>
+/// <param name="Weather">Where the limits of the screens come from.</param>
 internal sealed record RetrievalChoices(
     Grid Grid,
     bool[] Ocean,
@@ -19,7 +20,8 @@ internal sealed record RetrievalChoices(
     IReadOnlyList<string> Methods,
     CoastSettings Coast,
     double SmearingFactor,
-    TiePointSettings TiePoints);
+    TiePointSettings TiePoints,
+    WeatherSettings Weather);
 
 /// <summary>Everything that the days of one sensor share and nobody changes: channels, coast correction, retrievals, sampling.</summary>
 internal sealed class SourceRetrieval
@@ -41,7 +43,7 @@ internal sealed class SourceRetrieval
         (this.choices, this.sensor, this.mask, this.step) = (choices, sensor, mask, step);
         Channels = Needed(available);
         Coast = choices.Coast.Correction == CoastCorrection.Brightness ? BrightnessStep() : null;
-        withOwnPoints = [.. choices.Methods.Select(name => Make(name, Own))];
+        withOwnPoints = [.. choices.Methods.Select(name => Make(name, Own, choices.Weather.ScreensFor(Own)))];
     }
 
     /// <summary>The channels in use, in order: no other one is read.</summary>
@@ -55,23 +57,31 @@ internal sealed class SourceRetrieval
 
     /// <summary>One retrieval a method, in the run's order.</summary>
     /// <param name="tuned">The surfaces of the day, or null for the sensor's own.</param>
-    public IReadOnlyList<DayRetrieval> RetrievalsWith(TunedDay? tuned) => tuned is null
-        ? withOwnPoints
-        : [.. choices.Methods.Select((name, index) => choices.TiePoints.Moves(name) ? Make(name, tuned.Tuning) : withOwnPoints[index])];
+    /// <remarks>Retuned limits follow the surfaces of their method.</remarks>
+    public IReadOnlyList<DayRetrieval> RetrievalsWith(TunedDay? tuned)
+    {
+        if (tuned is null)
+        {
+            return withOwnPoints;
+        }
+
+        WeatherScreens screens = choices.Weather.ScreensFor(tuned.Tuning);
+        return [.. choices.Methods.Select((name, index) => choices.TiePoints.Moves(name) ? Make(name, tuned.Tuning, screens) : withOwnPoints[index])];
+    }
 
     /// <summary>Makes a sampling of pure surfaces with memory of its own.</summary>
     public SurfaceSampling MakeSampling() =>
-        new(choices.Grid, choices.Ocean, Make(NasaTeam.MethodName, Own), Own, Channels, choices.TiePoints.Rules.Samples);
+        new(choices.Grid, choices.Ocean, Make(NasaTeam.MethodName, Own, Own.Screens), Own, Channels, choices.TiePoints.Rules.Samples);
 
     /// <summary>One day's surfaces.</summary>
     /// <param name="window">The samples of the days round it, in date order.</param>
     public TunedDay Tune(IReadOnlyList<DaySamples> window) => MovingTiePoints.Tune(Own, window, choices.TiePoints.Rules);
 
-    private DayRetrieval Make(string name, HemisphereTuning tuning)
+    private DayRetrieval Make(string name, HemisphereTuning tuning, WeatherScreens screens)
     {
         IConcentrationMethod method = ConcentrationMethods.Create(name, tuning, choices.Grid.Hemisphere);
         RetrievalScatter scatter = tuning.Samples is { } samples ? RetrievalScatter.Of(method, samples) : sensor.Scatter;
-        return new(method, tuning.Screens, scatter, mask, step, choices.SmearingFactor, sensor.NoiseKelvins);
+        return new(method, screens, scatter, mask, step, choices.SmearingFactor, sensor.NoiseKelvins);
     }
 
     private Channel[] Needed(IReadOnlyCollection<Channel> available)

@@ -19,7 +19,7 @@ public sealed class RunRecordFileTests : IDisposable
         Counts = new(DaysDone: 1, Gaps: 1, Rejected: 1, PolarGapFallbacks: 0),
         Days =
         [
-            new(new(1988, 2, 28), Hemisphere.North, DayOutcome.Done, [new("any", 1, 2, 3, 4, 5, 6, 7, 8, 9)], []),
+            new(new(1988, 2, 28), Hemisphere.North, DayOutcome.Done, [new("any", 1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11)], []),
             new(new(1988, 2, 29), Hemisphere.South, DayOutcome.Rejected, [], [new("IE2104", "a.nc", "nothing", "something", "Do it.")]),
         ],
         Faults = [],
@@ -36,7 +36,7 @@ public sealed class RunRecordFileTests : IDisposable
     public void Read_RecordWithoutFillingCounts_HasNoneFilled()
     {
         RunRecordFile.Write(folder.PathOf("new.json"), Record);
-        string old = string.Join('\n', File.ReadAllLines(folder.PathOf("new.json")).Where(line => !line.Contains("fill", StringComparison.Ordinal) && !line.Contains("fallbacks", StringComparison.Ordinal)))
+        string old = string.Join('\n', File.ReadAllLines(folder.PathOf("new.json")).Where(line => !line.Contains("fill", StringComparison.Ordinal) && !line.Contains("fallbacks", StringComparison.Ordinal) && !line.Contains("emptied", StringComparison.Ordinal)))
             .Replace("\"rejected\": 1,", "\"rejected\": 1", StringComparison.Ordinal);
         File.WriteAllText(folder.PathOf("old.json"), old);
 
@@ -88,7 +88,8 @@ public sealed class RunRecordFileTests : IDisposable
                 "gaps": 1,
                 "rejected": 1,
                 "polar_gap_fallbacks": 0,
-                "tie_point_fallbacks": 0
+                "tie_point_fallbacks": 0,
+                "emptied_days": 0
               },
               "days": [
                 {
@@ -106,7 +107,9 @@ public sealed class RunRecordFileTests : IDisposable
                       "no_solution": 6,
                       "filled": 7,
                       "polar_gap_filled": 8,
-                      "coast_corrected": 9
+                      "coast_corrected": 9,
+                      "outside_ice_mask": 10,
+                      "warm_water": 11
                     }
                   ],
                   "faults": [],

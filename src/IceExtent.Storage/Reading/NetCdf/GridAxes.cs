@@ -22,8 +22,11 @@ internal sealed class GridAxes
     public FileAxis? Time => Shape.Time is { } time ? axes[time] : null;
 
     /// <summary>Finds the axes by what they say of themselves and, where they are silent, by their lengths.</summary>
+    /// <param name="variable">The variable.</param>
+    /// <param name="grid">The grid.</param>
+    /// <param name="anySteps">Whether the axis beside rows and columns may count anything, such as months of the year.</param>
     /// <exception cref="Faults.FaultException">IE2107: the variable does not have the shape of the grid.</exception>
-    public static GridAxes Find(FileVariable variable, Grid grid)
+    public static GridAxes Find(FileVariable variable, Grid grid, bool anySteps = false)
     {
         FileAxis[] axes = FileAxis.Of(variable);
         if (PlaneOf(axes, grid) is not var (row, column))
@@ -39,7 +42,7 @@ internal sealed class GridAxes
                 continue;
             }
 
-            time = time is null && axes[axis].Extent <= int.MaxValue && IsTime(variable, axes[axis])
+            time = time is null && axes[axis].Extent <= int.MaxValue && (anySteps || IsTime(variable, axes[axis]))
                 ? axis
                 : throw NetCdfFaults.Shape(variable, Describe(axes), grid);
         }
