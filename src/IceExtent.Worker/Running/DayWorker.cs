@@ -41,6 +41,7 @@ internal sealed class DayWorker(DayPreparation preparation, SampleSeries? sample
     private MethodResult Retrieve(PlannedDay day, ObservedDay observed, DayRetrieval retrieval, TunedDay? tuned)
     {
         RetrievalCounts counts = retrieval.Retrieve(observed.Planes, observed.Conditions, concentration);
+        preparation.Of(day.Source).Coast?.WidenErrors(concentration);
         counts = observed.CoastCorrected is { } corrected ? counts with { CoastCorrected = corrected } : counts;
         (int filled, int? gapFilled) = Fill(day.Source.Index);
         string method = retrieval.Method.Name;

@@ -108,6 +108,7 @@ internal sealed class SceneScore
         for (int method = 0; method < methods.Length; method++)
         {
             retrievals[method].Retrieve(bench.Observed, bench.Conditions, bench.Concentration);
+            source.Coast?.WidenErrors(bench.Concentration);
             methods[method] = (
                 DayScore.Of(scene.Grid, region, bench.Concentration.Total, bench.Concentration.StandardError, bench.Truth.Concentration, rules, bench.Melting),
                 bench.Uncertainty.StandardErrorsSquareMeters(region, bench.Concentration.Total, bench.Concentration.StandardError, rules.IceFraction).Extent);
