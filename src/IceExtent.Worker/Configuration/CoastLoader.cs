@@ -12,7 +12,7 @@ internal static class CoastLoader
     private const int WidestBoxCells = 101;
     private const double MetersPerKilometer = 1_000.0;
 
-    private static readonly string[] Corrections = ["off", "brightness", "concentration"]; // In the order of the enumeration.
+    private static readonly string[] Corrections = ["off", "brightness", "concentration", "both"]; // In the order of the enumeration.
 
     /// <summary>Checks the table and reads the file it names.</summary>
     /// <returns>The settings, or null after adding faults.</returns>
@@ -24,9 +24,9 @@ internal static class CoastLoader
         CoastBrightnessRules? brightness = Brightness(layered);
         CoastMinimumRules? minimum = Minimum(layered);
         CoastSpillRules? spill = Spill(layered);
-        if (file is not null && name is not null && name != "concentration")
+        if (file is not null && name is "off" or "brightness")
         {
-            layered.Refuse(Table, "minimum_file", $"a file with correction = \"{name}\"", "a file with correction = \"concentration\"");
+            layered.Refuse(Table, "minimum_file", $"a file with correction = \"{name}\"", "a file with correction = \"concentration\" or \"both\"");
         }
 
         if (faults.Count > before || grid is null)

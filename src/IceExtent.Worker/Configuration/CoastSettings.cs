@@ -13,6 +13,9 @@ internal enum CoastCorrection
 
     /// <summary>In concentrations, after screening and clipping.</summary>
     Concentration,
+
+    /// <summary>First the one, then the other.</summary>
+    Both,
 }
 
 /// <summary>What a run does about land in the footprints of ocean cells.</summary>
@@ -28,4 +31,11 @@ internal sealed record CoastSettings(
     CoastMinimumRules Minimum,
     CoastSpillRules Spill,
     string? MinimumPath,
-    float[]? MinimumFraction);
+    float[]? MinimumFraction)
+{
+    /// <summary>Whether temperatures are corrected.</summary>
+    public bool InTemperatures => Correction is CoastCorrection.Brightness or CoastCorrection.Both;
+
+    /// <summary>Whether concentrations are corrected.</summary>
+    public bool InConcentrations => Correction is CoastCorrection.Concentration or CoastCorrection.Both;
+}

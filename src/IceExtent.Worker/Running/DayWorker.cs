@@ -41,13 +41,29 @@ internal sealed class DayWorker(DayPreparation preparation, SampleSeries? sample
     private MethodResult Retrieve(PlannedDay day, ObservedDay observed, DayRetrieval retrieval, TunedDay? tuned)
     {
         RetrievalCounts counts = retrieval.Retrieve(observed.Planes, observed.Conditions, concentration);
-        preparation.Of(day.Source).Coast?.WidenErrors(concentration);
-        counts = observed.CoastCorrected is { } corrected ? counts with { CoastCorrected = corrected } : counts;
+        if (preparation.Of(day.Source).Coast is { } coast)
+        {
+            coast.WidenErrors(concentration);
+            counts = counts with { CoastCorrected = CoastCorrected() };
+        }
+
         (int filled, int? gapFilled) = Fill(day.Source.Index);
         string method = retrieval.Method.Name;
         TiePointState state = tuned is not null && preparation.Settings.TiePoints.Moves(method) ? tuned.State : TiePointState.Fixed;
         grids?.Write(day, retrieval.Method, state, concentration);
         return new(method, counts, filled, gapFilled, [.. preparation.Regions.Select(region => Row(day, region, state))]);
+    }
+
+    // A cell that was corrected both in its temperatures and in its concentration counts once.
+    private int CoastCorrected()
+    {
+        int count = 0;
+        foreach (CellConditions condition in concentration.Conditions)
+        {
+            count += (condition & CellConditions.CoastCorrected) != 0 ? 1 : 0;
+        }
+
+        return count;
     }
 
     // Each from observed cells alone, so their order does not matter.

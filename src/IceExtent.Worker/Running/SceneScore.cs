@@ -50,7 +50,7 @@ internal sealed class SceneScore
         bool[] ocean = land.OceanBelow(defaults.LandLimitFraction);
         choices = new(scene.Grid, ocean, land, methods, defaults.Coast, defaults.SmearingFactor, defaults.TiePoints);
         CellMask mask = new(scene.Grid, ocean, scene.Sensor.PolarGapLatitudeDegrees);
-        ICoastStep? step = defaults.Coast.Correction == CoastCorrection.Concentration
+        ICoastStep? step = defaults.Coast.InConcentrations
             ? new CoastSpillStep(scene.Grid, land, ocean, defaults.Coast.Spill)
             : null;
         source = new(choices, scene.Sensor, [.. scene.Channels], mask, step);
