@@ -27,6 +27,7 @@ internal static class CommandLine
             CheckCommand.Make(console),
             CompareCommand.Make(console),
             SceneCommand.Make(console),
+            CoastMinimumCommand.Make(console),
         };
         ParseResult parsed = root.Parse(args);
         string[] known = [.. parsed.CommandResult.Command.Options.Select(option => option.Name)];

@@ -24,6 +24,7 @@ internal static class CoastLoader
         CoastBrightnessRules? brightness = Brightness(layered);
         CoastMinimumRules? minimum = Minimum(layered);
         CoastSpillRules? spill = Spill(layered);
+        int? leastDays = layered.WholeNumber("coast", "least_days_per_month", 1, 28);
         if (file is not null && name is "off" or "brightness")
         {
             layered.Refuse(Table, "minimum_file", $"a file with correction = \"{name}\"", "a file with correction = \"concentration\" or \"both\"");
@@ -38,7 +39,7 @@ internal static class CoastLoader
         float[]? minima = path is null ? null : Minima(path, grid, faults);
         return faults.Count > before
             ? null
-            : new((CoastCorrection)Array.IndexOf(Corrections, name), brightness!, minimum!, spill!, path, minima);
+            : new((CoastCorrection)Array.IndexOf(Corrections, name), brightness!, minimum!, spill!, path, minima, leastDays!.Value);
     }
 
     private static CoastBrightnessRules? Brightness(LayeredScope layered)

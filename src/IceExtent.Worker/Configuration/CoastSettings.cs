@@ -25,13 +25,15 @@ internal enum CoastCorrection
 /// <param name="Spill">The rules of the second where none are.</param>
 /// <param name="MinimumPath">The file of minima, absolute, or null.</param>
 /// <param name="MinimumFraction">The minima on the run's grid, or null.</param>
+/// <param name="LeastDaysPerMonth">Where minima are made: a monthly mean of fewer days is none.</param>
 internal sealed record CoastSettings(
     CoastCorrection Correction,
     CoastBrightnessRules Brightness,
     CoastMinimumRules Minimum,
     CoastSpillRules Spill,
     string? MinimumPath,
-    float[]? MinimumFraction)
+    float[]? MinimumFraction,
+    int LeastDaysPerMonth)
 {
     /// <summary>Whether temperatures are corrected.</summary>
     public bool InTemperatures => Correction is CoastCorrection.Brightness or CoastCorrection.Both;
