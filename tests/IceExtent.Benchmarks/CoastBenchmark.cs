@@ -52,7 +52,7 @@ public class CoastBenchmark
     /// <summary>Once a sensor and grid.</summary>
     [Benchmark]
     public CoastBrightness Prepare() => new(
-        grid, land, ocean, Channels.ToDictionary(channel => channel, channel => channel is Channel.V37 or Channel.H37 ? 32_190.0 : 54_470.0), RangeScreen.Physical, new(0.01, 0.9, 0.95, 200_000.0, 9));
+        grid, land, ocean, Channels.ToDictionary(channel => channel, channel => channel is Channel.V37 or Channel.H37 ? 32_190.0 : 54_470.0), RangeScreen.Physical, new(0.01, 0.9, 0.2, new(100_000.0, 0.95, 1e6, 9, 5.0, 1e-5, 2.0, 4.0, 30.0)));
 
     [Benchmark]
     public int Brightness() => brightness.Correct(observed, conditions);

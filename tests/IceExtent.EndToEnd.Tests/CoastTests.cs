@@ -86,9 +86,29 @@ public sealed class CoastTests : IDisposable
         Assert.Equal(0.0, Row().ExtentSquareKilometers!.Value);
     }
 
+    /// <summary>
+    /// Origin: worked. The second step finds no square with 101 cells of open water, so it takes nothing: the figures are those
+    /// of temperatures alone. What the first step marked must not pass for the second's choice.
+    /// </summary>
+    [Fact]
+    public async Task Run_Both_TakesOneStepAfterTheOther()
+    {
+        run.Write("tiny.toml", TinyRun.Sensor("1990-01-01", "1999-12-31") + Footprints);
+        CellCounts first = await RunAsync("[coast]\ncorrection = \"brightness\"\npure_land_fraction = 0.5");
+        double area = Row().AreaSquareKilometers!.Value;
+        Directory.Delete(run.PathOf("out"), recursive: true);
+        WriteMinima(TinyRun.Grid, 0.6f);
+
+        CellCounts both = await RunAsync("[coast]\ncorrection = \"both\"\npure_land_fraction = 0.5\nminimum_file = \"minima.nc\"\nopen_water_cells = 101");
+
+        Assert.Equal(first, both);
+        Assert.Equal(area, Row().AreaSquareKilometers!.Value);
+    }
+
     [Theory]
     [InlineData("brightness")]
     [InlineData("concentration")]
+    [InlineData("both")]
     public async Task Run_AnyNumberOfWorkers_WritesTheSameBytes(string correction)
     {
         run.Write("tiny.toml", TinyRun.Sensor("1990-01-01", "1999-12-31") + Footprints);

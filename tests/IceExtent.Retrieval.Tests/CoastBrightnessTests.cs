@@ -8,7 +8,8 @@ public sealed class CoastBrightnessTests
     private const float Land = 250f;
     private const float Sea = 160f;
 
-    private static readonly CoastBrightnessRules Rules = new(0.01, 0.90, 0.95, 200_000.0, 9); // As config/defaults.toml.
+    private static readonly CoastBrightnessRules Rules = new(
+        0.01, 0.90, 0.20, new(100_000.0, 0.95, 1_000_000.0, 9, 5.0, 1e-5, 2.0, 4.0, 30.0)); // As config/defaults.toml.
     private static readonly KelvinRange Range = new(50.0, 350.0);
     private static readonly Dictionary<Channel, double> Footprints = new() { [Channel.V19] = 54_470.0, [Channel.V37] = 32_190.0 };
 
@@ -85,12 +86,70 @@ public sealed class CoastBrightnessTests
         });
 
     [Fact]
-    public void Correct_NoLandTemperature_LeavesTheCellAlone()
+    public void Correct_NothingTellsOfLand_LeavesTheCellAlone()
     {
-        BrightnessPlanes observed = Observed(StraightCoast, (_, cell) => cell % 20 < 10 ? float.NaN : Sea);
+        BrightnessPlanes observed = Observed(StraightCoast, (_, cell) => cell == 10 ? Sea : float.NaN);
 
         Assert.Equal(0, Make(StraightCoast).Correct(observed, new CellConditions[observed.CellCount]));
         Assert.Equal(Sea, observed.Kelvins(Channel.V19)[10]);
+    }
+
+    /// <summary>
+    /// Origin: worked. Even land and sea lie on one straight line of temperature over land share, whose end at 1 is land: no cell
+    /// of pure land is needed. The shares are the product's own, so this tells of the fit and not of the pattern.
+    /// </summary>
+    [Fact]
+    public void Correct_IslandWithoutPureLand_ReturnsTheSea()
+    {
+        CoastGrid island = new([.. Enumerable.Range(0, 16).Select(row => row is 7 or 8 ? ".......##......." : new string('.', 16))]);
+        BrightnessPlanes observed = Observed(island, (channel, cell) => Sea + ((Land - Sea) * Share(island, channel)[cell]));
+
+        int corrected = Make(island).Correct(observed, new CellConditions[observed.CellCount]);
+
+        Assert.InRange(corrected, 12, 32);
+        Assert.Equal(Sea, observed.Kelvins(Channel.V19)[(6 * 16) + 7], 0.05f);
+        Assert.Equal(Sea, observed.Kelvins(Channel.V37)[(6 * 16) + 7], 0.05f);
+    }
+
+    /// <summary>
+    /// Origin: worked. A belt of ice at 240 K lies along the coast, two cells wide, with open sea at 160 K beyond it, all seen
+    /// through the pattern. What the sea's own share of the pattern holds is (T − a·250)/(1 − a). Land that took ice for land
+    /// would make it colder.
+    /// </summary>
+    [Fact]
+    public void Correct_BeltOfIceAlongTheCoast_IsNotTakenForLand()
+    {
+        float[] surface = [.. Enumerable.Range(0, 15 * 20).Select(cell => (cell % 20) switch { < 10 => Land, < 12 => 240f, _ => Sea })];
+        Dictionary<Channel, float[]> seen = Footprints.ToDictionary(
+            footprint => footprint.Key, footprint => FootprintShare.Of(surface, 20, FootprintShare.Weights(footprint.Value, CoastGrid.CellMeters)));
+        BrightnessPlanes observed = Observed(StraightCoast, (channel, cell) => seen[channel][cell]);
+
+        Make(StraightCoast).Correct(observed, new CellConditions[observed.CellCount]);
+
+        int shore = (7 * 20) + 10;
+        foreach (Channel channel in Footprints.Keys)
+        {
+            float share = Share(StraightCoast, channel)[shore];
+            Assert.Equal((seen[channel][shore] - (share * Land)) / (1f - share), observed.Kelvins(channel)[shore], 2f);
+        }
+    }
+
+    /// <summary>
+    /// Origin: worked. With a the share of land in the widest footprint, 0.2·a/(1 − a) of concentration may be land; 0.05 was
+    /// there before.
+    /// </summary>
+    [Fact]
+    public void WidenErrors_CorrectedCell_HoldsWhatLandMayLeave()
+    {
+        ConcentrationPlanes planes = new(StraightCoast.Grid.CellCount);
+        planes.StandardError.Fill(0.05f);
+        planes.Conditions[10] = CellConditions.CoastCorrected;
+
+        Make(StraightCoast).WidenErrors(planes);
+
+        double share = Share(StraightCoast, Channel.V19)[10];
+        Assert.Equal(Math.Sqrt(0.0025 + Math.Pow(0.2 * share / (1.0 - share), 2.0)), planes.StandardError[10], 1e-6);
+        Assert.Equal(0.05f, planes.StandardError[11]); // Coastal too, but not corrected on this day.
     }
 
     /// <summary>Origin: worked. With a 0.3 and land at 250 K, 80 K would become 7 K, which no surface has.</summary>
@@ -116,12 +175,11 @@ public sealed class CoastBrightnessTests
         Assert.Contains((3 * 17) + 11, correction.Cells.ToArray());
     }
 
-    [Fact]
-    public void Cells_IslandWithoutPureLand_HasNone() =>
-        Assert.Empty(Make(new(".......", ".......", "...#...", ".......", ".......")).Cells.ToArray());
-
     private static CoastBrightness Make(CoastGrid coast, CoastBrightnessRules? rules = null) =>
         new(coast.Grid, coast.Land, coast.Ocean, Footprints, Range, rules ?? Rules);
+
+    private static float[] Share(CoastGrid coast, Channel channel) =>
+        FootprintShare.Of(coast.Land.Fraction, coast.Grid.Columns, FootprintShare.Weights(Footprints[channel], CoastGrid.CellMeters));
 
     private static BrightnessPlanes Observed(CoastGrid coast, Func<Channel, int, float> kelvins)
     {

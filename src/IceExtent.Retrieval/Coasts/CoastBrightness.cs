@@ -1,3 +1,4 @@
+using System.Buffers;
 using IceExtent.Grids;
 
 namespace IceExtent.Retrieval;
@@ -5,18 +6,17 @@ namespace IceExtent.Retrieval;
 /// <summary>What rules the correction of brightness temperatures near land.</summary>
 /// <param name="LeastLandFraction">Cells are left alone where no channel's footprint holds this share of land.</param>
 /// <param name="MostLandFraction">Cells are left alone where a channel's footprint holds more land than this share.</param>
-/// <param name="PureLandFraction">Land cells whose footprints hold at least this share of land tell the temperature of land.</param>
-/// <param name="LandSearchMeters">How far they may be away.</param>
-/// <param name="LandCells">How many of them are averaged, the nearest first; all that are as near as the last one count too.</param>
-public sealed record CoastBrightnessRules(
-    double LeastLandFraction, double MostLandFraction, double PureLandFraction, double LandSearchMeters, int LandCells);
+/// <param name="ErrorFraction">What land leaves in a cell's concentration, per unit of land over sea in its footprint: a standard deviation.</param>
+/// <param name="Land">How the temperature of land is found.</param>
+public sealed record CoastBrightnessRules(double LeastLandFraction, double MostLandFraction, double ErrorFraction, LandTemperatureRules Land);
 
 /// <summary>Takes the land out of brightness temperatures of coastal ocean cells.</summary>
 /// <remarks>
 /// T_sea = (T_obs − a·T_land)/(1 − a), where a is the share of land in the channel's footprint. Source: [Maass2010]; the
-/// formula is from memory (high). Departures: the land share is that of the grid's own cells and not of a finer mask, and
-/// a cell is corrected in all its channels or in none, so that ratios of channels stay those of one surface. Errors of the
-/// temperatures grow by 1/(1 − a). Immutable and safe to use from several threads; made once a sensor and grid.
+/// formula is from memory (high). Departures: the land share is that of the grid's own cells and not of a finer mask, T_land is
+/// estimated by <see cref="LandTemperature"/>, and a cell is corrected in all its channels or in none, so that ratios of
+/// channels stay those of one surface. What is left of land grows as a/(1 − a) and enters the standard error.
+/// Immutable and safe to use from several threads; made once a sensor and grid.
 /// </remarks>
 public sealed class CoastBrightness
 {
@@ -24,10 +24,10 @@ public sealed class CoastBrightness
     private readonly KelvinRange range;
     private readonly int[] coastalCells;
     private readonly float[][] landShares; // One array a channel, one share a coastal cell.
-    private readonly int[] landEnds; // Where each coastal cell's part of landCells ends.
-    private readonly int[] landCells;
+    private readonly float[] errorVariances; // Of concentration, one a coastal cell.
+    private readonly LandTemperature land;
 
-    /// <summary>Finds the coastal cells and the land beside each.</summary>
+    /// <summary>Finds the coastal cells and the cells that tell of the land beside them.</summary>
     /// <param name="grid">The grid.</param>
     /// <param name="land">How much of each cell is land.</param>
     /// <param name="ocean">Whether each cell is ocean that can have a concentration. Shape: one value a cell.</param>
@@ -59,28 +59,23 @@ public sealed class CoastBrightness
             width => width, width => FootprintShare.Of(land.Fraction, grid.Columns, FootprintShare.Weights(width, grid.Frame.CellMeters)));
         float[][] shares = Array.ConvertAll(channels, channel => sharesByWidth[footprintsMeters[channel]]);
         (float[] least, float[] most) = Extremes([.. sharesByWidth.Values]);
-        bool[] pureLand = new bool[ocean.Length];
-        for (int cell = 0; cell < pureLand.Length; cell++)
-        {
-            pureLand[cell] = !ocean[cell] && least[cell] >= rules.PureLandFraction;
-        }
-
-        NearbyCells nearby = new(grid, rules.LandSearchMeters);
+        bool[] tells = new bool[ocean.Length];
+        bool[] pure = new bool[ocean.Length];
         List<int> coast = [];
-        List<int> ends = [];
-        List<int> lands = [];
         for (int cell = 0; cell < ocean.Length; cell++)
         {
-            if (ocean[cell] && most[cell] >= rules.LeastLandFraction && most[cell] <= rules.MostLandFraction
-                && nearby.Nearest(cell, pureLand, rules.LandCells, lands) > 0)
+            pure[cell] = !ocean[cell] && least[cell] >= rules.Land.PureLandFraction;
+            tells[cell] = ocean[cell] ? most[cell] >= rules.LeastLandFraction : land.Fraction[cell] > 0f; // The polar gap tells nothing.
+            if (ocean[cell] && most[cell] >= rules.LeastLandFraction && most[cell] <= rules.MostLandFraction)
             {
                 coast.Add(cell);
-                ends.Add(lands.Count);
             }
         }
 
-        (coastalCells, landEnds, landCells) = ([.. coast], [.. ends], [.. lands]);
+        coastalCells = [.. coast];
         landShares = Array.ConvertAll(shares, share => Array.ConvertAll(coastalCells, cell => share[cell]));
+        errorVariances = Array.ConvertAll(coastalCells, cell => (float)Math.Pow(rules.ErrorFraction * most[cell] / (1f - most[cell]), 2.0));
+        this.land = new(grid, coastalCells, tells, pure, shares, rules.Land);
     }
 
     /// <summary>The cells that may be corrected, rising.</summary>
@@ -101,15 +96,18 @@ public sealed class CoastBrightness
     public int Correct(BrightnessPlanes observed, Span<CellConditions> conditions)
     {
         ArgumentNullException.ThrowIfNull(observed);
+        float[] rented = ArrayPool<float>.Shared.Rent(channels.Length * land.Count);
+        for (int channel = 0; channel < channels.Length; channel++)
+        {
+            land.Estimate(channel, observed.Kelvins(channels[channel]), rented.AsSpan(channel * land.Count, land.Count));
+        }
+
         Span<float> sea = stackalloc float[channels.Length];
         int corrected = 0;
-        int landStart = 0;
         for (int coast = 0; coast < coastalCells.Length; coast++)
         {
-            ReadOnlySpan<int> lands = landCells.AsSpan(landStart..landEnds[coast]);
-            landStart = landEnds[coast];
             int cell = coastalCells[coast];
-            if (Solve(observed, coast, lands, sea))
+            if (Solve(observed, coast, rented, sea))
             {
                 for (int channel = 0; channel < channels.Length; channel++)
                 {
@@ -121,28 +119,44 @@ public sealed class CoastBrightness
             }
         }
 
+        ArrayPool<float>.Shared.Return(rented);
         return corrected;
     }
 
-    // False where no channel is there, or one that is there cannot be corrected. Only pure land is read beside the cell
-    // itself, and pure land is never changed, so the order of the cells does not matter.
-    private bool Solve(BrightnessPlanes observed, int coast, ReadOnlySpan<int> lands, Span<float> sea)
+    /// <summary>Widens the standard errors of corrected cells by what land may have left in them.</summary>
+    /// <param name="planes">A day retrieved from temperatures that <see cref="Correct"/> changed; NaN stays NaN.</param>
+    public void WidenErrors(ConcentrationPlanes planes)
+    {
+        ArgumentNullException.ThrowIfNull(planes);
+        Span<float> errors = planes.StandardError;
+        for (int coast = 0; coast < coastalCells.Length; coast++)
+        {
+            int cell = coastalCells[coast];
+            if ((planes.Conditions[cell] & CellConditions.CoastCorrected) != 0)
+            {
+                errors[cell] = MathF.Sqrt((errors[cell] * errors[cell]) + errorVariances[coast]);
+            }
+        }
+    }
+
+    // False where no channel is there, or one that is there cannot be corrected.
+    private bool Solve(BrightnessPlanes observed, int coast, ReadOnlySpan<float> landKelvins, Span<float> sea)
     {
         bool any = false;
         for (int channel = 0; channel < channels.Length; channel++)
         {
-            ReadOnlySpan<float> kelvins = observed.Kelvins(channels[channel]);
-            float value = kelvins[coastalCells[coast]];
+            float value = observed.Kelvins(channels[channel])[coastalCells[coast]];
             sea[channel] = value;
             if (float.IsNaN(value))
             {
                 continue;
             }
 
-            float corrected = SeaKelvins(value, MeanOf(kelvins, lands), landShares[channel][coast]);
-            if (!(corrected >= range.LowestKelvins && corrected <= range.HighestKelvins))
+            float landHere = landKelvins[(channel * land.Count) + land.TilesOfCoast[coast]];
+            float corrected = SeaKelvins(value, landHere, landShares[channel][coast]);
+            if (!(landHere >= range.LowestKelvins && landHere <= range.HighestKelvins && corrected >= range.LowestKelvins && corrected <= range.HighestKelvins))
             {
-                return false; // Also where no land has a temperature: then it is NaN.
+                return false; // Also where land is not known: then it is NaN.
             }
 
             sea[channel] = corrected;
@@ -150,23 +164,6 @@ public sealed class CoastBrightness
         }
 
         return any;
-    }
-
-    private static float MeanOf(ReadOnlySpan<float> kelvins, ReadOnlySpan<int> cells)
-    {
-        double sum = 0.0;
-        int count = 0;
-        foreach (int cell in cells)
-        {
-            float value = kelvins[cell];
-            if (!float.IsNaN(value))
-            {
-                sum += value;
-                count++;
-            }
-        }
-
-        return (float)(sum / count);
     }
 
     private static (float[] Least, float[] Most) Extremes(float[][] planes)

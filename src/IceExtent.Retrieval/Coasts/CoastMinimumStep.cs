@@ -1,3 +1,4 @@
+using System.Buffers;
 using IceExtent.Grids;
 
 namespace IceExtent.Retrieval;
@@ -33,25 +34,25 @@ public sealed class CoastMinimumStep : ICoastStep
     public int Correct(ConcentrationPlanes planes)
     {
         ArgumentNullException.ThrowIfNull(planes);
+        int[] chosen = ArrayPool<int>.Shared.Rent(cells.Length);
         int corrected = 0;
-        foreach ((int cell, CellBox box, _) in cells)
+        for (int index = 0; index < cells.Length; index++)
         {
-            // Marked first and lowered later: what is open water must not depend on the order of the cells.
-            if (planes.Total[cell] > 0f && HasOpenWater(planes.Total, box))
+            // Chosen first and lowered later: what is open water must not depend on the order of the cells.
+            if (planes.Total[cells[index].Cell] > 0f && HasOpenWater(planes.Total, cells[index].Box))
             {
-                planes.Conditions[cell] |= CellConditions.CoastCorrected;
-                corrected++;
+                chosen[corrected++] = index;
             }
         }
 
-        foreach ((int cell, _, float minimum) in cells)
+        foreach (int index in chosen.AsSpan(0, corrected))
         {
-            if ((planes.Conditions[cell] & CellConditions.CoastCorrected) != 0)
-            {
-                CoastalIce.Lower(planes, cell, Math.Max(planes.Total[cell] - minimum, 0f));
-            }
+            (int cell, _, float minimum) = cells[index];
+            CoastalIce.Lower(planes, cell, Math.Max(planes.Total[cell] - minimum, 0f));
+            planes.Conditions[cell] |= CellConditions.CoastCorrected;
         }
 
+        ArrayPool<int>.Shared.Return(chosen);
         return corrected;
     }
 

@@ -28,6 +28,7 @@ internal static class CommandLine
             CompareCommand.Make(console),
             IceMaskCommand.Make(console),
             SceneCommand.Make(console),
+            CoastMinimumCommand.Make(console),
         };
         ParseResult parsed = root.Parse(args);
         string[] known = [.. parsed.CommandResult.Command.Options.Select(option => option.Name)];

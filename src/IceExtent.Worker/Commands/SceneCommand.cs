@@ -30,7 +30,7 @@ internal static class SceneCommand
         Option<string?> output = new("--out") { Description = "The folder to write to; needed unless --score is given.", HelpName = "DIR" };
         Option<bool> score = new("--score") { Description = "Write nothing: run methods on the scene and print how they stand to its truth." };
         Option<string[]> methods = new("--methods") { Description = "With --score: the methods, separated by spaces.", HelpName = "METHOD", AllowMultipleArgumentsPerToken = true, DefaultValueFactory = _ => [.. ConcentrationMethods.Names] };
-        Option<string> coast = new("--coast") { Description = "With --score: off, brightness or concentration, as coast.correction of a run file.", HelpName = "CORRECTION", DefaultValueFactory = _ => "off" };
+        Option<string> coast = new("--coast") { Description = "With --score: off, brightness, concentration or both, as coast.correction of a run file.", HelpName = "CORRECTION", DefaultValueFactory = _ => "off" };
         Option<string> limits = new("--limits") { Description = "With --score: fixed or retuned, as weather.limits of a run file.", HelpName = "LIMITS", DefaultValueFactory = _ => "fixed" };
         Option<int> every = CommonOptions.Count("--every", "With --score: take one day of so many.", _ => 5, 366);
         Option<bool> json = CommonOptions.Json();

@@ -10,8 +10,9 @@ internal static class CoastLoader
 {
     private const string Table = "coast";
     private const int WidestBoxCells = 101;
+    private const double MetersPerKilometer = 1_000.0;
 
-    private static readonly string[] Corrections = ["off", "brightness", "concentration"]; // In the order of the enumeration.
+    private static readonly string[] Corrections = ["off", "brightness", "concentration", "both"]; // In the order of the enumeration.
 
     /// <summary>Checks the table and reads the file it names.</summary>
     /// <returns>The settings, or null after adding faults.</returns>
@@ -23,9 +24,10 @@ internal static class CoastLoader
         CoastBrightnessRules? brightness = Brightness(layered);
         CoastMinimumRules? minimum = Minimum(layered);
         CoastSpillRules? spill = Spill(layered);
-        if (file is not null && name is not null && name != "concentration")
+        int? leastDays = layered.WholeNumber("coast", "least_days_per_month", 1, 28);
+        if (file is not null && name is "off" or "brightness")
         {
-            layered.Refuse(Table, "minimum_file", $"a file with correction = \"{name}\"", "a file with correction = \"concentration\"");
+            layered.Refuse(Table, "minimum_file", $"a file with correction = \"{name}\"", "a file with correction = \"concentration\" or \"both\"");
         }
 
         if (faults.Count > before || grid is null)
@@ -37,17 +39,16 @@ internal static class CoastLoader
         float[]? minima = path is null ? null : Minima(path, grid, faults);
         return faults.Count > before
             ? null
-            : new((CoastCorrection)Array.IndexOf(Corrections, name), brightness!, minimum!, spill!, path, minima);
+            : new((CoastCorrection)Array.IndexOf(Corrections, name), brightness!, minimum!, spill!, path, minima, leastDays!.Value);
     }
 
     private static CoastBrightnessRules? Brightness(LayeredScope layered)
     {
         double? least = layered.Number("coast", "least_land_fraction", 0.001, 0.5, string.Empty);
         double? most = layered.Number("coast", "most_land_fraction", 0.01, 0.99, string.Empty);
-        double? pure = layered.Number("coast", "pure_land_fraction", 0.5, 1.0, string.Empty);
-        double? search = layered.Number("coast", "land_search_km", 1.0, 1_000.0, "km");
-        int? cells = layered.WholeNumber("coast", "land_cells", 1, 1_000);
-        if (least is null || most is null || pure is null || search is null || cells is null)
+        double? error = layered.Number("coast", "land_error_fraction", 0.0, 1.0, string.Empty);
+        LandTemperatureRules? land = LandTemperature(layered);
+        if (least is null || most is null || error is null || land is null)
         {
             return null;
         }
@@ -58,7 +59,33 @@ internal static class CoastLoader
             return null;
         }
 
-        return new(least.Value, most.Value, pure.Value, search.Value * 1_000.0, cells.Value);
+        return new(least.Value, most.Value, error.Value, land);
+    }
+
+    private static LandTemperatureRules? LandTemperature(LayeredScope layered)
+    {
+        double? tile = layered.Number("coast", "land_tile_km", 1.0, 1_000.0, "km");
+        double? pure = layered.Number("coast", "pure_land_fraction", 0.5, 1.0, string.Empty);
+        double? search = layered.Number("coast", "land_search_km", 1.0, 2_000.0, "km");
+        int? cells = layered.WholeNumber("coast", "land_cells", 1, 1_000);
+        double? spread = layered.Number("coast", "land_spread_k", 0.1, 100.0, "K");
+        double? growth = layered.Number("coast", "land_spread_k_per_km", 0.0, 1.0, "K/km");
+        double? residual = layered.Number("coast", "fit_residual_k", 0.1, 100.0, "K");
+        double? perLook = layered.Number("coast", "fit_cells_per_look", 1.0, 100.0, string.Empty);
+        double? most = layered.Number("coast", "most_land_error_k", 1.0, 100.0, "K");
+        return tile is null || pure is null || search is null || cells is null || spread is null
+            || growth is null || residual is null || perLook is null || most is null
+                ? null
+                : new(
+                    tile.Value * MetersPerKilometer,
+                    pure.Value,
+                    search.Value * MetersPerKilometer,
+                    cells.Value,
+                    spread.Value,
+                    growth.Value / MetersPerKilometer,
+                    residual.Value,
+                    perLook.Value,
+                    most.Value);
     }
 
     private static CoastMinimumRules? Minimum(LayeredScope layered)

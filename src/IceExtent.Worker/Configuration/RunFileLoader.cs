@@ -44,7 +44,7 @@ internal static class RunFileLoader
         WeatherSettings? weather = WeatherLoader.Load(layered, grid?.Grid, folder, faults);
         IceMaskRules? iceMask = WeatherLoader.IceMask(layered);
         layered.RefuseUnknown();
-        SourceLoader sources = new(folder, config, methods, needsFootprints: coast?.Correction == CoastCorrection.Brightness, needsSamples: tiePoints?.NeedsSamples(methods) ?? false);
+        SourceLoader sources = new(folder, config, methods, needsFootprints: coast?.InTemperatures == true, needsSamples: tiePoints?.NeedsSamples(methods) ?? false);
         List<RunSource?> loaded = [.. scope.Tables("source").Select(source => sources.Load(source, grid?.Grid))];
         scope.RefuseUnknown();
         LandShare? land = grid is null ? null : Land(grid, faults);

@@ -46,9 +46,13 @@ internal static class ConfigurationDigest
     // Only what the chosen correction uses: the rest decides no number.
     private static string CoastText(CoastSettings coast) => coast.Correction switch
     {
+        CoastCorrection.Off => string.Empty,
         CoastCorrection.Brightness => FormattableString.Invariant($"{coast.Correction} {coast.Brightness}"),
-        CoastCorrection.Concentration when coast.MinimumFraction is null => FormattableString.Invariant($"{coast.Correction} {coast.Spill}"),
-        CoastCorrection.Concentration => FormattableString.Invariant($"{coast.Correction} {coast.Minimum}"), // The file's bytes are counted above.
-        _ => string.Empty,
+        CoastCorrection.Concentration => $"{coast.Correction} {ConcentrationText(coast)}",
+        _ => FormattableString.Invariant($"{coast.Correction} {coast.Brightness} {ConcentrationText(coast)}"),
     };
+
+    private static string ConcentrationText(CoastSettings coast) => coast.MinimumFraction is null
+        ? FormattableString.Invariant($"{coast.Spill}")
+        : FormattableString.Invariant($"{coast.Minimum}"); // The file's bytes are counted above.
 }

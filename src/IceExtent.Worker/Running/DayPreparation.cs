@@ -17,7 +17,7 @@ internal sealed class DayPreparation
         Regions = [TotalsRegion.Hemisphere(settings.Grid, settings.Ocean)];
         Correlation = new(settings.Grid, settings.ErrorLengthMeters);
         Neighbours = settings.LeastNeighbours > 0 ? new(settings.Grid, settings.LeastNeighbours) : null;
-        ICoastStep? coast = settings.Coast.Correction == CoastCorrection.Concentration ? ConcentrationStep() : null;
+        ICoastStep? coast = settings.Coast.InConcentrations ? ConcentrationStep() : null;
         RetrievalChoices choices = new(
             settings.Grid, settings.Ocean, settings.Land, settings.Methods, settings.Coast, settings.SmearingFactor, settings.TiePoints, settings.Weather);
         sources = [.. settings.Sources.Select(source => new SourceRetrieval(choices, source.Sensor, [.. source.Description.Channels.Keys], MaskOf(source).Mask, coast))];

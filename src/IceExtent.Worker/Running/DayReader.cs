@@ -7,8 +7,7 @@ namespace IceExtent.Worker.Running;
 /// <param name="Planes">After the range check and the coast correction.</param>
 /// <param name="Conditions">What both marked.</param>
 /// <param name="OutOfRange">Temperatures made missing.</param>
-/// <param name="CoastCorrected">Cells whose temperatures were changed, or null where the run corrects none.</param>
-internal readonly record struct ObservedDay(BrightnessPlanes Planes, CellConditions[] Conditions, int OutOfRange, int? CoastCorrected);
+internal readonly record struct ObservedDay(BrightnessPlanes Planes, CellConditions[] Conditions, int OutOfRange);
 
 /// <summary>Reads days, one at a time, into memory of its own. Not shared between threads.</summary>
 internal sealed class DayReader(DayPreparation preparation)
@@ -24,7 +23,8 @@ internal sealed class DayReader(DayPreparation preparation)
         BrightnessPlanes planes = PlanesFor(source.Channels);
         day.Source.Reader.Read(day.Input, planes);
         int outOfRange = DayRetrieval.CheckRange(planes, day.Source.Settings.Sensor.Range, conditions);
-        return new(planes, conditions, outOfRange, source.Coast?.Correct(planes, conditions));
+        source.Coast?.Correct(planes, conditions);
+        return new(planes, conditions, outOfRange);
     }
 
     private BrightnessPlanes PlanesFor(IReadOnlyList<Channel> channels)

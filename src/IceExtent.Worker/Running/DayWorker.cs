@@ -42,7 +42,12 @@ internal sealed class DayWorker(DayPreparation preparation, SampleSeries? sample
     {
         MonthMask? month = preparation.Settings.Weather.MaskOf(day.Date);
         RetrievalCounts counts = retrieval.Retrieve(observed.Planes, observed.Conditions, concentration, month);
-        counts = observed.CoastCorrected is { } corrected ? counts with { CoastCorrected = corrected } : counts;
+        if (preparation.Of(day.Source).Coast is { } coast)
+        {
+            coast.WidenErrors(concentration);
+            counts = counts with { CoastCorrected = CoastCorrected() };
+        }
+
         (int filled, int? gapFilled) = Fill(day.Source.Index);
         month?.ClearFilled(concentration);
         string method = retrieval.Method.Name;
@@ -57,6 +62,18 @@ internal sealed class DayWorker(DayPreparation preparation, SampleSeries? sample
     {
         float ice = (float)preparation.Settings.Rules.IceFraction;
         return rows[0].AreaSquareKilometers == 0.0 && concentration.Unscreened.ContainsAnyInRange(ice, 1f);
+    }
+
+    // A cell that was corrected both in its temperatures and in its concentration counts once.
+    private int CoastCorrected()
+    {
+        int count = 0;
+        foreach (CellConditions condition in concentration.Conditions)
+        {
+            count += (condition & CellConditions.CoastCorrected) != 0 ? 1 : 0;
+        }
+
+        return count;
     }
 
     // Each from observed cells alone, so their order does not matter.

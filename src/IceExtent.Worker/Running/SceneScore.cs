@@ -50,7 +50,7 @@ internal sealed class SceneScore
         bool[] ocean = land.OceanBelow(defaults.LandLimitFraction);
         choices = new(scene.Grid, ocean, land, methods, defaults.Coast, defaults.SmearingFactor, defaults.TiePoints, defaults.Weather);
         CellMask mask = new(scene.Grid, ocean, scene.Sensor.PolarGapLatitudeDegrees);
-        ICoastStep? step = defaults.Coast.Correction == CoastCorrection.Concentration
+        ICoastStep? step = defaults.Coast.InConcentrations
             ? new CoastSpillStep(scene.Grid, land, ocean, defaults.Coast.Spill)
             : null;
         source = new(choices, scene.Sensor, [.. scene.Channels], mask, step);
@@ -108,6 +108,7 @@ internal sealed class SceneScore
         for (int method = 0; method < methods.Length; method++)
         {
             retrievals[method].Retrieve(bench.Observed, bench.Conditions, bench.Concentration);
+            source.Coast?.WidenErrors(bench.Concentration);
             methods[method] = (
                 DayScore.Of(scene.Grid, region, bench.Concentration.Total, bench.Concentration.StandardError, bench.Truth.Concentration, rules, bench.Melting),
                 bench.Uncertainty.StandardErrorsSquareMeters(region, bench.Concentration.Total, bench.Concentration.StandardError, rules.IceFraction).Extent);

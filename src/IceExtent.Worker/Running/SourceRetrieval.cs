@@ -42,7 +42,7 @@ internal sealed class SourceRetrieval
     {
         (this.choices, this.sensor, this.mask, this.step) = (choices, sensor, mask, step);
         Channels = Needed(available);
-        Coast = choices.Coast.Correction == CoastCorrection.Brightness ? BrightnessStep() : null;
+        Coast = choices.Coast.InTemperatures ? BrightnessStep() : null;
         withOwnPoints = [.. choices.Methods.Select(name => Make(name, Own, choices.Weather.ScreensFor(Own)))];
     }
 
