@@ -69,6 +69,33 @@ public sealed class TiePointTests : IDisposable
         ArchiveFiles.AssertSame(whole, ArchiveFiles.Of(archive));
     }
 
+    /// <summary>
+    /// Retuned limits follow the day's tie points: the sea of a day is steeper or flatter than the sensor's own, so another number of cells
+    /// is screened than by the same rule on its own points. The samples are taken with the fixed screens: tie points are the same.
+    /// </summary>
+    [Fact]
+    public async Task Run_RetunedLimits_FollowTheDaysTiePoints()
+    {
+        (int ofDay, byte[] points) = await ScreenedAsync("[weather]\nlimits = \"retuned\"\n[tie_points]\nmoving = true\n");
+        (int ofSensor, _) = await ScreenedAsync("[weather]\nlimits = \"retuned\"\n");
+        (_, byte[] pointsWithFixed) = await ScreenedAsync("[tie_points]\nmoving = true\n");
+
+        Assert.NotEqual(ofSensor, ofDay);
+        Assert.Equal(pointsWithFixed, points);
+
+        async Task<(int Screened, byte[] TiePoints)> ScreenedAsync(string head)
+        {
+            string runFile = await SceneAsync("[\"nasa-team\"]", head);
+            string archive = Path.Combine(folder, "archive");
+            Assert.Equal(ExitCode.Done, (await ProgramRun.OfAsync("run", runFile, "--to", "2003-02-01")).ExitCode);
+            RunRecord record = RunRecordFile.Read(Directory.GetFiles(Path.Combine(archive, "runs")).Single());
+            string table = new ArchiveLayout(archive).TiePointFile(Grids.Hemisphere.North, 2003);
+            byte[] rows = File.Exists(table) ? [.. TiePointTable.Read(table).SelectMany(row => BitConverter.GetBytes(row.Kelvins))] : [];
+            Directory.Delete(archive, recursive: true);
+            return (Assert.Single(Assert.Single(record.Days).Cells).Screened3719, rows);
+        }
+    }
+
     /// <summary>A grid of twenty cells has no samples: the sensor's own tie points stand, and table, tie points and run record say so.</summary>
     [Fact]
     public async Task Run_TooFewSamples_FallsBackAndSaysSo()
