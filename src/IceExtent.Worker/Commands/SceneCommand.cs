@@ -30,8 +30,10 @@ internal static class SceneCommand
         Option<string?> output = new("--out") { Description = "The folder to write to; needed unless --score is given.", HelpName = "DIR" };
         Option<bool> score = new("--score") { Description = "Write nothing: run methods on the scene and print how they stand to its truth." };
         Option<string[]> methods = new("--methods") { Description = "With --score: the methods, separated by spaces.", HelpName = "METHOD", AllowMultipleArgumentsPerToken = true, DefaultValueFactory = _ => [.. ConcentrationMethods.Names] };
-        Option<string> coast = new("--coast") { Description = "With --score: off, brightness, concentration or both, as coast.correction of a run file.", HelpName = "CORRECTION", DefaultValueFactory = _ => "off" };
-        Option<string> limits = new("--limits") { Description = "With --score: fixed or retuned, as weather.limits of a run file.", HelpName = "LIMITS", DefaultValueFactory = _ => "fixed" };
+        Option<string?> coast = new("--coast") { Description = "With --score: off, brightness, concentration or both, as coast.correction of a run file.", HelpName = "CORRECTION" };
+        Option<string?> settings = new("--settings") { Description = "With --score: a TOML file with tables of a run file, such as [tie_points] or [weather].", HelpName = "FILE" };
+        Option<string?> successor = new("--successor") { Description = "With --score: the scene file of a radiometer that follows the first, with other offsets or drifts.", HelpName = "SCENE" };
+        Option<DateOnly?> changeOver = CommonOptions.Day("--change-over", "With --successor: its first day.");
         Option<int> every = CommonOptions.Count("--every", "With --score: take one day of so many.", _ => 5, 366);
         Option<bool> json = CommonOptions.Json();
         Option<int> workers = CommonOptions.Workers();
@@ -40,7 +42,7 @@ internal static class SceneCommand
             "scene",
             "Write invented brightness temperatures with a known truth, and a run file for them.\n\nExample:\n  iceextent scene --grid north-25km --sensor ssmi-f13 --from 2000-01-01 --to 2000-01-31 --out scene\n  iceextent scene --score --methods nasa-team bristol --from 2000-01-01 --to 2000-12-31 --sensor ssmi-f13")
         {
-            grid, sensor, parameters, from, to, seed, noTruth, output, score, methods, coast, limits, every, json, workers,
+            grid, sensor, parameters, from, to, seed, noTruth, output, score, methods, coast, settings, successor, changeOver, every, json, workers,
         };
         command.SetAction((parsed, cancellation) =>
         {
@@ -50,8 +52,17 @@ internal static class SceneCommand
                 parsed.GetValue(grid)!, parsed.GetValue(sensor)!, parsed.GetValue(parameters), parsed.GetValue(seed));
             if (parsed.GetValue(score))
             {
+                DateOnly[] wanted = [.. SceneScoring.Days(first, last, parsed.GetValue(every))];
+                List<(Scene, IReadOnlyList<DateOnly>)> scenes = [(scene, wanted)];
+                if (ChangeOver(parsed.GetValue(successor), parsed.GetValue(changeOver)) is { } change)
+                {
+                    Scene next = Load(parsed.GetValue(grid)!, parsed.GetValue(sensor)!, change.Scene, parsed.GetValue(seed)).Scene;
+                    scenes = [(scene, [.. wanted.Where(day => day < change.Day)]), (next, [.. wanted.Where(day => day >= change.Day)])];
+                }
+
+                SceneDefaults defaults = SceneDefaults.Load(ConfigFolder.BesideProgram, scene.Grid, parsed.GetValue(coast), parsed.GetValue(settings));
                 return Task.FromResult(SceneScoring.Score(
-                    scene, land, parsed.GetValue(methods)!, parsed.GetValue(coast)!, parsed.GetValue(limits)!, SceneScoring.Days(first, last, parsed.GetValue(every)), parsed.GetValue(workers), parsed.GetValue(json), console, cancellation));
+                    scenes, land, parsed.GetValue(methods)!, defaults, parsed.GetValue(workers), parsed.GetValue(json), console, cancellation));
             }
 
             string folder = Path.GetFullPath(parsed.GetValue(output) ?? throw new ConfigurationException(
@@ -66,6 +77,14 @@ internal static class SceneCommand
         });
         return command;
     }
+
+    private static (string Scene, DateOnly Day)? ChangeOver(string? successor, DateOnly? day) => (successor, day) switch
+    {
+        (null, null) => null,
+        ({ } scene, { } first) => (scene, first),
+        _ => throw new ConfigurationException([new(
+            "IE1012", "command line", "one of --successor and --change-over", "both or neither", "Say which scene follows, and from which day.")]),
+    };
 
     /// <summary>The run file for a folder that <see cref="SceneFiles"/> filled.</summary>
     public static string RunFileText(string grid, string sensor, IEnumerable<Channel> channels, string notice) => string.Create(CultureInfo.InvariantCulture, $$"""

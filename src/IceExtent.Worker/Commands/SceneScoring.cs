@@ -20,10 +20,19 @@ internal static class SceneScoring
     }
 
     /// <summary>Scores and prints.</summary>
+    /// <param name="scenes">The scene, and the one that follows it, each with its days.</param>
+    /// <param name="land">The land of their grid.</param>
+    /// <param name="methods">The methods asked for.</param>
+    /// <param name="defaults">Everything else.</param>
+    /// <param name="workers">How many days are processed at a time.</param>
+    /// <param name="json">Whether the result is printed as JSON.</param>
+    /// <param name="console">Where to.</param>
+    /// <param name="cancellation">Stops.</param>
     /// <exception cref="ConfigurationException">A method does not exist.</exception>
     public static int Score(
-        Scene scene, LandShare land, string[] methods, string coast, string limits, IEnumerable<DateOnly> days, int workers, bool json, CommandConsole console, CancellationToken cancellation)
+        IReadOnlyList<(Scene Scene, IReadOnlyList<DateOnly> Days)> scenes, LandShare land, string[] methods, SceneDefaults defaults, int workers, bool json, CommandConsole console, CancellationToken cancellation)
     {
+        Scene scene = scenes[0].Scene;
         HemisphereTuning tuning = scene.Sensor.In(scene.Grid.Hemisphere);
         List<string> usable = [];
         foreach (string name in methods)
@@ -45,10 +54,10 @@ internal static class SceneScoring
             }
         }
 
-        SceneDefaults defaults = SceneDefaults.Load(ConfigFolder.BesideProgram, scene.Grid, coast, limits);
-        SceneScore scoring = new(scene, land, usable, defaults);
-        IReadOnlyList<SeasonScore> scores = scoring.Run(days, workers, cancellation);
-        ScoreReport.Print(scores, json, console);
+        // Each radiometer is scored by itself: samples of one never tune the other.
+        ScoredDay[] scored = [.. scenes.SelectMany(part => new SceneScore(part.Scene, land, usable, defaults).Run(part.Days, workers, cancellation))];
+        IReadOnlyList<SeasonScore> scores = ScoreSummary.Seasons(usable, scored);
+        ScoreReport.Print(scores, ScoreSummary.Trends(usable, scored), json, console);
         if (!json)
         {
             console.Print(SceneCommand.Notice);

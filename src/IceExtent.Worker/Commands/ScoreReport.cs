@@ -9,11 +9,11 @@ internal static class ScoreReport
 {
     private static readonly string[] ClassNames = ["open water", "below limit", "marginal", "pack", "melting"];
 
-    public static void Print(IReadOnlyList<SeasonScore> scores, bool json, CommandConsole console)
+    public static void Print(IReadOnlyList<SeasonScore> scores, IReadOnlyList<ErrorTrend> trends, bool json, CommandConsole console)
     {
         if (json)
         {
-            console.Print(JsonText.Of(scores.Select(score => new
+            console.Print(JsonText.Of(new { Trends = trends, Seasons = scores.Select(score => new
             {
                 score.Method,
                 score.Season,
@@ -31,7 +31,7 @@ internal static class ScoreReport
                     Within68 = Finite(cells.Share68),
                     Within95 = Finite(cells.Share95),
                 }),
-            })));
+            }) }));
             return;
         }
 
@@ -55,6 +55,25 @@ internal static class ScoreReport
             console.Print(string.Create(
                 CultureInfo.InvariantCulture,
                 $"{score.Method,-14} {score.Season,-6} {score.Days,5} {score.ExtentErrorFraction,7:P1} {score.ExtentRootMeanSquareFraction,7:P1} {score.ExtentShare95,8:P0} {score.EdgeErrorKilometers,8:F1}"));
+        }
+
+        PrintTrends(trends, console);
+    }
+
+    private static void PrintTrends(IReadOnlyList<ErrorTrend> trends, CommandConsole console)
+    {
+        if (trends.Count == 0)
+        {
+            return;
+        }
+
+        console.Print(string.Empty);
+        console.Print("Drift of the error of extent over the period, km² per decade, and its share of the mean true extent");
+        foreach (ErrorTrend trend in trends)
+        {
+            console.Print(string.Create(
+                CultureInfo.InvariantCulture,
+                $"{trend.Method,-14} {trend.ErrorSquareKilometersPerDecade,12:F0} {trend.ErrorSquareKilometersPerDecade / trend.TrueExtentSquareKilometers,9:P2}"));
         }
     }
 

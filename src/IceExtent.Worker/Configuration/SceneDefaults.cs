@@ -10,32 +10,36 @@ internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction
     /// <summary>Reads them.</summary>
     /// <param name="config">Where they stand.</param>
     /// <param name="grid">The grid of the scene.</param>
-    /// <param name="coast">What the person asked for in place of <c>coast.correction</c>.</param>
-    /// <param name="limits">What the person asked for in place of <c>weather.limits</c>.</param>
-    /// <exception cref="ConfigurationException">The file or one of the two cannot be used.</exception>
-    public static SceneDefaults Load(ConfigFolder config, Grid grid, string coast, string limits)
+    /// <param name="coast">What the person asked for in place of <c>coast.correction</c>, or null.</param>
+    /// <param name="settings">A file with tables of a run file, or null.</param>
+    /// <exception cref="ConfigurationException">A file or the correction cannot be used.</exception>
+    public static SceneDefaults Load(ConfigFolder config, Grid grid, string? coast, string? settings)
     {
         List<Fault> faults = [];
         ConfigTable? defaults = TomlFile.Read(config.Defaults, faults);
-        ConfigTable? asked = TomlFile.Parse($"[coast]\ncorrection = \"{coast}\"\n", "--coast", faults);
-        ConfigTable? askedLimits = TomlFile.Parse($"[weather]\nlimits = \"{limits}\"\n", "--limits", faults);
-        if (defaults is null || asked is null || askedLimits is null)
+        ConfigTable? asked = settings is null ? TomlFile.Parse(string.Empty, "--settings", faults) : TomlFile.Read(settings, faults);
+        ConfigTable? askedCoast = coast is null ? asked : TomlFile.Parse($"[coast]\ncorrection = \"{coast}\"\n", "--coast", faults);
+        if (defaults is null || asked is null || askedCoast is null)
         {
             throw new ConfigurationException(faults);
         }
 
+        string folder = settings is null ? config.Path : Path.GetDirectoryName(Path.GetFullPath(settings))!;
         ConfigScope shipped = new(defaults, string.Empty, faults);
-        LayeredScope layered = new(new(asked, string.Empty, faults), shipped);
+        ConfigScope own = new(asked, string.Empty, faults);
+        LayeredScope layered = new(own, shipped);
+        LayeredScope coastal = coast is null ? layered : new(new(askedCoast, string.Empty, faults), shipped);
         double? ice = layered.Number("totals", "ice_fraction", 0.01, 0.99, string.Empty);
         double? pack = layered.Number("totals", "pack_fraction", 0.01, 1.0, string.Empty);
         double? land = layered.Number("land", "limit_fraction", 0.01, 1.0, string.Empty);
         double? length = layered.Number("standard_error", "correlation_length_km", 1.0, 3_000.0, "km");
         double? smearing = layered.Number("standard_error", "smearing_factor", 0.0, 1.0, string.Empty);
-        CoastSettings? settings = CoastLoader.Load(layered, grid, config.Path, faults);
+        CoastSettings? correction = CoastLoader.Load(coastal, grid, folder, faults);
         TiePointSettings? tiePoints = TiePointLoader.Load(layered, ice ?? double.NaN);
-        WeatherSettings? weather = WeatherLoader.Load(new(new(askedLimits, string.Empty, faults), shipped), grid, config.Path, faults);
+        WeatherSettings? weather = WeatherLoader.Load(layered, grid, folder, faults);
+        layered.RefuseUnknown();
         return faults.Count == 0
-            ? new(new TotalsRules(ice!.Value, pack!.Value), land!.Value, length!.Value * 1_000.0, smearing!.Value, settings!, tiePoints!, weather!)
+            ? new(new TotalsRules(ice!.Value, pack!.Value), land!.Value, length!.Value * 1_000.0, smearing!.Value, correction!, tiePoints!, weather!)
             : throw new ConfigurationException(faults);
     }
 }

@@ -7,31 +7,14 @@ using IceExtent.Worker.Configuration;
 
 namespace IceExtent.Worker.Running;
 
-/// <summary>One method in one season against the truth of a scene.</summary>
-/// <param name="Method">The method.</param>
-/// <param name="Season">January to March, and so on.</param>
-/// <param name="Classes">Cells by what they truly hold, in the order of <see cref="TruthClass"/>.</param>
-/// <param name="Days">The number of days.</param>
-/// <param name="ExtentErrorFraction">Mean over days of (retrieved − true extent) / true extent.</param>
-/// <param name="ExtentRootMeanSquareFraction">Root mean square of the same.</param>
-/// <param name="ExtentShare95">Share of days whose 95 % limits of extent hold the true extent.</param>
-/// <param name="EdgeErrorKilometers">Mean distance between the edges.</param>
-internal sealed record SeasonScore(
-    string Method,
-    string Season,
-    IReadOnlyList<CellScore> Classes,
-    int Days,
-    double ExtentErrorFraction,
-    double ExtentRootMeanSquareFraction,
-    double ExtentShare95,
-    double EdgeErrorKilometers);
+/// <summary>One day of a scene by every method.</summary>
+/// <param name="Date">The day.</param>
+/// <param name="Methods">In the order asked for: the score, and the standard error of extent in m².</param>
+internal sealed record ScoredDay(DateOnly Date, IReadOnlyList<(DayScore Score, double ExtentError)> Methods);
 
 /// <summary>Runs methods on days of an invented scene and holds them against its truth, without writing anything.</summary>
 internal sealed class SceneScore
 {
-    private const double Limit95 = 1.959963985;
-    private static readonly string[] Seasons = ["JFM", "AMJ", "JAS", "OND"];
-
     private readonly Scene scene;
     private readonly TotalsRules rules;
     private readonly RetrievalChoices choices;
@@ -59,15 +42,15 @@ internal sealed class SceneScore
     }
 
     /// <summary>Scores days, several at a time; the result does not depend on how many.</summary>
-    public IReadOnlyList<SeasonScore> Run(IEnumerable<DateOnly> days, int workers, CancellationToken cancellation)
+    public IReadOnlyList<ScoredDay> Run(IEnumerable<DateOnly> days, int workers, CancellationToken cancellation)
     {
         DateOnly[] seen = [.. days.Where(day => !scene.IsMissing(day))];
-        DayOfMethods[] scored = new DayOfMethods[seen.Length];
+        ScoredDay[] scored = new ScoredDay[seen.Length];
         using ThreadLocal<Bench> benches = new(() => new Bench(scene, source, correlation));
         ParallelOptions options = new() { MaxDegreeOfParallelism = workers, CancellationToken = cancellation };
         Dictionary<DateOnly, DaySamples> samples = Samples(seen, benches, options);
         Parallel.For(0, seen.Length, options, index => scored[index] = Score(seen[index], Tune(seen[index], samples), benches.Value!));
-        return [.. choices.Methods.SelectMany((_, method) => Seasons.Select((_, season) => Summary(scored, method, season))).Where(score => score.Days > 0)];
+        return scored;
     }
 
     // Of every day that a window reaches, those before and after the period included.
@@ -98,7 +81,7 @@ internal sealed class SceneScore
             [.. Enumerable.Range(-tuning.DaysBehind, tuning.DaysBehind + tuning.DaysAhead + 1).Select(day.AddDays).Where(samples.ContainsKey).Select(near => samples[near])]);
     }
 
-    private DayOfMethods Score(DateOnly day, TunedDay? tuned, Bench bench)
+    private ScoredDay Score(DateOnly day, TunedDay? tuned, Bench bench)
     {
         bench.Observe(day);
         scene.Melt(day, bench.Workspace, bench.Melting);
@@ -107,34 +90,15 @@ internal sealed class SceneScore
         (DayScore, double)[] methods = new (DayScore, double)[retrievals.Count];
         for (int method = 0; method < methods.Length; method++)
         {
-            retrievals[method].Retrieve(bench.Observed, bench.Conditions, bench.Concentration);
+            retrievals[method].Retrieve(bench.Observed, bench.Conditions, bench.Concentration, choices.Weather.MaskOf(day));
             source.Coast?.WidenErrors(bench.Concentration);
             methods[method] = (
                 DayScore.Of(scene.Grid, region, bench.Concentration.Total, bench.Concentration.StandardError, bench.Truth.Concentration, rules, bench.Melting),
                 bench.Uncertainty.StandardErrorsSquareMeters(region, bench.Concentration.Total, bench.Concentration.StandardError, rules.IceFraction).Extent);
         }
 
-        return new((day.Month - 1) / 3, methods);
+        return new(day, methods);
     }
-
-    private SeasonScore Summary(DayOfMethods[] scored, int method, int season)
-    {
-        (DayScore Score, double ExtentError)[] days = [.. scored.Where(day => day.Season == season).Select(day => day.Methods[method])];
-        double[] errors = [.. days.Select(day => (day.Score.ExtentSquareMeters - day.Score.TrueExtentSquareMeters) / day.Score.TrueExtentSquareMeters)];
-        double[] edges = [.. days.Select(day => day.Score.EdgeErrorMeters / 1_000.0).Where(double.IsFinite)];
-        int held = days.Count(day => Math.Abs(day.Score.ExtentSquareMeters - day.Score.TrueExtentSquareMeters) <= Limit95 * day.ExtentError);
-        return new(
-            choices.Methods[method],
-            Seasons[season],
-            [.. Enum.GetValues<TruthClass>().Select(truth => days.Aggregate(default(CellScore), (sum, day) => sum + day.Score.Of(truth)))],
-            days.Length,
-            errors.DefaultIfEmpty(double.NaN).Average(),
-            Math.Sqrt(errors.DefaultIfEmpty(double.NaN).Average(error => error * error)),
-            days.Length == 0 ? double.NaN : (double)held / days.Length,
-            edges.DefaultIfEmpty(double.NaN).Average());
-    }
-
-    private sealed record DayOfMethods(int Season, IReadOnlyList<(DayScore Score, double ExtentError)> Methods);
 
     // What one thread needs for a day.
     private sealed class Bench(Scene scene, SourceRetrieval source, ErrorCorrelation correlation)
