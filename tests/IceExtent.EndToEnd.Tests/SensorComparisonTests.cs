@@ -126,6 +126,7 @@ public sealed class SensorComparisonTests : IDisposable
         ProgramRun right = await ProgramRun.OfAsync("run", sensors.Run.RunFile);
         Assert.Equal(ExitCode.Done, right.ExitCode);
         double expected = Area();
+        double sure = AreaError();
         Directory.Delete(sensors.Run.PathOf("out"), recursive: true);
         string file = sensors.Run.DayFile(day, "v37");
         File.WriteAllBytes(file, Raised(File.ReadAllBytes(file), 20)); // Tenths of a kelvin.
@@ -138,6 +139,7 @@ public sealed class SensorComparisonTests : IDisposable
 
         Assert.True(Math.Abs(wrong - expected) > 1.0, "2 K must show, or the test proves nothing.");
         Assert.Equal(expected, Area(), 0.05);
+        Assert.True(AreaError() > sure, "An offset that is known to 0.1 K makes the area less sure.");
         Assert.Equal("tiny: 37v=2(0.1)", DailyTable.Read(DailyFile()).Metadata["sensor_offsets_k"]);
     }
 
@@ -166,6 +168,8 @@ public sealed class SensorComparisonTests : IDisposable
     private string DailyFile() => new ArchiveLayout(sensors.Run.PathOf("out")).DailyFile("nasa-team", Grids.Hemisphere.North, 1990);
 
     private double Area() => DailyTable.Read(DailyFile()).Rows[0].AreaSquareKilometers!.Value;
+
+    private double AreaError() => DailyTable.Read(DailyFile()).Rows[0].AreaStandardErrorSquareKilometers!.Value;
 
     private void WriteDays(int count)
     {

@@ -3,7 +3,7 @@ using IceExtent.Grids;
 namespace IceExtent.Statistics.Overlaps;
 
 /// <summary>A surface whose brightness temperatures two sensors can be compared over.</summary>
-public enum PureSurface
+public enum ComparedSurface
 {
     /// <summary>Neither.</summary>
     None,
@@ -76,7 +76,7 @@ public sealed class PureCells
     /// <param name="first">Concentrations by one sensor; NaN is missing. Unit: 1. Shape: one value a cell.</param>
     /// <param name="second">The same by the other sensor.</param>
     /// <param name="surfaces">Receives the surface of every cell.</param>
-    public void Find(ReadOnlySpan<float> first, ReadOnlySpan<float> second, Span<PureSurface> surfaces)
+    public void Find(ReadOnlySpan<float> first, ReadOnlySpan<float> second, Span<ComparedSurface> surfaces)
     {
         float limit = (float)rules.IceFraction;
         for (int cell = 0; cell < seen.Length; cell++)
@@ -93,23 +93,23 @@ public sealed class PureCells
         iceSums.Fill(ice);
         for (int cell = 0; cell < seen.Length; cell++)
         {
-            surfaces[cell] = farFromLand[cell] && seen[cell] > 0f ? Judge(cell) : PureSurface.None;
+            surfaces[cell] = farFromLand[cell] && seen[cell] > 0f ? Judge(cell) : ComparedSurface.None;
         }
     }
 
-    private PureSurface Judge(int cell)
+    private ComparedSurface Judge(int cell)
     {
         double around = seenSums.Around(cell, reach) - 1.0;
         double square = (2.0 * reach) + 1.0;
         if (2.0 * around < (square * square) - 1.0) // Less than half of the square is known.
         {
-            return PureSurface.None;
+            return ComparedSurface.None;
         }
 
         double fraction = (meanSums.Around(cell, reach) - mean[cell]) / around;
-        return fraction >= rules.ClosedIceFraction ? PureSurface.ClosedIce
-            : fraction < rules.OpenWaterFraction && iceSums.Around(cell, reach) - ice[cell] == 0.0 ? PureSurface.OpenWater
-            : PureSurface.None;
+        return fraction >= rules.ClosedIceFraction ? ComparedSurface.ClosedIce
+            : fraction < rules.OpenWaterFraction && iceSums.Around(cell, reach) - ice[cell] == 0.0 ? ComparedSurface.OpenWater
+            : ComparedSurface.None;
     }
 
     // At least the next cell, for a cell is judged by others.

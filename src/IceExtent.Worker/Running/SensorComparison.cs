@@ -18,7 +18,7 @@ internal sealed class SensorComparison
     private readonly RunSettings settings;
     private readonly DayPreparation preparation;
     private readonly PureCells pure;
-    private readonly PureSurface[] surfaces;
+    private readonly ComparedSurface[] surfaces;
     private readonly float[] differences;
     private readonly int surfaceMethod;
     private readonly Dictionary<int, Bench> benches = [];
@@ -38,7 +38,7 @@ internal sealed class SensorComparison
         surfaceMethod = preparation.Settings.Methods.ToList().IndexOf(NasaTeam.MethodName);
         samples = SamplesOf(days, cancellation);
         pure = new(settings.Grid, settings.Land, settings.Overlap.Cells);
-        surfaces = new PureSurface[settings.Grid.CellCount];
+        surfaces = new ComparedSurface[settings.Grid.CellCount];
         differences = new float[settings.Grid.CellCount];
     }
 
@@ -112,7 +112,7 @@ internal sealed class SensorComparison
         foreach (Channel channel in earlier.Observed.Channels.Where(later.Observed.Has))
         {
             double removed = later.Source.Settings.Offsets?.Kelvins.GetValueOrDefault(channel) ?? 0.0;
-            foreach (PureSurface surface in SensorSeries.Surfaces)
+            foreach (ComparedSurface surface in SensorSeries.Surfaces)
             {
                 int cells = Gather(surface, earlier.Observed.Kelvins(channel), later.Observed.Kelvins(channel));
                 if (cells >= settings.Overlap.LeastCells)
@@ -124,7 +124,7 @@ internal sealed class SensorComparison
         }
     }
 
-    private int Gather(PureSurface surface, ReadOnlySpan<float> earlier, ReadOnlySpan<float> later)
+    private int Gather(ComparedSurface surface, ReadOnlySpan<float> earlier, ReadOnlySpan<float> later)
     {
         int cells = 0;
         for (int cell = 0; cell < surfaces.Length; cell++)

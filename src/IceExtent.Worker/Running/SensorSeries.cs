@@ -8,7 +8,7 @@ namespace IceExtent.Worker.Running;
 internal sealed record TotalsKey(SensorPair Pair, string Method, string Region);
 
 /// <summary>What temperatures are compared.</summary>
-internal sealed record TemperatureKey(SensorPair Pair, Channel Channel, PureSurface Surface);
+internal sealed record TemperatureKey(SensorPair Pair, Channel Channel, ComparedSurface Surface);
 
 /// <summary>Daily differences between sensors as they come in, in date order, and the tables that are made of them.</summary>
 internal sealed class SensorSeries
@@ -22,7 +22,7 @@ internal sealed class SensorSeries
     private readonly Dictionary<TemperatureKey, DayValues> temperatures = [];
 
     /// <summary>The surfaces over which temperatures are compared.</summary>
-    public static IReadOnlyList<PureSurface> Surfaces { get; } = [PureSurface.OpenWater, PureSurface.ClosedIce];
+    public static IReadOnlyList<ComparedSurface> Surfaces { get; } = [ComparedSurface.OpenWater, ComparedSurface.ClosedIce];
 
     /// <summary>Takes one day's totals: extent and area, later less earlier, in m².</summary>
     public void AddTotals(TotalsKey key, DateOnly date, (double Extent, double Area) common, (double Extent, double Area) own)
@@ -107,7 +107,7 @@ internal sealed class SensorSeries
         {
             Pair = key.Pair,
             Channel = ChannelNames.NameOf(key.Channel),
-            Surface = key.Surface == PureSurface.OpenWater ? "open-water" : "closed-ice",
+            Surface = key.Surface == ComparedSurface.OpenWater ? "open-water" : "closed-ice",
             OffsetKelvins = mean.Mean,
             StandardErrorKelvins = mean.StandardError,
             Days = mean.Days,

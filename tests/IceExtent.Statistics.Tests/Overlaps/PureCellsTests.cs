@@ -20,11 +20,11 @@ public sealed class PureCellsTests
     {
         float[] fraction = Plane((_, column) => column < 4 ? 1f : column == 4 ? 0.5f : 0f);
 
-        PureSurface[] found = Find(OneCell, NoLand(), fraction, fraction);
+        ComparedSurface[] found = Find(OneCell, NoLand(), fraction, fraction);
 
-        Assert.Equal([PureSurface.None, PureSurface.ClosedIce, PureSurface.ClosedIce], [found[0], found[1], found[Side]]);
+        Assert.Equal([ComparedSurface.None, ComparedSurface.ClosedIce, ComparedSurface.ClosedIce], [found[0], found[1], found[Side]]);
         Assert.Equal(
-            [PureSurface.ClosedIce, PureSurface.ClosedIce, PureSurface.ClosedIce, PureSurface.None, PureSurface.None, PureSurface.None, PureSurface.OpenWater, PureSurface.OpenWater, PureSurface.OpenWater],
+            [ComparedSurface.ClosedIce, ComparedSurface.ClosedIce, ComparedSurface.ClosedIce, ComparedSurface.None, ComparedSurface.None, ComparedSurface.None, ComparedSurface.OpenWater, ComparedSurface.OpenWater, ComparedSurface.OpenWater],
             found[(4 * Side)..(5 * Side)]);
     }
 
@@ -35,10 +35,10 @@ public sealed class PureCellsTests
         float[] land = Plane((row, column) => row == 4 && column == 4 ? 0.004f : 0f);
         float[] water = new float[Grid.CellCount];
 
-        PureSurface[] found = Find(OneCell, new LandShare(land), water, water);
+        ComparedSurface[] found = Find(OneCell, new LandShare(land), water, water);
 
-        Assert.All(Enumerable.Range(0, 81).Where(cell => cell / Side is >= 3 and <= 5 && cell % Side is >= 3 and <= 5), cell => Assert.Equal(PureSurface.None, found[cell]));
-        Assert.Equal(PureSurface.OpenWater, found[(2 * Side) + 4]);
+        Assert.All(Enumerable.Range(0, 81).Where(cell => cell / Side is >= 3 and <= 5 && cell % Side is >= 3 and <= 5), cell => Assert.Equal(ComparedSurface.None, found[cell]));
+        Assert.Equal(ComparedSurface.OpenWater, found[(2 * Side) + 4]);
     }
 
     /// <summary>Origin: worked. One cell at the ice limit in the 5 x 5 ends open water, though the mean of the 24 others is below 1 %.</summary>
@@ -48,10 +48,10 @@ public sealed class PureCellsTests
         float[] water = new float[Grid.CellCount];
         float[] withIce = Plane((row, column) => row == 4 && column == 6 ? 0.15f : 0f);
 
-        PureSurface[] found = Find(OneCell with { EdgeDistanceMeters = 50_000.0 }, NoLand(), water, withIce);
+        ComparedSurface[] found = Find(OneCell with { EdgeDistanceMeters = 50_000.0 }, NoLand(), water, withIce);
 
-        Assert.Equal(PureSurface.None, found[(4 * Side) + 4]);
-        Assert.Equal(PureSurface.OpenWater, found[(4 * Side) + 3]);
+        Assert.Equal(ComparedSurface.None, found[(4 * Side) + 4]);
+        Assert.Equal(ComparedSurface.OpenWater, found[(4 * Side) + 3]);
     }
 
     [Fact]
@@ -60,10 +60,10 @@ public sealed class PureCellsTests
         float[] water = new float[Grid.CellCount];
         float[] missed = Plane((row, column) => row == 4 && column == 4 ? float.NaN : 0f);
 
-        PureSurface[] found = Find(OneCell, NoLand(), missed, water);
+        ComparedSurface[] found = Find(OneCell, NoLand(), missed, water);
 
-        Assert.Equal(PureSurface.None, found[(4 * Side) + 4]);
-        Assert.Equal(PureSurface.OpenWater, found[(4 * Side) + 5]);
+        Assert.Equal(ComparedSurface.None, found[(4 * Side) + 4]);
+        Assert.Equal(ComparedSurface.OpenWater, found[(4 * Side) + 5]);
     }
 
     /// <summary>What a cell itself holds decides nothing about it, so its noise cannot pick it; and the sensors' order does not matter.</summary>
@@ -73,8 +73,8 @@ public sealed class PureCellsTests
         {
             float[] one = Array.ConvertAll(first, value => value < 0.5f ? 0f : 1f - (value / 100f));
             float[] two = Array.ConvertAll(second, value => value < 0.5f ? 0f : 1f - (value / 100f));
-            PureSurface before = Find(OneCell, NoLand(), one, two)[cell];
-            PureSurface swapped = Find(OneCell, NoLand(), two, one)[cell];
+            ComparedSurface before = Find(OneCell, NoLand(), one, two)[cell];
+            ComparedSurface swapped = Find(OneCell, NoLand(), two, one)[cell];
             one[cell] = other;
             return before == Find(OneCell, NoLand(), one, two)[cell] && before == swapped;
         });
@@ -83,9 +83,9 @@ public sealed class PureCellsTests
     public void PureCells_LandOfAnotherGrid_IsRefused() =>
         Assert.Throws<ArgumentException>(() => new PureCells(Grid, new LandShare(new float[4]), OneCell));
 
-    private static PureSurface[] Find(PureCellRules rules, LandShare land, float[] first, float[] second)
+    private static ComparedSurface[] Find(PureCellRules rules, LandShare land, float[] first, float[] second)
     {
-        PureSurface[] found = new PureSurface[Grid.CellCount];
+        ComparedSurface[] found = new ComparedSurface[Grid.CellCount];
         new PureCells(Grid, land, rules).Find(first, second, found);
         return found;
     }
