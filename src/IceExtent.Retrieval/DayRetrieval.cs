@@ -26,16 +26,17 @@ public sealed class DayRetrieval
     /// <param name="coast">Corrects concentrations near land, or null.</param>
     /// <param name="smearingFactor">How much a change from cell to cell widens the standard error, without unit; 0 for not at all.</param>
     /// <param name="noise">The instrument noise, or null where it is not told apart.</param>
+    /// <param name="offsetErrors">The standard errors of offsets taken off the temperatures, or null.</param>
     public DayRetrieval(
         IConcentrationMethod method, WeatherScreens screens, RetrievalScatter scatter, CellMask mask, ICoastStep? coast = null, double smearingFactor = 0.0,
-        ChannelNoise? noise = null)
+        ChannelNoise? noise = null, ChannelNoise? offsetErrors = null)
     {
         ArgumentNullException.ThrowIfNull(method);
         ArgumentNullException.ThrowIfNull(screens);
         ArgumentNullException.ThrowIfNull(scatter);
         ArgumentNullException.ThrowIfNull(mask);
         (this.method, this.screens, this.mask, this.coast, this.smearingFactor) = (method, screens, mask, coast, smearingFactor);
-        errors = new(method, scatter, noise ?? ChannelNoise.None);
+        errors = new(method, scatter, noise ?? ChannelNoise.None, offsetErrors);
         needed = [.. method.Channels];
     }
 

@@ -17,6 +17,9 @@ namespace IceExtent.Scenes;
 /// </remarks>
 public sealed class Scene
 {
+    /// <summary>The radiometer that a scene has where nothing is said.</summary>
+    public const int FirstRadiometer = 1;
+
     private readonly IceCover ice;
     private readonly Weather weather;
     private readonly Instrument instrument;
@@ -30,11 +33,12 @@ public sealed class Scene
     /// <param name="land">The share of land of every cell of the grid.</param>
     /// <param name="sensor">The radiometer; its tie points in the hemisphere of the grid are the pure surfaces.</param>
     /// <param name="seed">Another seed, another sea.</param>
+    /// <param name="radiometer">Another number, another radiometer over the same sea: other noise, other lost days, passes and cells.</param>
     /// <exception cref="ArgumentException">
     /// A parameter is out of range (see <see cref="SceneCheck.FindProblems"/>), the land shares belong to another grid,
     /// or no emissivity fits a tie point.
     /// </exception>
-    public Scene(SceneParameters parameters, Grid grid, LandShare land, Sensor sensor, long seed)
+    public Scene(SceneParameters parameters, Grid grid, LandShare land, Sensor sensor, long seed, int radiometer = FirstRadiometer)
     {
         ArgumentNullException.ThrowIfNull(parameters);
         ArgumentNullException.ThrowIfNull(grid);
@@ -56,8 +60,9 @@ public sealed class Scene
         SeasonClock clock = new(parameters.Season, Draws.Key(key, 1));
         ice = new(parameters.Ice, clock, grid, land, Draws.Key(key, 2));
         weather = new(parameters.Weather, parameters.Surfaces, grid, Draws.Key(key, 3));
-        instrument = new(parameters.Instrument, sensor.FirstDay, grid.Frame.CellMeters, Draws.Key(key, 4));
-        coverage = new(parameters.Coverage, sensor.FirstDay, sensor.PolarGapLatitudeDegrees, grid, Draws.Key(key, 5));
+        ulong own = radiometer == FirstRadiometer ? key : Draws.Key(Draws.Key(key, 6), radiometer);
+        instrument = new(parameters.Instrument, sensor.FirstDay, grid.Frame.CellMeters, Draws.Key(own, 4));
+        coverage = new(parameters.Coverage, sensor.FirstDay, sensor.PolarGapLatitudeDegrees, grid, Draws.Key(own, 5));
 
         SurfaceEmission surfaces = new(
             parameters.Surfaces, parameters.Instrument.IncidenceDegrees, sensor, sensor.In(grid.Hemisphere).TiePoints);

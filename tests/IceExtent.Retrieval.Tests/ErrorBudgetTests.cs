@@ -48,6 +48,28 @@ public sealed class ErrorBudgetTests
         Assert.True(float.IsNaN(errors[2]));
     }
 
+    /// <summary>
+    /// Origin: worked. As above with an offset in 37V that is known to 2 K: (0.01·2)² = 4e-4 comes on top everywhere, and the scatter,
+    /// which does not hold it, keeps what it had: sqrt(15.25e-4) = 3.905 % at C = 0.5. Without noise the file's scatter stays whole.
+    /// </summary>
+    [Fact]
+    public void Apply_OffsetError_ComesOnTopOfTheScatter()
+    {
+        ChannelNoise offsets = new(new Dictionary<Channel, double> { [Channel.V37] = 2.0 });
+        ErrorBudget noisy = new(new Even(), File, new(new Dictionary<Channel, double> { [Channel.V19] = 1.0, [Channel.V37] = 1.0 }), offsets);
+        ErrorBudget quiet = new(new Even(), File, ChannelNoise.None, offsets);
+        float[] errors = new float[2];
+
+        noisy.Apply(new(2, [Channel.V19, Channel.V37]), new(0, 2), [0f, 0.5f], errors);
+        Assert.Equal(Math.Sqrt(29e-4), errors[0], 1e-6);
+        Assert.Equal(0.03905, errors[1], 5e-6);
+
+        quiet.Apply(new(2, [Channel.V19, Channel.V37]), new(0, 2), [0f, 1f], errors);
+        Assert.Equal(File, quiet.SurfaceScatter);
+        Assert.Equal(Math.Sqrt(29e-4), errors[0], 1e-6);
+        Assert.Equal(Math.Sqrt(20e-4), errors[1], 1e-6);
+    }
+
     /// <summary>Origin: worked. 10 K in two channels is a variance of 2e-2, more than the file's: nothing is left to vary, and noise alone is the error.</summary>
     [Fact]
     public void Apply_MoreNoiseThanScatter_IsNoiseAlone()

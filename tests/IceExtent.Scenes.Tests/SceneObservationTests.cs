@@ -120,6 +120,23 @@ public sealed class SceneObservationTests
         Assert.True(Roughness(soft, 90) < 0.6 * Roughness(sharp, 90));
     }
 
+    /// <summary>Two radiometers over one sea: the same truth, noise of their own.</summary>
+    [Fact]
+    public void Observe_AnotherRadiometer_SeesTheSameSeaWithOtherNoise()
+    {
+        DateOnly day = new(2001, 3, 1);
+        Scene first = TestWorld.Make(North);
+        Scene second = new(North, TestWorld.North, TestWorld.NoLand(TestWorld.North), TestWorld.Sensor, 1, radiometer: 2);
+        float[] one = first.Observed(day).Kelvins(Channel.V19).ToArray();
+        float[] other = second.Observed(day).Kelvins(Channel.V19).ToArray();
+        double[] apart = [.. one.Zip(other, (left, right) => (double)right - left).Where(double.IsFinite)];
+
+        Assert.Equal(first.TruthOf(day).Concentration, second.TruthOf(day).Concentration);
+
+        // Origin: worked. Two draws of 0.45 K of noise differ by 0.45·√2 = 0.636 K; 2,304 cells tell that to 2 %.
+        Assert.InRange(Math.Sqrt(apart.Average(difference => difference * difference)), 0.636 * 0.93, 0.636 * 1.07);
+    }
+
     [Theory]
     [InlineData("north")]
     [InlineData("south")]

@@ -15,18 +15,23 @@ public sealed class ErrorBudget
     /// <param name="method">The tuned method.</param>
     /// <param name="scatter">The scatter over the pure surfaces, noise included.</param>
     /// <param name="noise">The noise of the channels.</param>
-    public ErrorBudget(IConcentrationMethod method, RetrievalScatter scatter, ChannelNoise noise)
+    /// <param name="offsets">
+    /// The standard errors of offsets that were taken off the channels, or null: on top of the scatter, which does not hold them.
+    /// </param>
+    public ErrorBudget(IConcentrationMethod method, RetrievalScatter scatter, ChannelNoise noise, ChannelNoise? offsets = null)
     {
         ArgumentNullException.ThrowIfNull(method);
         ArgumentNullException.ThrowIfNull(scatter);
         ArgumentNullException.ThrowIfNull(noise);
-        (this.method, this.noise) = (method, noise);
-        hasNoise = method.Channels.Any(channel => noise[channel] > 0.0);
+        this.method = method;
+        this.noise = offsets is null ? noise : noise.With(offsets);
+        hasNoise = method.Channels.Any(channel => this.noise[channel] > 0.0);
+        bool scatterHasNoise = method.Channels.Any(channel => noise[channel] > 0.0);
 
         // Two kinds of ice have one scatter but not the same noise: the smaller leaves more, which is the safe side.
         PureTangents pure = method.PureTangents;
         double iceVariance = Math.Min(noise.VarianceOf(pure.FirstYear), noise.VarianceOf(pure.Multiyear));
-        SurfaceScatter = hasNoise
+        SurfaceScatter = scatterHasNoise
             ? new(Rest(scatter.OpenWaterFraction, noise.VarianceOf(pure.OpenWater)), Rest(scatter.ClosedIceFraction, iceVariance))
             : scatter;
     }

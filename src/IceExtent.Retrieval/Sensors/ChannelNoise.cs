@@ -29,6 +29,13 @@ public sealed record ChannelNoise
     /// <summary>One channel's standard deviation, in K; 0 where it is not known.</summary>
     public double this[Channel channel] => kelvins[(int)channel];
 
+    /// <summary>This noise together with an independent error of each channel, in K.</summary>
+    public ChannelNoise With(ChannelNoise other)
+    {
+        ArgumentNullException.ThrowIfNull(other);
+        return new(ChannelNames.All.ToDictionary(channel => channel, channel => double.Hypot(this[channel], other[channel])));
+    }
+
     /// <summary>The variance that noise gives a linear form, in the form's unit squared.</summary>
     public double VarianceOf(LinearForm form) => CovarianceOf(form, form);
 

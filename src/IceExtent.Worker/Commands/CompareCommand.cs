@@ -14,17 +14,24 @@ internal static class CompareCommand
     public static Command Make(CommandConsole console)
     {
         Option<string> output = new("--out") { Description = "The folder to write to.", HelpName = "DIR", DefaultValueFactory = _ => "comparison" };
+        Option<bool> sensors = new("--sensors") { Description = "Compare the sources instead, on the days that two of them have: totals by month, offsets of channels." };
         Option<bool> json = CommonOptions.Json();
         Command command = new(
             "compare",
-            "Run every method of a run file on the same days: totals, differences from the first method, and maps of their spread.\n\nExample:\n  iceextent compare run.toml --from 1984-12-25 --to 1984-12-27 --out comparison")
+            "Run every method of a run file on the same days: totals, differences from the first method, and maps of their spread.\n\nExample:\n  iceextent compare run.toml --from 1984-12-25 --to 1984-12-27 --out comparison\n  iceextent compare run.toml --sensors")
         {
-            output, json,
+            output, sensors, json,
         };
         RunFilePeriod period = new(command);
         command.SetAction((parsed, cancellation) =>
         {
             RunSettings settings = period.Load(parsed);
+            if (parsed.GetValue(sensors))
+            {
+                RunPlan both = RunPlanner.Plan(settings, period.From(parsed), period.To(parsed), cancellation);
+                return Task.FromResult(SensorReport.Write(settings, both, Path.GetFullPath(parsed.GetValue(output)!), Metadata(settings), parsed.GetValue(json), console, cancellation));
+            }
+
             if (settings.Methods.Count < 2)
             {
                 throw new ConfigurationException([new("IE1014", settings.RunFile, $"one method ({settings.Methods[0]})", "two methods or more", "Name several in methods = [...].")]);

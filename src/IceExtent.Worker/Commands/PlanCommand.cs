@@ -39,6 +39,7 @@ internal static class PlanCommand
             })
             .OrderBy(span => span.First)
             .ToList();
+        SensorSpans sensors = SensorSpans.Of(plan);
         if (json)
         {
             console.Print(JsonText.Of(
@@ -49,6 +50,10 @@ internal static class PlanCommand
                     settings.Methods,
                     settings.WriteGrids,
                     Sources = spans,
+                    sensors.Ruling,
+                    sensors.Overlaps,
+                    sensors.LeftToEarlier,
+                    sensors.HeldBack,
                     DaysLeftToAnEarlierSource = plan.Superseded,
                     plan.DaysWithoutInput,
                     plan.DatesWithoutInput,
@@ -64,9 +69,43 @@ internal static class PlanCommand
             console.Print(string.Create(CultureInfo.InvariantCulture, $"Sensor:  {span.Sensor,-12} {span.Days,6} days, {span.First:yyyy-MM-dd} to {span.Last:yyyy-MM-dd}"));
         }
 
+        if (settings.Sources.Count > 1)
+        {
+            Print(sensors, console);
+        }
+
         console.Print(string.Create(
             CultureInfo.InvariantCulture,
             $"To do:   {Counted.Days(plan.Days.Count)}; {plan.Gaps.Count} rejected, {plan.DaysWithoutInput} without input, {plan.Superseded} left to an earlier source"));
         console.Tell(plan.Gaps.Select(gap => gap.Fault));
     }
+
+    private static void Print(SensorSpans sensors, CommandConsole console)
+    {
+        foreach (RulingSpan span in sensors.Ruling)
+        {
+            string why = span.Why.Count == 1 ? span.Why[0].Reason : string.Join(", ", span.Why.Select(reason => $"{reason.Reason} ({Counted.Days(reason.Days)})"));
+            console.Print($"Rules:   {span.Sensor,-12} {Text(span.First, span.Last, span.Days)}: {why}");
+        }
+
+        foreach (PairSpan span in sensors.Overlaps)
+        {
+            console.Print($"Overlap: {Names(span)} {Text(span.First, span.Last, span.Days)}");
+        }
+
+        foreach (PairSpan span in sensors.LeftToEarlier)
+        {
+            console.Print($"Left:    {span.LaterSensor} to {span.EarlierSensor} {Text(span.First, span.Last, span.Days)}");
+        }
+
+        foreach (DaySpan span in sensors.HeldBack)
+        {
+            console.Print($"Unruled: {Text(span.First, span.Last, span.Days)} with input that first_day and last_day leave out");
+        }
+    }
+
+    private static string Names(PairSpan span) => $"{span.EarlierSensor} (source {span.Earlier}) and {span.LaterSensor} (source {span.Later})";
+
+    private static string Text(DateOnly first, DateOnly last, int days) =>
+        string.Create(CultureInfo.InvariantCulture, $"{Counted.Days(days),10}, {first:yyyy-MM-dd} to {last:yyyy-MM-dd}");
 }

@@ -26,6 +26,7 @@ internal static class SceneCommand
         Option<DateOnly?> from = CommonOptions.Day("--from", "The first day.");
         Option<DateOnly?> to = CommonOptions.Day("--to", "The last day.");
         Option<long> seed = new("--seed") { Description = "Another number gives other ice and weather.", HelpName = "N", DefaultValueFactory = _ => 1 };
+        Option<int> radiometer = CommonOptions.Count("--radiometer", "Another number is another radiometer over the same sea: other noise, other lost passes.", _ => Scene.FirstRadiometer, 1_000);
         Option<bool> noTruth = new("--no-truth") { Description = "Leave out the files of the true concentration." };
         Option<string?> output = new("--out") { Description = "The folder to write to; needed unless --score is given.", HelpName = "DIR" };
         Option<bool> score = new("--score") { Description = "Write nothing: run methods on the scene and print how they stand to its truth." };
@@ -42,21 +43,21 @@ internal static class SceneCommand
             "scene",
             "Write invented brightness temperatures with a known truth, and a run file for them.\n\nExample:\n  iceextent scene --grid north-25km --sensor ssmi-f13 --from 2000-01-01 --to 2000-01-31 --out scene\n  iceextent scene --score --methods nasa-team bristol --from 2000-01-01 --to 2000-12-31 --sensor ssmi-f13")
         {
-            grid, sensor, parameters, from, to, seed, noTruth, output, score, methods, coast, settings, successor, changeOver, every, json, workers,
+            grid, sensor, parameters, from, to, seed, radiometer, noTruth, output, score, methods, coast, settings, successor, changeOver, every, json, workers,
         };
         command.SetAction((parsed, cancellation) =>
         {
             (DateOnly first, DateOnly last) = (parsed.GetValue(from)!.Value, parsed.GetValue(to)!.Value);
             CommonOptions.CheckPeriod(first, last);
             (Scene scene, LandShare land, string gridName, string sensorName) = Load(
-                parsed.GetValue(grid)!, parsed.GetValue(sensor)!, parsed.GetValue(parameters), parsed.GetValue(seed));
+                parsed.GetValue(grid)!, parsed.GetValue(sensor)!, parsed.GetValue(parameters), parsed.GetValue(seed), parsed.GetValue(radiometer));
             if (parsed.GetValue(score))
             {
                 DateOnly[] wanted = [.. SceneScoring.Days(first, last, parsed.GetValue(every))];
                 List<(Scene, IReadOnlyList<DateOnly>)> scenes = [(scene, wanted)];
                 if (ChangeOver(parsed.GetValue(successor), parsed.GetValue(changeOver)) is { } change)
                 {
-                    Scene next = Load(parsed.GetValue(grid)!, parsed.GetValue(sensor)!, change.Scene, parsed.GetValue(seed)).Scene;
+                    Scene next = Load(parsed.GetValue(grid)!, parsed.GetValue(sensor)!, change.Scene, parsed.GetValue(seed), parsed.GetValue(radiometer)).Scene;
                     scenes = [(scene, [.. wanted.Where(day => day < change.Day)]), (next, [.. wanted.Where(day => day >= change.Day)])];
                 }
 
@@ -102,14 +103,14 @@ internal static class SceneCommand
         """);
 
     private static (Scene Scene, LandShare Land, string Grid, string Sensor) Load(
-        string grid, string sensor, string? parameters, long seed)
+        string grid, string sensor, string? parameters, long seed, int radiometer)
     {
         List<Fault> faults = [];
         ConfigFolder config = ConfigFolder.BesideProgram;
         string? gridPath = Resolve("--grid", grid, config.Grids, faults);
         string? sensorPath = Resolve("--sensor", sensor, config.Sensors, faults);
         LoadedGrid? loaded = gridPath is null ? null : GridLoader.Load(gridPath, faults);
-        Sensor? radiometer = sensorPath is null ? null : SensorLoader.Load(sensorPath, faults);
+        Sensor? sensed = sensorPath is null ? null : SensorLoader.Load(sensorPath, faults);
         string sceneName = parameters ?? (loaded?.Grid.Hemisphere == Hemisphere.South ? "south" : "north");
         string? scenePath = Resolve("--scene", sceneName, config.Scenes, faults);
         SceneParameters? scene = scenePath is null ? null : SceneLoader.Load(scenePath, faults);
@@ -119,7 +120,7 @@ internal static class SceneCommand
         }
 
         LandShare land = LandShareFile.Read(loaded!.LandPath, loaded.Grid);
-        return (new Scene(scene!, loaded.Grid, land, radiometer!, seed), land, Named(grid, gridPath!), Named(sensor, sensorPath!));
+        return (new Scene(scene!, loaded.Grid, land, sensed!, seed, radiometer), land, Named(grid, gridPath!), Named(sensor, sensorPath!));
     }
 
     private static string Named(string written, string path) => written.EndsWith(".toml", StringComparison.Ordinal) ? path : written;

@@ -43,6 +43,7 @@ internal static class RunFileLoader
         TiePointSettings? tiePoints = TiePointLoader.Load(layered, rules?.IceFraction ?? double.NaN);
         WeatherSettings? weather = WeatherLoader.Load(layered, grid?.Grid, folder, faults);
         IceMaskRules? iceMask = WeatherLoader.IceMask(layered);
+        OverlapSettings? overlap = OverlapLoader.Load(layered, rules);
         layered.RefuseUnknown();
         SourceLoader sources = new(folder, config, methods, needsFootprints: coast?.InTemperatures == true, needsSamples: tiePoints?.NeedsSamples(methods) ?? false);
         List<RunSource?> loaded = [.. scope.Tables("source").Select(source => sources.Load(source, grid?.Grid))];
@@ -73,6 +74,7 @@ internal static class RunFileLoader
             LandLimitFraction = landLimit.Value,
             ErrorLengthMeters = errorLength!.Value * 1_000.0,
             SmearingFactor = smearing!.Value,
+            Overlap = overlap!,
             Notice = notice,
             Sources = [.. loaded.OfType<RunSource>()],
         };

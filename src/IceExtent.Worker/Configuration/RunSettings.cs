@@ -10,7 +10,14 @@ namespace IceExtent.Worker.Configuration;
 /// <param name="SensorPath">Its configuration file.</param>
 /// <param name="Description">Its files and how they are read.</param>
 /// <param name="Status">Whether its days may still change.</param>
-internal sealed record RunSource(Sensor Sensor, string SensorPath, SourceDescription Description, DayStatus Status);
+internal sealed record RunSource(Sensor Sensor, string SensorPath, SourceDescription Description, DayStatus Status)
+{
+    /// <summary>The days it may rule.</summary>
+    public SourcePeriod Period { get; init; }
+
+    /// <summary>What is taken off its temperatures, or null.</summary>
+    public ChannelOffsets? Offsets { get; init; }
+}
 
 /// <summary>A checked run file. An instance is always valid.</summary>
 internal sealed record RunSettings
@@ -62,6 +69,9 @@ internal sealed record RunSettings
 
     /// <summary>How much a change from cell to cell widens a standard error, without unit.</summary>
     public required double SmearingFactor { get; init; }
+
+    /// <summary>How days that two sensors both saw are compared.</summary>
+    public required OverlapSettings Overlap { get; init; }
 
     /// <summary>A line that every output carries, or null.</summary>
     public required string? Notice { get; init; }

@@ -33,6 +33,8 @@ internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadO
         Sensor? sensor = sensorPath is null ? null : SensorLoader.Load(sensorPath, scope.Faults);
         IReadOnlyList<string> files = Files(scope);
         Dictionary<Channel, string> channels = Channels(scope);
+        SourcePeriod period = SourceAdjustments.Period(scope, sensor);
+        ChannelOffsets? offsets = SourceAdjustments.Offsets(scope, channels);
         string? status = scope.Name("status", ["final", "provisional"], required: false);
         RawLayout? raw = scope.Has("raw") && scope.Table("raw") is { } table ? Raw(table) : null;
         scope.RefuseUnknown();
@@ -45,7 +47,11 @@ internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadO
             sensor!,
             sensorPath!,
             new(files, grid, channels, raw),
-            status == "provisional" ? DayStatus.Provisional : DayStatus.Final);
+            status == "provisional" ? DayStatus.Provisional : DayStatus.Final)
+        {
+            Period = period,
+            Offsets = offsets,
+        };
     }
 
     private IReadOnlyList<string> Files(ConfigScope scope)

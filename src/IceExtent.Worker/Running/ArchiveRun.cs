@@ -177,6 +177,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             new("filling_neighbours", NeighboursText),
             new("polar_gap_rule", PolarGapRules.TextOf(settings.Rules.PolarGap)),
             new("weather_rules", settings.Weather.Text),
+            new("sensor_offsets_k", SourceOffsetText.OfAll(settings.Sources)),
             new("caution", Cautions.Text),
         ];
         if (settings.Notice is { } notice)

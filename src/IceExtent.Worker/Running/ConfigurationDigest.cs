@@ -39,7 +39,8 @@ internal static class ConfigurationDigest
         foreach (RunSource source in settings.Sources)
         {
             string channels = string.Join(' ', source.Description.Channels.OrderBy(pair => pair.Key).Select(pair => $"{ChannelNames.NameOf(pair.Key)}={pair.Value}"));
-            yield return FormattableString.Invariant($"{source.Sensor.Name} {source.Status} {channels} {source.Description.Raw}");
+            yield return FormattableString.Invariant($"{source.Sensor.Name} {source.Status} {channels} {source.Description.Raw}")
+                + FormattableString.Invariant($" {source.Period.First:yyyy-MM-dd} {source.Period.Last:yyyy-MM-dd} {SourceOffsetText.Of(source)}");
         }
     }
 

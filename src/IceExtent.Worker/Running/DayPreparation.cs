@@ -20,7 +20,7 @@ internal sealed class DayPreparation
         ICoastStep? coast = settings.Coast.InConcentrations ? ConcentrationStep() : null;
         RetrievalChoices choices = new(
             settings.Grid, settings.Ocean, settings.Land, settings.Methods, settings.Coast, settings.SmearingFactor, settings.TiePoints, settings.Weather);
-        sources = [.. settings.Sources.Select(source => new SourceRetrieval(choices, source.Sensor, [.. source.Description.Channels.Keys], MaskOf(source).Mask, coast))];
+        sources = [.. settings.Sources.Select(source => new SourceRetrieval(choices, source.Sensor, [.. source.Description.Channels.Keys], MaskOf(source).Mask, coast, source.Offsets))];
         gaps = [.. settings.Sources.Select(source => MaskOf(source).Gap)];
     }
 

@@ -4,7 +4,7 @@ using IceExtent.Storage.Faults;
 namespace IceExtent.Worker.Running;
 
 /// <summary>One day's brightness temperatures, ready to be retrieved from. Valid until its reader reads the next day.</summary>
-/// <param name="Planes">After the range check and the coast correction.</param>
+/// <param name="Planes">After the range check, the source's offsets and the coast correction.</param>
 /// <param name="Conditions">What both marked.</param>
 /// <param name="OutOfRange">Temperatures made missing.</param>
 internal readonly record struct ObservedDay(BrightnessPlanes Planes, CellConditions[] Conditions, int OutOfRange);
@@ -23,6 +23,7 @@ internal sealed class DayReader(DayPreparation preparation)
         BrightnessPlanes planes = PlanesFor(source.Channels);
         day.Source.Reader.Read(day.Input, planes);
         int outOfRange = DayRetrieval.CheckRange(planes, day.Source.Settings.Sensor.Range, conditions);
+        day.Source.Settings.Offsets?.Subtract(planes);
         source.Coast?.Correct(planes, conditions);
         return new(planes, conditions, outOfRange);
     }

@@ -61,6 +61,6 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
             settings.Grid,
             day.Date,
             variables,
-            [.. attributes, new("method", method.Name), new("method_source", method.Source), new("sensor", day.Source.Settings.Sensor.Name), new("tie_points", TiePointStates.NameOf(tiePoints))]);
+            [.. attributes, new("method", method.Name), new("method_source", method.Source), new("sensor", day.Source.Settings.Sensor.Name), new("sensor_offsets_k", SourceOffsetText.Of(day.Source.Settings)), new("tie_points", TiePointStates.NameOf(tiePoints))]);
     }
 }

@@ -16,6 +16,11 @@ internal sealed record PlannedDay(int Order, OpenedSource Source, SourceDay Inpu
 /// <summary>A source of the run with its reader.</summary>
 internal sealed record OpenedSource(int Index, RunSource Settings, IBrightnessSource Reader);
 
+/// <summary>The days that a source could give, whether or not its own period holds them.</summary>
+/// <param name="Source">The source.</param>
+/// <param name="Days">Days in its sensor's service with one input each, rising.</param>
+internal sealed record SourceOffer(OpenedSource Source, IReadOnlyList<SourceDay> Days);
+
 /// <summary>A day that has input which cannot be used, or a file that belongs to no day.</summary>
 /// <param name="Date">The day, or null where it cannot be told.</param>
 /// <param name="Fault">Why.</param>
@@ -27,10 +32,13 @@ internal sealed record Gap(DateOnly? Date, Fault Fault);
 /// <param name="Superseded">The number of days left to a source that stands earlier in the run file.</param>
 internal sealed record RunPlan(IReadOnlyList<PlannedDay> Days, IReadOnlyList<Gap> Gaps, int Superseded)
 {
+    /// <summary>What every source could give, in the order of the run file.</summary>
+    public IReadOnlyList<SourceOffer> Offers { get; init; } = [];
+
     /// <summary>The number of <see cref="DatesWithoutInput"/>.</summary>
     public int DaysWithoutInput => DatesWithoutInput.Count;
 
-    /// <summary>Calendar days between the first and the last planned day for which no file was listed at all.</summary>
+    /// <summary>Calendar days between the first and the last planned day without an input that a source may use.</summary>
     public IReadOnlyList<DateOnly> DatesWithoutInput
     {
         get

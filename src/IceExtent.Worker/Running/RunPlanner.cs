@@ -16,6 +16,7 @@ internal static class RunPlanner
     {
         List<Gap> gaps = [];
         SortedDictionary<DateOnly, (OpenedSource Source, SourceDay Input)> chosen = [];
+        List<SourceOffer> offers = [];
         int superseded = 0;
         for (int index = 0; index < settings.Sources.Count; index++)
         {
@@ -23,13 +24,23 @@ internal static class RunPlanner
             OpenedSource opened = new(index, source, BrightnessSources.Open(source.Description));
             SourceInventory inventory = opened.Reader.List(cancellation);
             gaps.AddRange(inventory.Faults.Select(fault => new Gap(null, fault)));
+            List<SourceDay> usable = [];
+            offers.Add(new(opened, usable));
             foreach (IGrouping<DateOnly, SourceDay> day in inventory.Days.Where(day => Wanted(day.Date)).GroupBy(day => day.Date))
             {
+                bool ruling = source.Period.Holds(day.Key);
                 if (Refusal(day, source) is { } fault)
                 {
-                    gaps.Add(new(day.Key, fault));
+                    if (ruling || !source.Sensor.Serves(day.Key)) // Two files for a day that is not wanted do no harm.
+                    {
+                        gaps.Add(new(day.Key, fault));
+                    }
+
+                    continue;
                 }
-                else if (!chosen.TryAdd(day.Key, (opened, day.First())))
+
+                usable.Add(day.First());
+                if (ruling && !chosen.TryAdd(day.Key, (opened, day.First())))
                 {
                     superseded++;
                 }
@@ -37,7 +48,7 @@ internal static class RunPlanner
         }
 
         PlannedDay[] days = [.. chosen.Values.Select((day, order) => new PlannedDay(order, day.Source, day.Input))];
-        return new(days, [.. gaps.OrderBy(gap => gap.Date ?? DateOnly.MinValue)], superseded);
+        return new(days, [.. gaps.OrderBy(gap => gap.Date ?? DateOnly.MinValue)], superseded) { Offers = offers };
 
         bool Wanted(DateOnly day) => (from is not { } first || day >= first) && (to is not { } last || day <= last);
     }

@@ -30,6 +30,7 @@ internal sealed class SourceRetrieval
     private readonly Sensor sensor;
     private readonly CellMask mask;
     private readonly ICoastStep? step;
+    private readonly ChannelNoise? offsetErrors;
     private readonly IReadOnlyList<DayRetrieval> withOwnPoints;
 
     /// <summary>Prepares.</summary>
@@ -38,9 +39,12 @@ internal sealed class SourceRetrieval
     /// <param name="available">The channels that its days have.</param>
     /// <param name="mask">Land and polar gap.</param>
     /// <param name="step">The correction of concentrations near land, or null.</param>
-    public SourceRetrieval(RetrievalChoices choices, Sensor sensor, IReadOnlyCollection<Channel> available, CellMask mask, ICoastStep? step)
+    /// <param name="offsets">What is taken off the temperatures, or null.</param>
+    public SourceRetrieval(
+        RetrievalChoices choices, Sensor sensor, IReadOnlyCollection<Channel> available, CellMask mask, ICoastStep? step, ChannelOffsets? offsets = null)
     {
         (this.choices, this.sensor, this.mask, this.step) = (choices, sensor, mask, step);
+        offsetErrors = offsets is { StandardErrorKelvins.Count: > 0 } ? new(offsets.StandardErrorKelvins) : null;
         Channels = Needed(available);
         Coast = choices.Coast.InTemperatures ? BrightnessStep() : null;
         withOwnPoints = [.. choices.Methods.Select(name => Make(name, Own, choices.Weather.ScreensFor(Own)))];
@@ -81,7 +85,7 @@ internal sealed class SourceRetrieval
     {
         IConcentrationMethod method = ConcentrationMethods.Create(name, tuning, choices.Grid.Hemisphere);
         RetrievalScatter scatter = tuning.Samples is { } samples ? RetrievalScatter.Of(method, samples) : sensor.Scatter;
-        return new(method, screens, scatter, mask, step, choices.SmearingFactor, sensor.NoiseKelvins);
+        return new(method, screens, scatter, mask, step, choices.SmearingFactor, sensor.NoiseKelvins, offsetErrors);
     }
 
     private Channel[] Needed(IReadOnlyCollection<Channel> available)
