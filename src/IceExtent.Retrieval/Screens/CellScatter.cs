@@ -5,8 +5,8 @@ namespace IceExtent.Retrieval;
 
 /// <summary>The standard error that the scatter of the two pure surfaces gives a mixed cell.</summary>
 /// <remarks>
-/// σ² = (1 − C)²·σ_water² + C²·σ_ice² + σ_noise². Source: [Tonboe2016], [Lavergne2019]. Footprint smearing at the edge is
-/// not in it.
+/// σ² = (1 − C)²·σ_water² + C²·σ_ice² + σ_noise². Source: [Tonboe2016], [Lavergne2019]. σ_ice goes from the scatter of loose ice to
+/// that of closed ice where self-tuning changes its projection: our own. Footprint smearing at the edge is not in it.
 /// </remarks>
 public static class CellScatter
 {
@@ -24,17 +24,16 @@ public static class CellScatter
             throw new ArgumentException("Both planes must have the same number of cells.", nameof(standardErrorFraction));
         }
 
-        Vector<float> water = new((float)scatter.OpenWaterFraction);
-        Vector<float> ice = new((float)scatter.ClosedIceFraction);
+        Surfaces surfaces = new(scatter);
         int cell = 0;
         for (; cell <= cells - Vector<float>.Count; cell += Vector<float>.Count)
         {
-            Of(new Vector<float>(totalFraction[cell..]), water, ice).CopyTo(standardErrorFraction[cell..]);
+            Of(new Vector<float>(totalFraction[cell..]), surfaces).CopyTo(standardErrorFraction[cell..]);
         }
 
         for (; cell < cells; cell++)
         {
-            standardErrorFraction[cell] = Of(new Vector<float>(totalFraction[cell]), water, ice)[0];
+            standardErrorFraction[cell] = Of(new Vector<float>(totalFraction[cell]), surfaces)[0];
         }
     }
 
@@ -56,31 +55,40 @@ public static class CellScatter
             throw new ArgumentException("All planes must have the same number of cells.", nameof(standardErrorFraction));
         }
 
-        Vector<float> water = new((float)scatter.OpenWaterFraction);
-        Vector<float> ice = new((float)scatter.ClosedIceFraction);
+        Surfaces surfaces = new(scatter);
         int cell = 0;
         for (; cell <= cells - Vector<float>.Count; cell += Vector<float>.Count)
         {
             Vector<float> noise = Vector.Min(new Vector<float>(noiseVariance[cell..]), Vector<float>.One);
-            Vector.SquareRoot(VarianceOf(new Vector<float>(totalFraction[cell..]), water, ice) + noise).CopyTo(standardErrorFraction[cell..]);
+            Vector.SquareRoot(VarianceOf(new Vector<float>(totalFraction[cell..]), surfaces) + noise).CopyTo(standardErrorFraction[cell..]);
         }
 
         for (; cell < cells; cell++)
         {
             Vector<float> noise = Vector.Min(new Vector<float>(noiseVariance[cell]), Vector<float>.One);
-            standardErrorFraction[cell] = Vector.SquareRoot(VarianceOf(new Vector<float>(totalFraction[cell]), water, ice) + noise)[0];
+            standardErrorFraction[cell] = Vector.SquareRoot(VarianceOf(new Vector<float>(totalFraction[cell]), surfaces) + noise)[0];
         }
     }
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)] // Called once a vector.
-    private static Vector<float> Of(Vector<float> fraction, Vector<float> water, Vector<float> ice) =>
-        Vector.SquareRoot(VarianceOf(fraction, water, ice));
+    private static Vector<float> Of(Vector<float> fraction, Surfaces surfaces) => Vector.SquareRoot(VarianceOf(fraction, surfaces));
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)] // Called once a vector.
-    private static Vector<float> VarianceOf(Vector<float> fraction, Vector<float> water, Vector<float> ice)
+    private static Vector<float> VarianceOf(Vector<float> fraction, Surfaces surfaces)
     {
-        Vector<float> fromWater = (Vector<float>.One - fraction) * water;
-        Vector<float> fromIce = fraction * ice;
+        Vector<float> closed = Vector.Min(
+            Vector.Max((fraction - surfaces.LooseTo) * surfaces.InverseChange, Vector<float>.Zero), Vector<float>.One);
+        Vector<float> fromWater = (Vector<float>.One - fraction) * surfaces.Water;
+        Vector<float> fromIce = fraction * (surfaces.Loose + (closed * surfaces.Closing));
         return (fromWater * fromWater) + (fromIce * fromIce);
+    }
+
+    private readonly struct Surfaces(RetrievalScatter scatter)
+    {
+        public readonly Vector<float> Water = new((float)scatter.OpenWaterFraction);
+        public readonly Vector<float> Loose = new((float)scatter.LooseIceFraction);
+        public readonly Vector<float> Closing = new((float)(scatter.ClosedIceFraction - scatter.LooseIceFraction));
+        public readonly Vector<float> LooseTo = new((float)RetrievalScatter.LooseTo);
+        public readonly Vector<float> InverseChange = new((float)(1.0 / (RetrievalScatter.ClosedFrom - RetrievalScatter.LooseTo)));
     }
 }

@@ -33,6 +33,9 @@ public sealed class ErrorBudget
         double iceVariance = Math.Min(noise.VarianceOf(pure.FirstYear), noise.VarianceOf(pure.Multiyear));
         SurfaceScatter = scatterHasNoise
             ? new(Rest(scatter.OpenWaterFraction, noise.VarianceOf(pure.OpenWater)), Rest(scatter.ClosedIceFraction, iceVariance))
+            {
+                LooseIceFraction = Rest(scatter.LooseIceFraction, iceVariance),
+            }
             : scatter;
     }
 

@@ -30,7 +30,19 @@ public sealed record KelvinRange(double LowestKelvins, double HighestKelvins);
 /// <param name="ClosedIceFraction">Standard deviation of concentration over closed ice. Unit: 1.</param>
 public sealed record RetrievalScatter(double OpenWaterFraction, double ClosedIceFraction)
 {
-    /// <summary>The scatter of a method over samples: their covariance through its derivatives at their centres.</summary>
+    /// <summary>
+    /// Standard deviation over closed ice of what the method does with loose ice: that of a cell at half cover is half of it. The same as
+    /// <see cref="ClosedIceFraction"/> unless samples say otherwise. Unit: 1.
+    /// </summary>
+    public double LooseIceFraction { get; init; } = ClosedIceFraction;
+
+    /// <summary>Up to this concentration ice is loose, and from <see cref="ClosedFrom"/> on it is closed; a straight line between. Unit: 1.</summary>
+    public static double LooseTo { get; } = SelfTuning.FixedBlend.From;
+
+    /// <inheritdoc cref="LooseTo"/>
+    public static double ClosedFrom { get; } = SelfTuning.FixedBlend.To;
+
+    /// <summary>The scatter of a method over samples: their covariance through its derivatives at their centres, and half way between.</summary>
     /// <param name="method">The tuned method; the samples hold its channels.</param>
     /// <param name="samples">The samples of the day's window, instrument noise included.</param>
     /// <remarks>Source: [Tonboe2016], [Lavergne2019].</remarks>
@@ -38,9 +50,13 @@ public sealed record RetrievalScatter(double OpenWaterFraction, double ClosedIce
     {
         ArgumentNullException.ThrowIfNull(method);
         ArgumentNullException.ThrowIfNull(samples);
-        return new(Scatter(samples.OpenWater), Scatter(samples.ClosedIce));
+        ChannelKelvins half = samples.HalfCover;
+        return new(Scatter(samples.OpenWater, samples.OpenWater.Center), Scatter(samples.ClosedIce, samples.ClosedIce.Center))
+        {
+            LooseIceFraction = Scatter(samples.ClosedIce, half),
+        };
 
-        double Scatter(SurfaceMoments surface) => Math.Sqrt(surface.VarianceOf(method.TangentAt(surface.Center)));
+        double Scatter(SurfaceMoments surface, ChannelKelvins at) => Math.Sqrt(surface.VarianceOf(method.TangentAt(at)));
     }
 }
 

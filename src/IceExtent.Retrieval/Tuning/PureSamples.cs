@@ -7,4 +7,9 @@ namespace IceExtent.Retrieval;
 /// <param name="BlendFrom">See <see cref="TuningRules.BlendFrom"/>.</param>
 /// <param name="BlendTo">See <see cref="TuningRules.BlendTo"/>.</param>
 public sealed record PureSamples(
-    SurfaceMoments OpenWater, SurfaceMoments ClosedIce, IReadOnlyList<double> IceDirection, double BlendFrom, double BlendTo);
+    SurfaceMoments OpenWater, SurfaceMoments ClosedIce, IReadOnlyList<double> IceDirection, double BlendFrom, double BlendTo)
+{
+    /// <summary>The mixture of both centres in equal parts.</summary>
+    public ChannelKelvins HalfCover => new(OpenWater.Channels.ToDictionary(
+        channel => channel, channel => 0.5 * (OpenWater.MeanKelvins(channel) + ClosedIce.MeanKelvins(channel))));
+}

@@ -21,6 +21,7 @@ internal static class ScoreReport
                 score.ExtentErrorFraction,
                 score.ExtentRootMeanSquareFraction,
                 score.ExtentShare95,
+                score.ExtentStandardErrorFraction,
                 score.EdgeErrorKilometers,
                 Classes = score.Classes.Select((cells, index) => new
                 {
@@ -48,13 +49,13 @@ internal static class ScoreReport
         }
 
         console.Print(string.Empty);
-        console.Print("Extent of the observed cells: mean and root mean square error, days whose 95 % limits hold the truth, edge error");
-        console.Print("method         season  days    mean     rms  in 95 %  edge km");
+        console.Print("Extent of the observed cells: mean and root mean square error, mean standard error, days whose 95 % limits hold the truth, edge error");
+        console.Print("method         season  days    mean     rms      se  in 95 %  edge km");
         foreach (SeasonScore score in scores)
         {
             console.Print(string.Create(
                 CultureInfo.InvariantCulture,
-                $"{score.Method,-14} {score.Season,-6} {score.Days,5} {score.ExtentErrorFraction,7:P1} {score.ExtentRootMeanSquareFraction,7:P1} {score.ExtentShare95,8:P0} {score.EdgeErrorKilometers,8:F1}"));
+                $"{score.Method,-14} {score.Season,-6} {score.Days,5} {score.ExtentErrorFraction,7:P1} {score.ExtentRootMeanSquareFraction,7:P1} {score.ExtentStandardErrorFraction,7:P1} {score.ExtentShare95,8:P0} {score.EdgeErrorKilometers,8:F1}"));
         }
 
         PrintTrends(trends, console);

@@ -11,6 +11,7 @@ namespace IceExtent.Worker.Running;
 /// <param name="ExtentErrorFraction">Mean over days of (retrieved − true extent) / true extent.</param>
 /// <param name="ExtentRootMeanSquareFraction">Root mean square of the same.</param>
 /// <param name="ExtentShare95">Share of days whose 95 % limits of extent hold the true extent.</param>
+/// <param name="ExtentStandardErrorFraction">Mean over days of the standard error of extent / true extent.</param>
 /// <param name="EdgeErrorKilometers">Mean distance between the edges.</param>
 internal sealed record SeasonScore(
     string Method,
@@ -20,6 +21,7 @@ internal sealed record SeasonScore(
     double ExtentErrorFraction,
     double ExtentRootMeanSquareFraction,
     double ExtentShare95,
+    double ExtentStandardErrorFraction,
     double EdgeErrorKilometers);
 
 /// <summary>How the error of one method's extent drifts over the scored period.</summary>
@@ -73,6 +75,7 @@ internal static class ScoreSummary
             errors.DefaultIfEmpty(double.NaN).Average(),
             Math.Sqrt(errors.DefaultIfEmpty(double.NaN).Average(error => error * error)),
             days.Length == 0 ? double.NaN : (double)held / days.Length,
+            days.Select(day => day.ExtentError / day.Score.TrueExtentSquareMeters).DefaultIfEmpty(double.NaN).Average(),
             edges.DefaultIfEmpty(double.NaN).Average());
     }
 }
