@@ -46,6 +46,9 @@ public enum CellConditions : ushort
     /// <summary>In the polar gap, and given the solution of Laplace's equation there.</summary>
     FilledPolarGap = 1 << 11,
 
+    /// <summary>Empty, and given a value from days before and after; the bit that says why it was empty stays.</summary>
+    FilledFromDays = 1 << 12,
+
     /// <summary>The month's ice mask has no ice here: set to open water.</summary>
     OutsideIceMask = 1 << 13,
 

@@ -67,7 +67,52 @@ public sealed class ConcentrationPlanes
 
     /// <summary>Whether a cell's concentration was retrieved: there, and not filled in.</summary>
     internal bool IsObserved(int cell) =>
+        !float.IsNaN(total[cell])
+            && (conditions[cell] & (ushort)(CellConditions.FilledFromNeighbours | CellConditions.FilledPolarGap | CellConditions.FilledFromDays)) == 0;
+
+    /// <summary>Whether a cell has what was seen there, on the day itself or on days near it: what a polar gap may be filled from.</summary>
+    internal bool IsSeenInPlace(int cell) =>
         !float.IsNaN(total[cell]) && (conditions[cell] & (ushort)(CellConditions.FilledFromNeighbours | CellConditions.FilledPolarGap)) == 0;
+
+    /// <summary>Takes over every plane of another day of the same grid.</summary>
+    /// <exception cref="ArgumentException">The other one is of another grid.</exception>
+    public void CopyFrom(ConcentrationPlanes other)
+    {
+        ArgumentNullException.ThrowIfNull(other);
+        if (other.CellCount != CellCount)
+        {
+            throw new ArgumentException($"The planes have {other.CellCount} cells, not {CellCount}.", nameof(other));
+        }
+
+        other.total.CopyTo(total, 0);
+        other.multiyear.CopyTo(multiyear, 0);
+        other.standardError.CopyTo(standardError, 0);
+        other.firstYear.CopyTo(firstYear, 0);
+        other.unscreened.CopyTo(unscreened, 0);
+        other.conditions.CopyTo(conditions, 0);
+    }
+
+    /// <summary>Makes a day without an observation: every concentration missing, land and polar gap as the mask has them.</summary>
+    /// <exception cref="ArgumentException">The mask is of another grid.</exception>
+    public void MakeUnobserved(CellMask mask)
+    {
+        ArgumentNullException.ThrowIfNull(mask);
+        if (mask.Conditions.Length != CellCount)
+        {
+            throw new ArgumentException($"The mask has {mask.Conditions.Length} cells, not {CellCount}.", nameof(mask));
+        }
+
+        foreach (float[] plane in (ReadOnlySpan<float[]>)[total, multiyear, standardError, firstYear, unscreened])
+        {
+            plane.AsSpan().Fill(float.NaN);
+        }
+
+        for (int cell = 0; cell < conditions.Length; cell++)
+        {
+            CellConditions masked = mask.Conditions[cell];
+            conditions[cell] = (ushort)(masked == CellConditions.None ? CellConditions.NoObservation : masked);
+        }
+    }
 
     /// <summary>Fills a cell in. Multiyear ice may be NaN; first-year ice is the rest, never negative.</summary>
     internal void Put(int cell, double totalFraction, double multiyearFraction, double standardErrorFraction)

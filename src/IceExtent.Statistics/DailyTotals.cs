@@ -15,7 +15,7 @@ namespace IceExtent.Statistics;
 public readonly record struct DailyTotals(
     double Extent, double IceArea, double MarginalZone, double Pack, double Ocean, double Observed, double Filled, double PolarGap)
 {
-    private const CellConditions Unplain = CellConditions.PolarGap | CellConditions.FilledFromNeighbours;
+    private const CellConditions Unplain = CellConditions.PolarGap | CellConditions.FilledFromNeighbours | CellConditions.FilledFromDays;
 
     /// <summary>The share of the ocean outside the polar gap that was observed; 0 where there is no such ocean.</summary>
     public double ObservedShare => ShareOfSeen(Observed);

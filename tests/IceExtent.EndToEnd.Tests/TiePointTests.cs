@@ -53,10 +53,13 @@ public sealed class TiePointTests : IDisposable
     }
 
     /// <summary>The same bytes for any number of workers, and for a part of the period asked for by itself.</summary>
-    [Fact]
-    public async Task Run_InPartsOrByManyWorkers_GivesTheSameNumbers()
+    [Theory]
+    [InlineData("")]
+    [InlineData("[filling]\ndays_before = 2\ndays_after = 2\nmissing_days = true\n")] // Days read for filling have tie points of their own.
+    public async Task Run_InPartsOrByManyWorkers_GivesTheSameNumbers(string filling)
     {
-        string runFile = await SceneAsync("[\"nasa-team\", \"bootstrap\"]", "[tie_points]\nmoving = true\ndays_behind = 2\ndays_ahead = 1\n");
+        string runFile = await SceneAsync("[\"nasa-team\", \"bootstrap\"]", "[tie_points]\nmoving = true\ndays_behind = 2\ndays_ahead = 1\n" + filling);
+        File.Delete(Path.Combine(folder, "brightness", "2003-02-04.nc")); // At the seam of the two parts.
         string archive = Path.Combine(folder, "archive");
         await ProgramRun.OfAsync("run", runFile, "--workers", "1");
         SortedDictionary<string, byte[]> whole = ArchiveFiles.Of(archive);

@@ -28,6 +28,8 @@ public sealed class RunFileTests : IDisposable
         Assert.Equal(5, settings.Sources[0].Description.Files.Count);
         Assert.Equal(16, settings.Ocean.Count(ocean => ocean));
         Assert.Equal(0, settings.LeastNeighbours);
+        Assert.Null(settings.DayFilling);
+        Assert.False(settings.FillMissingDays);
         Assert.Equal(PolarGapRule.CountAsIce, settings.Rules.PolarGap);
         Assert.Equal(0.5, settings.LeastRimShare);
     }
@@ -45,6 +47,21 @@ public sealed class RunFileTests : IDisposable
         Assert.Equal(0.5, settings.LeastRimShare);
     }
 
+    [Theory]
+    [InlineData("days_before = 3\ndays_after = 5\nmissing_days = true\nchange_per_day = 0.2", 3, 5, 0.2, true)]
+    [InlineData("days_before = 15", 15, 0, 0.1, false)]
+    [InlineData("days_after = 1", 0, 1, 0.1, false)]
+    public void Load_FillingOverDays_RulesOverTheDefaults(string keys, int before, int after, double change, bool missingDays)
+    {
+        run.WriteDay(new(1990, 1, 1), _ => 0.5);
+        run.WriteRunFile("[filling]\n" + keys);
+
+        RunSettings settings = RunFileLoader.Load(run.RunFile, ConfigFolder.BesideProgram);
+
+        Assert.Equal(new(before, after, change), settings.DayFilling);
+        Assert.Equal(missingDays, settings.FillMissingDays);
+    }
+
     public static TheoryData<string, string, string, string> Faults() => new()
     {
         // What stands before the source, what in it, the code, and words the message must hold.
@@ -60,6 +77,14 @@ public sealed class RunFileTests : IDisposable
         { "[totals]\nice_fraction = 0.9", "", "IE1011", "not above ice_fraction = 0.9" },
         { "[land]\nlimit = 0.5", "", "IE1003", "limit_fraction" },
         { "[filling]\nneighbours = 9", "", "IE1006", "a whole number from 0 to 8" },
+        { "[filling]\ndays_before = 16", "", "IE1006", "a whole number from 0 to 15" },
+        { "[filling]\ndays_after = -1", "", "IE1006", "a whole number from 0 to 15" },
+        { "[filling]\ndays_after = 1.5", "", "IE1005", "a whole number from 0 to 15" },
+        { "[filling]\ndays_befor = 1", "", "IE1003", "Did you mean days_before?" },
+        { "[filling]\nmissing_days = 1", "", "IE1005", "true or false" },
+        { "[filling]\nchange_per_day = 3", "", "IE1006", "0 to 0.5" },
+        { "[filling]\nmissing_days = true", "", "IE1011", "days_before = 0 and days_after = 0" },
+        { "[filling]\nmissing_days = true\ndays_before = 2", "", "IE1011", "never carried on from one side" },
         { "[filling]\nneighbours = -1", "", "IE1006", "a whole number from 0 to 8" },
         { "[filling]\nneighbours = 2.5", "", "IE1005", "a whole number from 0 to 8" },
         { "[filling]\nneighbors = 4", "", "IE1003", "Did you mean neighbours?" },

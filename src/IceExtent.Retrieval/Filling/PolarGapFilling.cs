@@ -2,7 +2,8 @@ namespace IceExtent.Retrieval;
 
 /// <summary>Fills the polar gap of one day after another. Holds working memory: not shared between threads.</summary>
 /// <remarks>
-/// Only observed rim cells count. Where a rim cell is empty, nothing flows through its side (the natural condition),
+/// Only rim cells seen in their place count, on the day or on days near it: as the solution is linear in the rim, a gap whose
+/// rim was interpolated in time is the interpolated gap. Where a rim cell is empty, nothing flows through its side (the natural condition),
 /// which takes that side out of the matrix. With A the matrix of the whole rim, E the affected border cells and D their
 /// lost sides, (A − E·D·Eᵀ)·u = b has its border values from the small system (1 − D½·G·D½)·y = D½·(A⁻¹·b), where G is A⁻¹
 /// between border cells and y = D½·u; then A·u = b + E·D½·y. So one factor serves every day, and the answer is exact
@@ -86,7 +87,7 @@ public sealed class PolarGapFilling
         observedSides.AsSpan().Clear();
         foreach (RimSide side in system.Sides)
         {
-            bool observed = planes.IsObserved(side.RimCell);
+            bool observed = planes.IsSeenInPlace(side.RimCell);
             observedSides[side.Piece] += observed ? 1 : 0;
             lostSides[side.BorderCell] += observed ? 0 : 1;
         }
@@ -135,7 +136,7 @@ public sealed class PolarGapFilling
         borderSums.AsSpan().Clear();
         foreach (RimSide side in system.Sides)
         {
-            borderSums[side.BorderCell] += planes.IsObserved(side.RimCell) ? plane[side.RimCell] : 0.0;
+            borderSums[side.BorderCell] += planes.IsSeenInPlace(side.RimCell) ? plane[side.RimCell] : 0.0;
         }
 
         ReadOnlySpan<double> response = system.BorderResponse;

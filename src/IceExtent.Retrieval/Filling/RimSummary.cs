@@ -15,7 +15,7 @@ internal readonly record struct RimSummary(double Lowest, double Highest, double
         bool types = true;
         foreach (int cell in rim)
         {
-            if (!planes.IsObserved(cell))
+            if (!planes.IsSeenInPlace(cell))
             {
                 continue;
             }

@@ -59,7 +59,8 @@ public sealed record DigestedFile(string Path, string Sha256);
 /// <param name="PolarGapFallbacks">Of the days done, those whose polar gap was to be filled and was not, for some method: too little of its rim was observed.</param>
 /// <param name="TiePointFallbacks">Of the days done, those whose tie points were to move and did not, or not all: too few samples.</param>
 /// <param name="EmptiedDays">Of the days done, those on which screens, masks and coast correction left no cell that counts as ice, for some method, though there were such cells before them.</param>
-public sealed record RunCounts(int DaysDone, int Gaps, int Rejected, int PolarGapFallbacks = 0, int TiePointFallbacks = 0, int EmptiedDays = 0);
+/// <param name="DaysFilled">Days without usable input whose numbers are wholly from days before and after; neither done nor gaps.</param>
+public sealed record RunCounts(int DaysDone, int Gaps, int Rejected, int PolarGapFallbacks = 0, int TiePointFallbacks = 0, int EmptiedDays = 0, int DaysFilled = 0);
 
 /// <summary>How one day of one hemisphere went.</summary>
 public enum DayOutcome
@@ -72,6 +73,9 @@ public enum DayOutcome
 
     /// <summary>There was input, and it could not be used.</summary>
     Rejected,
+
+    /// <summary>It had no usable input, and its numbers are wholly from days before and after.</summary>
+    Filled,
 }
 
 /// <summary>One day of one hemisphere in a run.</summary>
@@ -97,6 +101,7 @@ public sealed record DayRecord(
 /// <param name="CoastCorrected">The coast correction changed the cell.</param>
 /// <param name="OutsideIceMask">The screens left ice in it, and it lies outside the month's ice mask.</param>
 /// <param name="WarmWater">The screens left ice in it, in a sea that is too warm in the month.</param>
+/// <param name="FilledFromDays">Filled from days before and after; 0 in a record that does not say it.</param>
 public sealed record CellCounts(
     string Method,
     int OutOfRange,
@@ -109,4 +114,5 @@ public sealed record CellCounts(
     int PolarGapFilled = 0,
     int CoastCorrected = 0,
     int OutsideIceMask = 0,
-    int WarmWater = 0);
+    int WarmWater = 0,
+    int FilledFromDays = 0);

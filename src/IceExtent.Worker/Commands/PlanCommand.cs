@@ -21,7 +21,7 @@ internal static class PlanCommand
             RunSettings settings = period.Load(parsed);
             RunPlan plan = RunPlanner.Plan(settings, period.From(parsed), period.To(parsed), cancellation);
             Write(settings, plan, parsed.GetValue(json), console);
-            return Task.FromResult(plan.Days.Count == 0 ? ExitCode.NoUsableInput : plan.Gaps.Count > 0 ? ExitCode.DoneWithGaps : ExitCode.Done);
+            return Task.FromResult(plan.OutputCount == 0 ? ExitCode.NoUsableInput : plan.Gaps.Count > 0 ? ExitCode.DoneWithGaps : ExitCode.Done);
         });
         return command;
     }
@@ -57,6 +57,8 @@ internal static class PlanCommand
                     DaysLeftToAnEarlierSource = plan.Superseded,
                     plan.DaysWithoutInput,
                     plan.DatesWithoutInput,
+                    plan.DaysToFill,
+                    MarginDays = plan.Margin.Count,
                     Rejected = plan.Gaps.Select(gap => new { gap.Date, gap.Fault.Code, Text = gap.Fault.ToString() }),
                 }));
             return;
@@ -77,6 +79,13 @@ internal static class PlanCommand
         console.Print(string.Create(
             CultureInfo.InvariantCulture,
             $"To do:   {Counted.Days(plan.Days.Count)}; {plan.Gaps.Count} rejected, {plan.DaysWithoutInput} without input, {plan.Superseded} left to an earlier source"));
+        if (settings.DayFilling is not null)
+        {
+            console.Print(string.Create(
+                CultureInfo.InvariantCulture,
+                $"Filling: {Counted.Days(plan.DaysToFill.Count)} without usable input made from others; {Counted.Days(plan.Margin.Count)} outside the period read for it"));
+        }
+
         console.Tell(plan.Gaps.Select(gap => gap.Fault));
     }
 

@@ -37,6 +37,11 @@ internal static class RunCommand
         RunOutcome outcome = await progress.ShowAsync(() => new ArchiveRun(settings, options, TimeProvider.System).RunAsync(progress, cancellation));
         console.Tell(outcome.Gaps.Select(gap => gap.Fault));
         console.Print($"{Counted.Days(outcome.DaysDone)} done, {outcome.Gaps.Count} rejected, {Counted.Days(outcome.Plan.DaysWithoutInput)} between without input.");
+        if (outcome.DaysFilled > 0)
+        {
+            console.Print($"{Counted.Days(outcome.DaysFilled)} without usable input made wholly from days before and after.");
+        }
+
         if (outcome.DaysRemoved > 0)
         {
             console.Print($"{Counted.Days(outcome.DaysRemoved)} taken out of the archive: their input can no longer be used.");

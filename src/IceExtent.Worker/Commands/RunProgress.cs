@@ -41,13 +41,14 @@ internal sealed class RunProgress(CommandConsole console) : IRunObserver
 
     public void Planned(RunPlan plan)
     {
-        total = plan.Days.Count;
+        total = plan.OutputCount;
         watch.Start();
         if (bar is null)
         {
-            console.Say(plan.Days.Count == 0
+            DateOnly[] dates = [.. plan.Days.Select(day => day.Date).Concat(plan.DaysToFill).Order()];
+            console.Say(dates.Length == 0
                 ? "No day to process."
-                : string.Create(CultureInfo.InvariantCulture, $"{Counted.Days(total)} to process, {plan.Days[0].Date:yyyy-MM-dd} to {plan.Days[^1].Date:yyyy-MM-dd}."));
+                : string.Create(CultureInfo.InvariantCulture, $"{Counted.Days(total)} to process, {dates[0]:yyyy-MM-dd} to {dates[^1]:yyyy-MM-dd}."));
             return;
         }
 
@@ -63,13 +64,13 @@ internal sealed class RunProgress(CommandConsole console) : IRunObserver
         if (bar is not null)
         {
             bar.Value = done;
-            bar.Description = string.Create(CultureInfo.InvariantCulture, $"{result.Day.Date:yyyy-MM-dd} {perSecond,6:F0} days/s");
+            bar.Description = string.Create(CultureInfo.InvariantCulture, $"{result.Date:yyyy-MM-dd} {perSecond,6:F0} days/s");
         }
         else if (watch.Elapsed - lastLine >= LineEvery)
         {
             lastLine = watch.Elapsed;
             console.Say(string.Create(
-                CultureInfo.InvariantCulture, $"{result.Day.Date:yyyy-MM-dd}: {done} of {total} days, {perSecond:F0} days/s, {(total - done) / perSecond:F0} s left"));
+                CultureInfo.InvariantCulture, $"{result.Date:yyyy-MM-dd}: {done} of {total} days, {perSecond:F0} days/s, {(total - done) / perSecond:F0} s left"));
         }
     }
 }

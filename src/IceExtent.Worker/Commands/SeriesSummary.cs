@@ -30,8 +30,9 @@ internal sealed class SeriesSummary
         {
             days++;
             emptiedDays += result.Methods.Any(method => method.Emptied) ? 1 : 0;
-            poorDays += first.ObservedShare < WellObservedShare ? 1 : 0;
-            lowestShare = Math.Min(lowestShare, first.ObservedShare);
+            double share = result.Observed ? first.ObservedShare : first.FilledShare; // A day made from others has nothing of its own.
+            poorDays += share < WellObservedShare ? 1 : 0;
+            lowestShare = Math.Min(lowestShare, share);
         }
     }
 

@@ -38,6 +38,7 @@ internal static class RunFileLoader
         double? errorLength = layered.Number("standard_error", "correlation_length_km", 1.0, 3_000.0, "km");
         double? smearing = layered.Number("standard_error", "smearing_factor", 0.0, 1.0, string.Empty);
         int? neighbours = layered.WholeNumber("filling", "neighbours", 0, NeighbourFilling.MostNeighbours);
+        DayFillingSettings? overDays = DayFillingSettings.Load(layered);
         double? rimShare = layered.Number("polar_gap", "least_rim_share", 0.01, 1.0, string.Empty);
         CoastSettings? coast = CoastLoader.Load(layered, grid?.Grid, folder, faults);
         TiePointSettings? tiePoints = TiePointLoader.Load(layered, rules?.IceFraction ?? double.NaN);
@@ -70,6 +71,8 @@ internal static class RunFileLoader
             WriteGrids = writeGrids ?? true,
             Rules = rules!,
             LeastNeighbours = neighbours!.Value,
+            DayFilling = overDays!.Rules,
+            FillMissingDays = overDays.MissingDays,
             LeastRimShare = rimShare!.Value,
             LandLimitFraction = landLimit.Value,
             ErrorLengthMeters = errorLength!.Value * 1_000.0,

@@ -60,6 +60,12 @@ internal sealed record RunSettings
     /// <summary>The observed neighbours from which on an empty cell is filled; 0 where none is.</summary>
     public required int LeastNeighbours { get; init; }
 
+    /// <summary>How empty cells are filled from days before and after, or null where they are not.</summary>
+    public required DayFillingRules? DayFilling { get; init; }
+
+    /// <summary>Whether days without usable input are made wholly from days before and after.</summary>
+    public required bool FillMissingDays { get; init; }
+
     /// <summary>The share of the polar gap's rim that must be observed where the gap is filled. Unit: 1.</summary>
     public required double LeastRimShare { get; init; }
 

@@ -18,10 +18,11 @@ internal sealed record RunOptions(DateOnly? From, DateOnly? To, int Workers, IRe
 /// <param name="ExitCode">One of <see cref="Worker.ExitCode"/>.</param>
 /// <param name="Plan">What was planned.</param>
 /// <param name="DaysDone">Days with numbers.</param>
+/// <param name="DaysFilled">Days without usable input whose numbers are wholly from days before and after.</param>
 /// <param name="Gaps">Everything that could not be used.</param>
 /// <param name="DaysRemoved">Days taken out of the archive because their input can no longer be used.</param>
 /// <param name="RecordPath">The run record.</param>
-internal sealed record RunOutcome(int ExitCode, RunPlan Plan, int DaysDone, IReadOnlyList<Gap> Gaps, int DaysRemoved, string RecordPath);
+internal sealed record RunOutcome(int ExitCode, RunPlan Plan, int DaysDone, int DaysFilled, IReadOnlyList<Gap> Gaps, int DaysRemoved, string RecordPath);
 
 /// <summary>One run over an archive: plan, process, publish, record.</summary>
 internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeProvider clock)
@@ -51,19 +52,20 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         RunPlan plan = RunPlanner.Plan(settings, options.From, options.To, cancellation);
         observer.Planned(plan);
         series.CheckSameConfiguration(
-            plan.Days.Select(day => day.Date).Concat(plan.Gaps.Select(gap => gap.Date).OfType<DateOnly>()).Select(day => day.Year).Distinct(), digest);
+            plan.Days.Select(day => day.Date).Concat(plan.DaysToFill).Concat(plan.Gaps.Select(gap => gap.Date).OfType<DateOnly>()).Select(day => day.Year).Distinct(), digest);
 
         gaps.AddRange(plan.Gaps);
-        DateOnly[] lost = [.. plan.Gaps.Select(gap => gap.Date).OfType<DateOnly>().Except(plan.Days.Select(day => day.Date)).Distinct()];
+        DateOnly[] lost = [.. plan.Gaps.Select(gap => gap.Date).OfType<DateOnly>().Except(plan.Days.Select(day => day.Date)).Except(plan.DaysToFill)];
         series.Remove(lost);
         tiePoints.Remove(lost);
-        RemoveGrids(lost);
+        Array.ForEach(lost, day => RemoveGrids(day, settings.Methods));
         await ProcessAsync(plan, await preparing, (series, tiePoints), GlobalAttributes(digest), observer, cancellation);
 
         int done = dayRecords.Count(day => day.Outcome == DayOutcome.Done);
-        int exitCode = done == 0 ? ExitCode.NoUsableInput : gaps.Count > 0 ? ExitCode.DoneWithGaps : ExitCode.Done;
+        int filled = dayRecords.Count(day => day.Outcome == DayOutcome.Filled);
+        int exitCode = done + filled == 0 ? ExitCode.NoUsableInput : gaps.Count > 0 ? ExitCode.DoneWithGaps : ExitCode.Done;
         string recordPath = WriteRecord(plan, started, digest, done, exitCode);
-        return new(exitCode, plan, done, gaps, series.DaysRemoved, recordPath);
+        return new(exitCode, plan, done, filled, gaps, series.DaysRemoved, recordPath);
     }
 
     private async Task ProcessAsync(
@@ -74,47 +76,64 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         IRunObserver observer,
         CancellationToken cancellation)
     {
-        if (plan.Days.Count == 0)
+        if (plan.OutputCount == 0)
         {
             return;
         }
 
+        filesRead.UnionWith(plan.Margin.SelectMany(day => day.Input.Files));
         SampleSeries? samples = SampleSeries.For(preparation, plan, (options.From, options.To), options.Workers, cancellation);
         GridArchive? grids = settings.WriteGrids ? new(settings, layout, attributes) : null;
-        await RunPipeline.RunAsync(
-            plan.Days,
-            Math.Min(options.Workers, plan.Days.Count),
-            () => new DayWorker(preparation, samples, grids),
-            result =>
-            {
-                series.Daily.Add(result);
-                series.TiePoints.Add(result);
-                Remember(result);
-                observer.DayDone(result);
-            },
-            cancellation);
-        series.Daily.Flush();
-        series.TiePoints.Flush();
-    }
-
-    private void Remember(DayResult result)
-    {
-        filesRead.UnionWith(result.Day.Input.Files);
-        if (result.Fault is { } fault)
+        if (settings.DayFilling is { } rules)
         {
-            gaps.Add(new(result.Day.Date, fault));
-            RemoveGrids([result.Day.Date]);
+            DayWindow window = new(plan, rules, () => new(settings.Grid.CellCount, settings.Methods.Count));
+            await RunPipeline.RunAsync(
+                window, Math.Min(options.Workers, window.Steps.Count), () => new WindowWorker(preparation, samples, window, grids), Receive, cancellation);
+            gaps.AddRange(window.FaultsOf(plan.Margin).Select(fault => new Gap(null, fault)));
+        }
+        else
+        {
+            await RunPipeline.RunAsync(plan.Days, Math.Min(options.Workers, plan.Days.Count), () => new DayWorker(preparation, samples, grids), Receive, cancellation);
         }
 
-        tiePointFallbacks += result.Tuned is { } tuned && tuned.State != TiePointState.Moving ? 1 : 0;
-        polarGapFallbacks += result.Methods.Any(method => method.PolarGapFilled == 0) ? 1 : 0;
+        series.Daily.Flush();
+        series.TiePoints.Flush();
+
+        void Receive(DayResult result)
+        {
+            series.Daily.Add(result);
+            series.TiePoints.Add(result);
+            Remember(result, plan);
+            observer.DayDone(result);
+        }
+    }
+
+    private void Remember(DayResult result, RunPlan plan)
+    {
+        filesRead.UnionWith(result.Files);
+        if (result.Fault is { } fault)
+        {
+            gaps.Add(new(result.Date, fault));
+        }
+
+        RemoveGrids(result.Date, settings.Methods.Except(result.Methods.Select(method => method.Method)));
+        IReadOnlyList<Fault> faults = result.Fault is { } own ? [own]
+            : result.Observed ? []
+            : [.. plan.Gaps.Where(gap => gap.Date == result.Date).Select(gap => gap.Fault)];
+        if (!result.Observed && result.Methods.Count == 0 && faults.Count == 0)
+        {
+            return; // A day without input that nothing could fill: a gap like others.
+        }
+
+        tiePointFallbacks += result is { Observed: true, Tuned: { } tuned } && tuned.State != TiePointState.Moving ? 1 : 0;
+        polarGapFallbacks += result.Observed && result.Methods.Any(method => method.Filled.PolarGap == 0) ? 1 : 0;
         emptiedDays += result.Methods.Any(method => method.Emptied) ? 1 : 0;
         dayRecords.Add(new(
-            result.Day.Date,
+            result.Date,
             settings.Grid.Hemisphere,
-            result.Fault is null ? DayOutcome.Done : DayOutcome.Rejected,
+            result.Observed ? DayOutcome.Done : result.Methods.Count > 0 ? DayOutcome.Filled : DayOutcome.Rejected,
             [.. result.Methods.Select(method => Counts(method, result.OutOfRange))],
-            result.Fault is null ? [] : [result.Fault],
+            faults,
             TiePointStates.NameOf(result.Tuned?.State ?? TiePointState.Fixed)));
     }
 
@@ -126,21 +145,30 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         method.Counts.Gradient3719,
         method.Counts.Gradient2219,
         method.Counts.NoSolution,
-        method.Filled,
-        method.PolarGapFilled ?? 0,
+        method.Filled.FromNeighbours,
+        method.Filled.PolarGap ?? 0,
         method.Counts.CoastCorrected,
         method.Counts.OutsideIceMask,
-        method.Counts.WarmWater);
+        method.Counts.WarmWater,
+        method.Filled.FromDays);
 
-    private void RemoveGrids(IEnumerable<DateOnly> days)
+    private void RemoveGrids(DateOnly day, IEnumerable<string> methods)
     {
-        foreach (string path in days.SelectMany(_ => settings.Methods, (day, method) => layout.GridFile(method, settings.Grid.Hemisphere, day)))
+        foreach (string method in methods)
         {
-            PublishedFile.Delete(path);
+            PublishedFile.Delete(layout.GridFile(method, settings.Grid.Hemisphere, day));
         }
     }
 
-    private string NeighboursText => settings.LeastNeighbours.ToString(System.Globalization.CultureInfo.InvariantCulture);
+    // What was filled and how the gap counts: in grids and tables alike.
+    private KeyValuePair<string, string>[] FillingText =>
+    [
+        new("filling_neighbours", settings.LeastNeighbours.ToString(System.Globalization.CultureInfo.InvariantCulture)),
+        new("filling_days_before", (settings.DayFilling?.DaysBefore ?? 0).ToString(System.Globalization.CultureInfo.InvariantCulture)),
+        new("filling_days_after", (settings.DayFilling?.DaysAfter ?? 0).ToString(System.Globalization.CultureInfo.InvariantCulture)),
+        new("filling_missing_days", settings.FillMissingDays ? "true" : "false"),
+        new("polar_gap_rule", PolarGapRules.TextOf(settings.Rules.PolarGap)),
+    ];
 
     private List<KeyValuePair<string, string>> GlobalAttributes(string digest)
     {
@@ -149,8 +177,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             new("title", $"Daily sea-ice concentration on the grid {settings.Grid.Name}"),
             new("program", $"IceExtent {ProgramVersion.Text}"),
             new(DailySeries.DigestKey, digest),
-            new("filling_neighbours", NeighboursText),
-            new("polar_gap_rule", PolarGapRules.TextOf(settings.Rules.PolarGap)),
+            .. FillingText,
             new("weather_rules", settings.Weather.Text),
             new("caution", Cautions.Text),
         ];
@@ -174,8 +201,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             new(DailySeries.DigestKey, digest),
             new("ice_fraction", settings.Rules.IceFraction.ToString("R", System.Globalization.CultureInfo.InvariantCulture)),
             new("pack_fraction", settings.Rules.PackFraction.ToString("R", System.Globalization.CultureInfo.InvariantCulture)),
-            new("filling_neighbours", NeighboursText),
-            new("polar_gap_rule", PolarGapRules.TextOf(settings.Rules.PolarGap)),
+            .. FillingText,
             new("weather_rules", settings.Weather.Text),
             new("sensor_offsets_k", SourceOffsetText.OfAll(settings.Sources)),
             new("caution", Cautions.Text),
@@ -200,13 +226,15 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
 
     private string WriteRecord(RunPlan plan, DateTimeOffset started, string digest, int done, int exitCode)
     {
+        HashSet<DateOnly> told = [.. plan.Days.Select(day => day.Date), .. dayRecords.Select(day => day.Date)];
         IEnumerable<DayRecord> unread = plan.Gaps
             .Where(gap => gap.Date is not null)
             .GroupBy(gap => gap.Date!.Value)
-            .Where(day => plan.Days.All(planned => planned.Date != day.Key))
+            .Where(day => !told.Contains(day.Key))
             .Select(day => new DayRecord(day.Key, settings.Grid.Hemisphere, DayOutcome.Rejected, [], [.. day.Select(gap => gap.Fault)]));
         DayRecord[] days = [.. dayRecords.Concat(unread).OrderBy(day => day.Date)];
         int rejected = days.Count(day => day.Outcome == DayOutcome.Rejected);
+        HashSet<DateOnly> filled = [.. days.Where(day => day.Outcome == DayOutcome.Filled).Select(day => day.Date)];
         string path = layout.RunFile(started.UtcDateTime.ToString("yyyy-MM-dd'T'HH-mm-ss.fff'Z'", System.Globalization.CultureInfo.InvariantCulture));
         RunRecordFile.Write(path, new()
         {
@@ -216,9 +244,9 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             RunFile = new(settings.RunFile, Convert.ToHexStringLower(SHA256.HashData(File.ReadAllBytes(settings.RunFile)))),
             ConfigurationDigest = digest,
             CommandLine = options.CommandLine,
-            Counts = new(done, rejected + plan.DaysWithoutInput, rejected, polarGapFallbacks, tiePointFallbacks, emptiedDays),
+            Counts = new(done, rejected + plan.DatesWithoutInput.Count(day => !filled.Contains(day)), rejected, polarGapFallbacks, tiePointFallbacks, emptiedDays, filled.Count),
             Days = days,
-            Faults = [.. plan.Gaps.Where(gap => gap.Date is null).Select(gap => gap.Fault)],
+            Faults = [.. gaps.Where(gap => gap.Date is null).Select(gap => gap.Fault)],
             FilesRead = [.. filesRead],
             ExitCode = exitCode,
         });

@@ -29,6 +29,7 @@ internal static class ConfigurationDigest
         yield return FormattableString.Invariant(
             $"{settings.Rules.IceFraction:R} {settings.Rules.PackFraction:R} {settings.LandLimitFraction:R} {settings.ErrorLengthMeters:R} {settings.SmearingFactor:R}");
         yield return FormattableString.Invariant($"{settings.LeastNeighbours} {settings.Rules.PolarGap} {settings.LeastRimShare:R}");
+        yield return settings.DayFilling is { } rules ? FormattableString.Invariant($"{rules} {settings.FillMissingDays}") : string.Empty;
         yield return CoastText(settings.Coast);
         yield return settings.Weather.Text; // The bytes of its files are counted above.
         if (settings.TiePoints.NeedsSamples(settings.Methods))

@@ -20,7 +20,7 @@ internal sealed class DailySeries(
     public const string DigestKey = "configuration_digest";
 
     private readonly Dictionary<string, List<DailyRow>> rowsByMethod = methods.ToDictionary(method => method, _ => new List<DailyRow>(), StringComparer.Ordinal);
-    private readonly HashSet<DateOnly> lostDays = [];
+    private readonly HashSet<(string Method, DateOnly Day)> lostDays = [];
     private int? year;
 
     /// <summary>How many days that stood in a table were taken out because their input can no longer be used.</summary>
@@ -50,16 +50,13 @@ internal sealed class DailySeries(
     /// <summary>Takes one day. Days come in date order.</summary>
     public void Add(DayResult result)
     {
-        Open(result.Day.Date);
+        Open(result.Date);
         foreach (MethodResult method in result.Methods)
         {
             rowsByMethod[method.Method].AddRange(method.Rows);
         }
 
-        if (result.Fault is not null)
-        {
-            lostDays.Add(result.Day.Date);
-        }
+        lostDays.UnionWith(methods.Except(result.Methods.Select(method => method.Method)).Select(method => (method, result.Date)));
     }
 
     /// <summary>Writes the year in hand.</summary>
@@ -86,7 +83,7 @@ internal sealed class DailySeries(
         foreach (DateOnly day in days.Order())
         {
             Open(day);
-            lostDays.Add(day);
+            lostDays.UnionWith(methods.Select(method => (method, day)));
         }
 
         Flush();
@@ -108,9 +105,9 @@ internal sealed class DailySeries(
         List<DailyRow> rows = rowsByMethod[method];
         IReadOnlyList<KeyValuePair<string, string>> metadata = metadataOf(method);
         IReadOnlyList<DailyRow> before = File.Exists(path) ? DailyTable.Read(path).Rows : [];
-        HashSet<DateOnly> touched = [.. rows.Select(row => row.Date), .. lostDays];
+        HashSet<DateOnly> touched = [.. rows.Select(row => row.Date), .. lostDays.Where(lost => lost.Method == method).Select(lost => lost.Day)];
         DailyRow[] kept = [.. before.Where(row => !touched.Contains(row.Date))];
-        HashSet<DateOnly> gone = [.. before.Select(row => row.Date).Where(lostDays.Contains)];
+        HashSet<DateOnly> gone = [.. before.Select(row => row.Date).Where(day => lostDays.Contains((method, day)))];
         DaysRemoved += method == methods[0] ? gone.Count : 0;
         if (rows.Count == 0 && kept.Length == 0)
         {

@@ -10,6 +10,7 @@ internal sealed class DayPreparation
     private readonly Dictionary<double, SharedMask> masks = [];
     private readonly SourceRetrieval[] sources;
     private readonly PolarGapSystem?[] gaps;
+    private readonly CellMask[] cellMasks;
 
     public DayPreparation(RunSettings settings)
     {
@@ -17,10 +18,12 @@ internal sealed class DayPreparation
         Regions = [TotalsRegion.Hemisphere(settings.Grid, settings.Ocean)];
         Correlation = new(settings.Grid, settings.ErrorLengthMeters);
         Neighbours = settings.LeastNeighbours > 0 ? new(settings.Grid, settings.LeastNeighbours) : null;
+        Days = settings.DayFilling is { } rules ? new(rules) : null;
         ICoastStep? coast = settings.Coast.InConcentrations ? ConcentrationStep() : null;
         RetrievalChoices choices = new(
             settings.Grid, settings.Ocean, settings.Land, settings.Methods, settings.Coast, settings.SmearingFactor, settings.TiePoints, settings.Weather);
         sources = [.. settings.Sources.Select(source => new SourceRetrieval(choices, source.Sensor, [.. source.Description.Channels.Keys], MaskOf(source).Mask, coast, source.Offsets))];
+        cellMasks = [.. settings.Sources.Select(source => MaskOf(source).Mask)];
         gaps = [.. settings.Sources.Select(source => MaskOf(source).Gap)];
     }
 
@@ -32,6 +35,12 @@ internal sealed class DayPreparation
 
     /// <summary>Fills isolated cells, or null where the run does not.</summary>
     public NeighbourFilling? Neighbours { get; }
+
+    /// <summary>Fills cells from days before and after, or null where the run does not.</summary>
+    public DayFilling? Days { get; }
+
+    /// <summary>Land and polar gap of a source.</summary>
+    public CellMask MaskOf(int source) => cellMasks[source];
 
     /// <summary>The gap of a source's sensor, or null where there is nothing to fill.</summary>
     public PolarGapSystem? PolarGapOf(int source) => gaps[source];

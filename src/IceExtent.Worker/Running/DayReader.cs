@@ -7,7 +7,37 @@ namespace IceExtent.Worker.Running;
 /// <param name="Planes">After the range check, the source's offsets and the coast correction.</param>
 /// <param name="Conditions">What both marked.</param>
 /// <param name="OutOfRange">Temperatures made missing.</param>
-internal readonly record struct ObservedDay(BrightnessPlanes Planes, CellConditions[] Conditions, int OutOfRange);
+internal readonly record struct ObservedDay(BrightnessPlanes Planes, CellConditions[] Conditions, int OutOfRange)
+{
+    /// <summary>Retrieves the day by one method.</summary>
+    /// <param name="retrieval">The method, tuned.</param>
+    /// <param name="month">Where ice cannot be, or null.</param>
+    /// <param name="coast">What corrected the temperatures, or null.</param>
+    /// <param name="into">Receives every plane.</param>
+    public RetrievalCounts RetrieveWith(DayRetrieval retrieval, MonthMask? month, CoastBrightness? coast, ConcentrationPlanes into)
+    {
+        RetrievalCounts counts = retrieval.Retrieve(Planes, Conditions, into, month);
+        if (coast is null)
+        {
+            return counts;
+        }
+
+        coast.WidenErrors(into);
+        return counts with { CoastCorrected = CoastCorrected(into) };
+    }
+
+    // A cell that was corrected both in its temperatures and in its concentration counts once.
+    private static int CoastCorrected(ConcentrationPlanes planes)
+    {
+        int count = 0;
+        foreach (CellConditions condition in planes.Conditions)
+        {
+            count += (condition & CellConditions.CoastCorrected) != 0 ? 1 : 0;
+        }
+
+        return count;
+    }
+}
 
 /// <summary>Reads days, one at a time, into memory of its own. Not shared between threads.</summary>
 internal sealed class DayReader(DayPreparation preparation)

@@ -21,6 +21,7 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
         ((ushort)CellConditions.CoastCorrected, "coast_corrected"),
         ((ushort)CellConditions.FilledFromNeighbours, "filled_from_neighbours"),
         ((ushort)CellConditions.FilledPolarGap, "filled_polar_gap"),
+        ((ushort)CellConditions.FilledFromDays, "filled_from_days"),
         ((ushort)CellConditions.OutsideIceMask, "outside_ice_mask"),
         ((ushort)CellConditions.WarmWater, "warm_water"),
     ];
@@ -28,10 +29,17 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
     private static readonly KeyValuePair<string, string>[] Nothing = [];
     private static readonly KeyValuePair<string, string>[] Ancillary = [new("ancillary_variables", "concentration_se conditions")];
 
+    private static readonly BytePacking WholeDays = new(1.0, 0.0, 1.0, DayFillingRules.MostDays);
+
     private readonly double[] limits = [settings.Rules.IceFraction, settings.Rules.PackFraction];
 
     /// <summary>Writes one day of one method.</summary>
-    public void Write(PlannedDay day, IConcentrationMethod method, TiePointState tiePoints, ConcentrationPlanes planes)
+    /// <param name="day">The day.</param>
+    /// <param name="method">The method.</param>
+    /// <param name="tiePoints">Where the method's tie points come from.</param>
+    /// <param name="planes">What is written.</param>
+    /// <param name="sourceDays">How far away the days lie that cells were filled from, or null where the run fills nothing over days.</param>
+    public void Write(DayLabel day, IConcentrationMethod method, TiePointState tiePoints, ConcentrationPlanes planes, SourceDays? sourceDays)
     {
         List<GridVariable> variables =
         [
@@ -54,6 +62,12 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
             variables.Add(new PackedVariable("multiyear_concentration", $"concentration of {multi}", null, Nothing, "1", planes.MultiyearMemory, Packing.Fraction));
         }
 
+        if (sourceDays is not null)
+        {
+            variables.Add(new BytePackedVariable("fill_days_before", "days back to the earlier day that the cell was filled from", null, Nothing, "days", sourceDays.Before, WholeDays));
+            variables.Add(new BytePackedVariable("fill_days_after", "days ahead to the later day that the cell was filled from", null, Nothing, "days", sourceDays.After, WholeDays));
+        }
+
         variables.Add(new MaskVariable(
             "conditions", "why a cell's concentration is what it is", "sea_ice_area_fraction status_flag", Nothing, planes.ConditionMemory, Meanings));
         GridFile.Write(
@@ -61,6 +75,6 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
             settings.Grid,
             day.Date,
             variables,
-            [.. attributes, new("method", method.Name), new("method_source", method.Source), new("sensor", day.Source.Settings.Sensor.Name), new("sensor_offsets_k", SourceOffsetText.Of(day.Source.Settings)), new("tie_points", TiePointStates.NameOf(tiePoints))]);
+            [.. attributes, new("method", method.Name), new("method_source", method.Source), new("sensor", day.Sensor), new("sensor_offsets_k", day.Offsets), new("tie_points", TiePointStates.NameOf(tiePoints))]);
     }
 }

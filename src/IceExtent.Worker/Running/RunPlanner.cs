@@ -26,32 +26,57 @@ internal static class RunPlanner
             gaps.AddRange(inventory.Faults.Select(fault => new Gap(null, fault)));
             List<SourceDay> usable = [];
             offers.Add(new(opened, usable));
-            foreach (IGrouping<DateOnly, SourceDay> day in inventory.Days.Where(day => Wanted(day.Date)).GroupBy(day => day.Date))
+            foreach (IGrouping<DateOnly, SourceDay> day in inventory.Days.Where(day => Near(day.Date)).GroupBy(day => day.Date))
             {
                 bool ruling = source.Period.Holds(day.Key);
                 if (Refusal(day, source) is { } fault)
                 {
                     if (ruling || !source.Sensor.Serves(day.Key)) // Two files for a day that is not wanted do no harm.
                     {
-                        gaps.Add(new(day.Key, fault));
+                        gaps.Add(new(Wanted(day.Key) ? day.Key : null, fault));
                     }
 
                     continue;
                 }
 
-                usable.Add(day.First());
+                if (Wanted(day.Key))
+                {
+                    usable.Add(day.First());
+                }
+
                 if (ruling && !chosen.TryAdd(day.Key, (opened, day.First())))
                 {
-                    superseded++;
+                    superseded += Wanted(day.Key) ? 1 : 0;
                 }
             }
         }
 
-        PlannedDay[] days = [.. chosen.Values.Select((day, order) => new PlannedDay(order, day.Source, day.Input))];
-        return new(days, [.. gaps.OrderBy(gap => gap.Date ?? DateOnly.MinValue)], superseded) { Offers = offers };
+        PlannedDay[] days = Numbered(chosen.Values.Where(day => Wanted(day.Input.Date)));
+        RunPlan plan = new(days, [.. gaps.OrderBy(gap => gap.Date ?? DateOnly.MinValue)], superseded) { Offers = offers };
+        if (settings.DayFilling is not { } rules)
+        {
+            return plan;
+        }
 
-        bool Wanted(DateOnly day) => (from is not { } first || day >= first) && (to is not { } last || day <= last);
+        DateOnly[] toFill = settings.FillMissingDays ? [.. DaysNear.ToFill(chosen.Keys, rules).Where(Wanted)] : [];
+        DateOnly[] outputs = [.. days.Select(day => day.Date).Concat(toFill).Order()];
+        return plan with
+        {
+            DaysToFill = toFill,
+            Margin = Numbered(chosen.Values.Where(day => !Wanted(day.Input.Date) && DaysNear.Needed(outputs, day.Input.Date, rules))),
+        };
+
+        bool Wanted(DateOnly day) => Within(day, 0, 0);
+
+        // A day that is wanted can be filled from days this far outside the period.
+        bool Near(DateOnly day) => Within(day, settings.DayFilling?.DaysBefore ?? 0, settings.DayFilling?.DaysAfter ?? 0);
+
+        bool Within(DateOnly day, int before, int after) =>
+            (from is not { } first || day.DayNumber >= first.DayNumber - before) && (to is not { } last || day.DayNumber <= last.DayNumber + after);
     }
+
+    private static PlannedDay[] Numbered(IEnumerable<(OpenedSource Source, SourceDay Input)> days) =>
+        [.. days.Select((day, order) => new PlannedDay(order, day.Source, day.Input))];
 
     private static Fault? Refusal(IGrouping<DateOnly, SourceDay> day, RunSource source)
     {

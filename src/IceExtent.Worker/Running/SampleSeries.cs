@@ -24,7 +24,8 @@ internal sealed class SampleSeries
         DayPreparation preparation, RunPlan plan, (DateOnly? From, DateOnly? To) wanted, int workers, CancellationToken cancellation)
     {
         RunSettings settings = preparation.Settings;
-        if (!settings.TiePoints.NeedsSamples(settings.Methods) || plan.Days.Count == 0)
+        IReadOnlyList<PlannedDay> reads = plan.Reads;
+        if (!settings.TiePoints.NeedsSamples(settings.Methods) || reads.Count == 0)
         {
             return null;
         }
@@ -33,7 +34,7 @@ internal sealed class SampleSeries
         TuningRules rules = settings.TiePoints.Rules;
         RunPlan wide = wanted == (null, null)
             ? plan
-            : RunPlanner.Plan(settings, plan.Days[0].Date.AddDays(-rules.DaysBehind), plan.Days[^1].Date.AddDays(rules.DaysAhead), cancellation);
+            : RunPlanner.Plan(settings, reads[0].Date.AddDays(-rules.DaysBehind), reads[^1].Date.AddDays(rules.DaysAhead), cancellation);
         return Take(preparation, wide.Days, workers, cancellation);
     }
 

@@ -13,10 +13,10 @@ internal sealed class TiePointArchive(ArchiveLayout layout, Hemisphere hemispher
     /// <summary>Takes one day; a day without tie points loses those it had.</summary>
     public void Add(DayResult result)
     {
-        Open(result.Day.Date);
-        if (result.Tuned is { } tuned)
+        Open(result.Date);
+        if (result is { Observed: true, Tuned: { } tuned })
         {
-            rows.AddRange(TiePointRow.Of(result.Day.Date, result.Day.Source.Settings.Sensor.Name, tuned));
+            rows.AddRange(TiePointRow.Of(result.Date, result.Sensor, tuned));
         }
     }
 

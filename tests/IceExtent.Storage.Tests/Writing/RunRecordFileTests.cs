@@ -19,7 +19,7 @@ public sealed class RunRecordFileTests : IDisposable
         Counts = new(DaysDone: 1, Gaps: 1, Rejected: 1, PolarGapFallbacks: 0),
         Days =
         [
-            new(new(1988, 2, 28), Hemisphere.North, DayOutcome.Done, [new("any", 1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11)], []),
+            new(new(1988, 2, 28), Hemisphere.North, DayOutcome.Done, [new("any", 1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11, 12)], []),
             new(new(1988, 2, 29), Hemisphere.South, DayOutcome.Rejected, [], [new("IE2104", "a.nc", "nothing", "something", "Do it.")]),
         ],
         Faults = [],
@@ -37,13 +37,14 @@ public sealed class RunRecordFileTests : IDisposable
     {
         RunRecordFile.Write(folder.PathOf("new.json"), Record);
         string old = string.Join('\n', File.ReadAllLines(folder.PathOf("new.json")).Where(line => !line.Contains("fill", StringComparison.Ordinal) && !line.Contains("fallbacks", StringComparison.Ordinal) && !line.Contains("emptied", StringComparison.Ordinal)))
-            .Replace("\"rejected\": 1,", "\"rejected\": 1", StringComparison.Ordinal);
+            .Replace("\"rejected\": 1,", "\"rejected\": 1", StringComparison.Ordinal)
+            .Replace("\"warm_water\": 11,", "\"warm_water\": 11", StringComparison.Ordinal);
         File.WriteAllText(folder.PathOf("old.json"), old);
 
         RunRecord back = RunRecordFile.Read(folder.PathOf("old.json"));
 
         Assert.Equal(Record.Counts, back.Counts);
-        Assert.Equal(Record.Days[0].Cells[0] with { Filled = 0, PolarGapFilled = 0 }, back.Days[0].Cells[0]);
+        Assert.Equal(Record.Days[0].Cells[0] with { Filled = 0, PolarGapFilled = 0, FilledFromDays = 0 }, back.Days[0].Cells[0]);
     }
 
     [Fact]
@@ -89,7 +90,8 @@ public sealed class RunRecordFileTests : IDisposable
                 "rejected": 1,
                 "polar_gap_fallbacks": 0,
                 "tie_point_fallbacks": 0,
-                "emptied_days": 0
+                "emptied_days": 0,
+                "days_filled": 0
               },
               "days": [
                 {
@@ -109,7 +111,8 @@ public sealed class RunRecordFileTests : IDisposable
                       "polar_gap_filled": 8,
                       "coast_corrected": 9,
                       "outside_ice_mask": 10,
-                      "warm_water": 11
+                      "warm_water": 11,
+                      "filled_from_days": 12
                     }
                   ],
                   "faults": [],

@@ -1,0 +1,91 @@
+using IceExtent.Retrieval;
+using IceExtent.Statistics;
+using IceExtent.Storage.Faults;
+
+namespace IceExtent.Worker.Running;
+
+/// <summary>Brings retrieved concentrations to rows and grid files: fills what may be filled, sums, writes. Not shared between threads.</summary>
+internal sealed class DayFinishing(DayPreparation preparation, GridArchive? grids)
+{
+    private readonly Dictionary<PolarGapSystem, PolarGapFilling> gapFillings = [];
+    private readonly TotalsUncertainty uncertainty = new(preparation.Correlation);
+    private readonly SourceDays? sourceDays = preparation.Days is null ? null : new(preparation.Settings.Grid.CellCount);
+
+    /// <summary>Fills one day of one method, and takes away what was filled where the month has no ice.</summary>
+    /// <param name="day">The day.</param>
+    /// <param name="source">The source whose mask the planes have.</param>
+    /// <param name="planes">As retrieved; filled in place.</param>
+    /// <param name="near">The same method on days near it, in date order; empty where the run fills nothing over days.</param>
+    public FilledCells Fill(DateOnly day, int source, ConcentrationPlanes planes, ReadOnlySpan<NearDay> near)
+    {
+        int fromNeighbours = preparation.Neighbours?.Fill(planes) ?? 0;
+        int fromDays = preparation.Days?.Fill(planes, near, sourceDays!) ?? 0;
+        int? polarGap = FillPolarGap(source, planes);
+        preparation.Settings.Weather.MaskOf(day)?.ClearFilled(planes);
+        return new(fromNeighbours, fromDays, polarGap);
+    }
+
+    /// <summary>Writes the grid file of a day and sums it.</summary>
+    /// <exception cref="FaultException">The grid file cannot be written: that stops the run.</exception>
+    public MethodResult Publish(DayLabel day, IConcentrationMethod method, RetrievalCounts counts, FilledCells filled, ConcentrationPlanes planes)
+    {
+        TiePointState tiePoints = preparation.Settings.TiePoints.Moves(method.Name) ? day.TiePoints : TiePointState.Fixed;
+        grids?.Write(day, method, tiePoints, planes, sourceDays);
+        DailyRow[] rows = [.. preparation.Regions.Select(region => Row(day, tiePoints, region, planes))];
+        return new(method.Name, counts, filled, rows, IsEmptied(rows, planes));
+    }
+
+    private int? FillPolarGap(int source, ConcentrationPlanes planes)
+    {
+        if (preparation.PolarGapOf(source) is not { } gap)
+        {
+            return null;
+        }
+
+        if (!gapFillings.TryGetValue(gap, out PolarGapFilling? filling))
+        {
+            filling = new(gap, preparation.Settings.LeastRimShare);
+            gapFillings.Add(gap, filling);
+        }
+
+        return filling.Fill(planes);
+    }
+
+    // Whether what follows the retrieval took every cell that would count as ice: the totals are 0 km², and not missing.
+    private bool IsEmptied(DailyRow[] rows, ConcentrationPlanes planes)
+    {
+        float ice = (float)preparation.Settings.Rules.IceFraction;
+        return rows[0].AreaSquareKilometers == 0.0 && planes.Unscreened.ContainsAnyInRange(ice, 1f);
+    }
+
+    private DailyRow Row(DayLabel day, TiePointState tiePoints, TotalsRegion region, ConcentrationPlanes planes)
+    {
+        const double SquareMetersPerSquareKilometer = 1e6;
+        TotalsRules rules = preparation.Settings.Rules;
+        DailyTotals totals = DailyTotals.Sum(region, planes.Total, planes.Conditions, rules);
+        bool known = totals.Observed > 0.0 || totals.Filled > 0.0;
+        (double extentError, double areaError) = known
+            ? uncertainty.StandardErrorsSquareMeters(region, planes.Total, planes.StandardError, rules.IceFraction)
+            : default;
+        return new()
+        {
+            Date = day.Date,
+            Region = region.Name,
+            ExtentSquareKilometers = Known(totals.Extent),
+            ExtentStandardErrorSquareKilometers = Known(extentError),
+            AreaSquareKilometers = Known(totals.IceArea),
+            AreaStandardErrorSquareKilometers = Known(areaError),
+            MarginalZoneSquareKilometers = Known(totals.MarginalZone),
+            PackSquareKilometers = Known(totals.Pack),
+            OceanSquareKilometers = totals.Ocean / SquareMetersPerSquareKilometer,
+            ObservedShare = totals.ObservedShare,
+            FilledShare = totals.FilledShare,
+            PolarGapSquareKilometers = totals.PolarGap / SquareMetersPerSquareKilometer,
+            Sensor = day.Sensor,
+            Status = day.Status,
+            TiePoints = tiePoints,
+        };
+
+        double? Known(double squareMeters) => known ? squareMeters / SquareMetersPerSquareKilometer : null;
+    }
+}
