@@ -40,9 +40,12 @@ internal sealed class LandTemperature
         (tileColumns, tileRows) = ((grid.Columns + side - 1) / side, (grid.Rows + side - 1) / side);
         wanted = [.. coast.Select(TileOf).Distinct().Order()];
         TilesOfCoast = Array.ConvertAll(coast, cell => Array.BinarySearch(wanted, TileOf(cell)));
-        cells = [.. Enumerable.Range(0, grid.CellCount).Where(cell => tells[cell] || pure[cell]).Select(cell => (cell, TileOf(cell), pure[cell]))];
-        shares = Array.ConvertAll(channelShares, share => Array.ConvertAll(cells, cell => share[cell.Cell]));
         fitOffsets = Offsets(FitReach, (down, right) => Math.Max(Math.Abs(down), Math.Abs(right)) <= FitReach);
+        bool[] near = Near();
+        cells = [.. Enumerable.Range(0, grid.CellCount)
+            .Where(cell => pure[cell] || (tells[cell] && near[TileOf(cell)])) // Mixed land far inland is in no fit.
+            .Select(cell => (cell, TileOf(cell), pure[cell]))];
+        shares = Array.ConvertAll(channelShares, share => Array.ConvertAll(cells, cell => share[cell.Cell]));
         double reach = rules.SearchMeters / (side * grid.Frame.CellMeters);
         pureOffsets = Offsets((int)reach, (down, right) => (down * down) + (right * right) <= reach * reach);
         TileMeters = side * grid.Frame.CellMeters;
@@ -137,7 +140,7 @@ internal sealed class LandTemperature
 
             if (Inside(row + offset.Down, column + offset.Right))
             {
-                LandSums tile = sums[TileAt(row + offset.Down, column + offset.Right)];
+                ref readonly LandSums tile = ref sums[TileAt(row + offset.Down, column + offset.Right)];
                 count += tile.PureCount;
                 kelvins += tile.PureKelvins;
                 squares += tile.PureSquares;
@@ -154,6 +157,25 @@ internal sealed class LandTemperature
         double mean = kelvins / count;
         double spread = rules.SpreadKelvins + (rules.SpreadKelvinsPerMeter * TileMeters * distances / count);
         return new(mean, Math.Max((squares / count) - (mean * mean), 0.0) + (spread * spread));
+    }
+
+    // The tiles whose cells enter a fit.
+    private bool[] Near()
+    {
+        bool[] near = new bool[tileColumns * tileRows];
+        foreach (int tile in wanted)
+        {
+            (int row, int column) = (tile / tileColumns, tile % tileColumns);
+            foreach (TileOffset offset in fitOffsets)
+            {
+                if (Inside(row + offset.Down, column + offset.Right))
+                {
+                    near[TileAt(row + offset.Down, column + offset.Right)] = true;
+                }
+            }
+        }
+
+        return near;
     }
 
     private bool Inside(int row, int column) => (uint)row < (uint)tileRows && (uint)column < (uint)tileColumns;
