@@ -69,9 +69,13 @@ internal sealed class SourceRetrieval
             return withOwnPoints;
         }
 
-        WeatherScreens screens = choices.Weather.ScreensFor(tuned.Tuning);
+        WeatherScreens screens = choices.Weather.ScreensFor(MovedOnly(tuned.Tuning));
         return [.. choices.Methods.Select((name, index) => choices.TiePoints.Moves(name) ? Make(name, tuned.Tuning, screens) : withOwnPoints[index])];
     }
+
+    // Without 37H the linear methods' surfaces have no samples and stand still: limits of the day then follow the tie points.
+    private HemisphereTuning MovedOnly(HemisphereTuning day) =>
+        day.TiePoints != Own.TiePoints && day.Surfaces == Own.Surfaces ? day with { Surfaces = null } : day;
 
     /// <summary>Makes a sampling of pure surfaces with memory of its own.</summary>
     public SurfaceSampling MakeSampling() =>
