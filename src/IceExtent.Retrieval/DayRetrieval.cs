@@ -15,7 +15,7 @@ public sealed class DayRetrieval
     private readonly ErrorBudget errors;
     private readonly CellMask mask;
     private readonly ICoastStep? coast;
-    private readonly double smearingFactor;
+    private readonly SmearingFactors smearing;
     private readonly Channel[] needed;
 
     /// <summary>Prepares the retrieval of one sensor on one grid.</summary>
@@ -24,24 +24,27 @@ public sealed class DayRetrieval
     /// <param name="scatter">The scatter over the pure surfaces, instrument noise included.</param>
     /// <param name="mask">Land and polar gap.</param>
     /// <param name="coast">Corrects concentrations near land, or null.</param>
-    /// <param name="smearingFactor">How much a change from cell to cell widens the standard error, without unit; 0 for not at all.</param>
+    /// <param name="smearing">How much a change from cell to cell widens the standard error, or null for not at all.</param>
     /// <param name="noise">The instrument noise, or null where it is not told apart.</param>
     /// <param name="offsetErrors">The standard errors of offsets taken off the temperatures, or null.</param>
     public DayRetrieval(
-        IConcentrationMethod method, WeatherScreens screens, RetrievalScatter scatter, CellMask mask, ICoastStep? coast = null, double smearingFactor = 0.0,
+        IConcentrationMethod method, WeatherScreens screens, RetrievalScatter scatter, CellMask mask, ICoastStep? coast = null, SmearingFactors? smearing = null,
         ChannelNoise? noise = null, ChannelNoise? offsetErrors = null)
     {
         ArgumentNullException.ThrowIfNull(method);
         ArgumentNullException.ThrowIfNull(screens);
         ArgumentNullException.ThrowIfNull(scatter);
         ArgumentNullException.ThrowIfNull(mask);
-        (this.method, this.screens, this.mask, this.coast, this.smearingFactor) = (method, screens, mask, coast, smearingFactor);
+        (this.method, this.screens, this.mask, this.coast, this.smearing) = (method, screens, mask, coast, smearing ?? SmearingFactors.None);
         errors = new(method, scatter, noise ?? ChannelNoise.None, offsetErrors);
         needed = [.. method.Channels];
     }
 
     /// <summary>The tuned method.</summary>
     public IConcentrationMethod Method => method;
+
+    /// <summary>The scatter over the pure surfaces, instrument noise left out.</summary>
+    public RetrievalScatter SurfaceScatter => errors.SurfaceScatter;
 
     /// <summary>Makes impossible temperatures of every channel missing. Call it once a day, before any <see cref="Retrieve"/>.</summary>
     /// <param name="observed">Changed in place.</param>
@@ -80,7 +83,7 @@ public sealed class DayRetrieval
         }
 
         counts = coast is null ? counts : counts with { CoastCorrected = CorrectCoast(coast, observed, into) };
-        EdgeSmearing.Apply(into.Total, mask.Columns, smearingFactor, into.StandardError);
+        EdgeSmearing.Apply(into.Total, mask.Columns, smearing, into.StandardError);
         return counts;
     }
 

@@ -16,6 +16,9 @@ public sealed class ErrorCorrelation
     /// <summary>The most powers of the correlation that are prepared.</summary>
     public const int MostPowers = 5;
 
+    /// <summary>Two cells of 25 km: near the footprint at 19 GHz.</summary>
+    public const double DefaultFootprintMeters = 50_000.0;
+
     private const double ReachInLengths = 3.5; // exp(−3.5²/2) = 0.2 %: what lies farther off is nothing.
     private const double BlocksPerLength = 3.0;
 
@@ -25,9 +28,11 @@ public sealed class ErrorCorrelation
     /// <summary>Prepares a grid.</summary>
     /// <param name="grid">The grid.</param>
     /// <param name="lengthMeters">The correlation length L, in m.</param>
-    /// <exception cref="ArgumentOutOfRangeException">The length is not positive.</exception>
-    public ErrorCorrelation(Grid grid, double lengthMeters)
+    /// <param name="footprintMeters">The side of the squares inside which local errors are alike, in m.</param>
+    /// <exception cref="ArgumentOutOfRangeException">A length is not positive.</exception>
+    public ErrorCorrelation(Grid grid, double lengthMeters, double footprintMeters = DefaultFootprintMeters)
     {
+        ArgumentOutOfRangeException.ThrowIfLessThanOrEqual(footprintMeters, 0.0);
         ArgumentNullException.ThrowIfNull(grid);
         ArgumentOutOfRangeException.ThrowIfLessThanOrEqual(lengthMeters, 0.0);
         int cellsPerBlock = Math.Max(1, (int)(lengthMeters / (BlocksPerLength * grid.Frame.CellMeters)));
@@ -39,12 +44,23 @@ public sealed class ErrorCorrelation
             blockOfCell[cell] = (cell / grid.Columns / cellsPerBlock * BlockColumns) + (cell % grid.Columns / cellsPerBlock);
         }
 
+        (Columns, Rows) = (grid.Columns, grid.Rows);
+        CellsPerFootprint = Math.Max(1, (int)Math.Round(footprintMeters / grid.Frame.CellMeters));
         double lengthInBlocks = lengthMeters / (cellsPerBlock * grid.Frame.CellMeters);
         for (int power = 1; power <= MostPowers; power++)
         {
             taps[power] = Taps(lengthInBlocks / Math.Sqrt(power));
         }
     }
+
+    /// <summary>The number of columns of the grid.</summary>
+    public int Columns { get; }
+
+    /// <summary>The number of rows of the grid.</summary>
+    public int Rows { get; }
+
+    /// <summary>The side of a footprint, in cells.</summary>
+    public int CellsPerFootprint { get; }
 
     /// <summary>The number of blocks in a row of blocks.</summary>
     public int BlockColumns { get; }

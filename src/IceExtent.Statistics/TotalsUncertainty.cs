@@ -1,4 +1,5 @@
 using System.Runtime.CompilerServices;
+using IceExtent.Retrieval;
 
 namespace IceExtent.Statistics;
 
@@ -8,7 +9,10 @@ namespace IceExtent.Statistics;
 /// Area: the variance of Σ a·C over cells counted as ice. Extent: the variance of Σ a·[C + error ≥ limit], by the
 /// tetrachoric series of the two-by-two probabilities, with z = (C − limit)/σ:
 /// Σₖ (1/k!) ΣᵢΣⱼ aᵢaⱼ He₍ₖ₋₁₎(zᵢ)φ(zᵢ) He₍ₖ₋₁₎(zⱼ)φ(zⱼ) ρᵢⱼᵏ. Five terms are kept.
-/// Source of the series: [Kendall1941], value from memory. Empty cells and an unfilled polar gap add nothing here.
+/// Source of the series: [Kendall1941], value from memory. Where the scatter of the pure surfaces is given, that part of a cell's error
+/// alone is alike over the correlation length; the rest (noise, smearing, coasts, filling) is alike inside one footprint
+/// (<see cref="LocalErrors"/>): with λ the share of the first, correlations are λᵢλⱼρᵢⱼ, so term k gets λᵢᵏλⱼᵏ. Our own. Empty cells
+/// and an unfilled polar gap add nothing here.
 /// </remarks>
 public sealed class TotalsUncertainty
 {
@@ -22,6 +26,8 @@ public sealed class TotalsUncertainty
     private readonly double[][] extentWeights;
     private readonly double[] scratch;
     private readonly double[] terms = new double[ErrorCorrelation.MostPowers];
+    private readonly LocalErrors local;
+    private double shared = 1.0; // λ of the cell in hand.
 
     /// <summary>Makes the working memory.</summary>
     /// <param name="correlation">The correlation of cell errors on the grid.</param>
@@ -37,6 +43,7 @@ public sealed class TotalsUncertainty
         }
 
         scratch = new double[correlation.BlockCount];
+        local = new(correlation.Columns, correlation.Rows, correlation.CellsPerFootprint);
     }
 
     /// <summary>Computes both standard errors.</summary>
@@ -44,17 +51,19 @@ public sealed class TotalsUncertainty
     /// <param name="totalFraction">Clipped concentrations. Unit: 1. Missing: NaN, brings nothing.</param>
     /// <param name="standardErrorFraction">Their standard errors. Unit: 1.</param>
     /// <param name="iceFraction">The limit from which a cell counts as ice. Unit: 1.</param>
+    /// <param name="scatter">The part of the errors that is alike over the correlation length, or null where all of it is.</param>
     /// <returns>In m².</returns>
     public (double Extent, double IceArea) StandardErrorsSquareMeters(
         TotalsRegion region,
         ReadOnlySpan<float> totalFraction,
         ReadOnlySpan<float> standardErrorFraction,
-        double iceFraction)
+        double iceFraction,
+        RetrievalScatter? scatter = null)
     {
         ArgumentNullException.ThrowIfNull(region);
-        Gather(region, totalFraction, standardErrorFraction, iceFraction);
-        double areaVariance = correlation.PairSum(areaWeights, 1, scratch);
-        double extentVariance = 0.0;
+        Gather(region, totalFraction, standardErrorFraction, iceFraction, scatter);
+        (double extentVariance, double areaVariance) = local.TakeVariances();
+        areaVariance += correlation.PairSum(areaWeights, 1, scratch);
         for (int term = 0; term < extentWeights.Length; term++)
         {
             extentVariance += correlation.PairSum(extentWeights[term], term + 1, scratch);
@@ -65,8 +74,9 @@ public sealed class TotalsUncertainty
 
     [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     private void Gather(
-        TotalsRegion region, ReadOnlySpan<float> totalFraction, ReadOnlySpan<float> standardErrorFraction, double iceFraction)
+        TotalsRegion region, ReadOnlySpan<float> totalFraction, ReadOnlySpan<float> standardErrorFraction, double iceFraction, RetrievalScatter? scatter)
     {
+        shared = 1.0;
         areaWeights.AsSpan().Clear();
         foreach (double[] weights in extentWeights)
         {
@@ -102,9 +112,14 @@ public sealed class TotalsUncertainty
             {
                 (knownFraction, knownError) = (fraction, error);
                 nearLimit = ComputeTerms((fraction - iceFraction) / error);
+                shared = scatter is not null && (nearLimit || fraction >= limit) ? Math.Min(scatter.At(fraction) / error, 1.0) : 1.0;
             }
 
             runArea += areas[index];
+            if (shared < 1.0)
+            {
+                local.Add(cell, areas[index], fraction >= limit ? error : 0.0, nearLimit ? terms : [], shared);
+            }
         }
 
         Spread(runBlock, runArea, knownFraction >= limit ? knownError : 0.0, nearLimit);
@@ -112,10 +127,12 @@ public sealed class TotalsUncertainty
 
     private void Spread(int block, double area, double iceError, bool nearLimit)
     {
-        areaWeights[block] += area * iceError;
+        areaWeights[block] += area * iceError * shared;
+        double power = shared;
         for (int term = 0; nearLimit && term < terms.Length; term++)
         {
-            extentWeights[term][block] += area * terms[term];
+            extentWeights[term][block] += area * terms[term] * power;
+            power *= shared;
         }
     }
 

@@ -33,7 +33,7 @@ public sealed class DayFillingScoreTests
         Scene scene = new(SceneLoader.Load(Path.Combine(config.Scenes, "north.toml"), faults)!, loaded.Grid, land, sensor, seed: 1);
         SceneDefaults defaults = SceneDefaults.Load(config, loaded.Grid, null, null);
         CellMask mask = new(loaded.Grid, land.OceanBelow(defaults.LandLimitFraction), sensor.PolarGapLatitudeDegrees);
-        Retriever retriever = new(scene, mask, defaults.SmearingFactor);
+        Retriever retriever = new(scene, mask, defaults.Smearing);
         List<NearDay> near = [new(-daysBefore, retriever.On(Middle.AddDays(-daysBefore)))];
         if (daysAfter > 0)
         {
@@ -72,7 +72,7 @@ public sealed class DayFillingScoreTests
         return score;
     }
 
-    private sealed class Retriever(Scene scene, CellMask mask, double smearingFactor)
+    private sealed class Retriever(Scene scene, CellMask mask, SmearingFactors smearing)
     {
         private readonly DayRetrieval retrieval = new(
             ConcentrationMethods.Create("nasa-team", scene.Sensor.In(scene.Grid.Hemisphere), scene.Grid.Hemisphere),
@@ -80,7 +80,7 @@ public sealed class DayFillingScoreTests
             scene.Sensor.Scatter,
             mask,
             coast: null,
-            smearingFactor);
+            smearing);
 
         public ConcentrationPlanes On(DateOnly day)
         {

@@ -42,6 +42,15 @@ public sealed record RetrievalScatter(double OpenWaterFraction, double ClosedIce
     /// <inheritdoc cref="LooseTo"/>
     public static double ClosedFrom { get; } = SelfTuning.FixedBlend.To;
 
+    /// <summary>The standard deviation that the pure surfaces give a cell: the plain twin of <see cref="CellScatter"/>. Unit: 1.</summary>
+    /// <param name="fraction">The cell's concentration, 0 to 1.</param>
+    public double At(double fraction)
+    {
+        double closed = Math.Clamp((fraction - LooseTo) / (ClosedFrom - LooseTo), 0.0, 1.0);
+        double ice = LooseIceFraction + (closed * (ClosedIceFraction - LooseIceFraction));
+        return double.Hypot((1.0 - fraction) * OpenWaterFraction, fraction * ice);
+    }
+
     /// <summary>The scatter of a method over samples: their covariance through its derivatives at their centres, and half way between.</summary>
     /// <param name="method">The tuned method; the samples hold its channels.</param>
     /// <param name="samples">The samples of the day's window, instrument noise included.</param>

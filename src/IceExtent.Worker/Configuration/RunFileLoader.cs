@@ -37,6 +37,7 @@ internal static class RunFileLoader
         double? landLimit = layered.Number("land", "limit_fraction", 0.01, 1.0, string.Empty);
         double? errorLength = layered.Number("standard_error", "correlation_length_km", 1.0, 3_000.0, "km");
         double? smearing = layered.Number("standard_error", "smearing_factor", 0.0, 1.0, string.Empty);
+        double? curvature = layered.Number("standard_error", "curvature_factor", 0.0, 10.0, string.Empty);
         int? neighbours = layered.WholeNumber("filling", "neighbours", 0, NeighbourFilling.MostNeighbours);
         DayFillingSettings? overDays = DayFillingSettings.Load(layered);
         double? rimShare = layered.Number("polar_gap", "least_rim_share", 0.01, 1.0, string.Empty);
@@ -76,7 +77,7 @@ internal static class RunFileLoader
             LeastRimShare = rimShare!.Value,
             LandLimitFraction = landLimit.Value,
             ErrorLengthMeters = errorLength!.Value * 1_000.0,
-            SmearingFactor = smearing!.Value,
+            Smearing = new(smearing!.Value, curvature!.Value),
             Overlap = overlap!,
             Notice = notice,
             Sources = [.. loaded.OfType<RunSource>()],

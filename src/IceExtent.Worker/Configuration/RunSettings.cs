@@ -73,8 +73,8 @@ internal sealed record RunSettings
 
     public required double ErrorLengthMeters { get; init; }
 
-    /// <summary>How much a change from cell to cell widens a standard error, without unit.</summary>
-    public required double SmearingFactor { get; init; }
+    /// <summary>How much a change from cell to cell widens a standard error.</summary>
+    public required SmearingFactors Smearing { get; init; }
 
     /// <summary>How days that two sensors both saw are compared.</summary>
     public required OverlapSettings Overlap { get; init; }

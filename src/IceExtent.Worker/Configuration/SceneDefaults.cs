@@ -1,11 +1,12 @@
 using IceExtent.Grids;
+using IceExtent.Retrieval;
 using IceExtent.Statistics;
 using IceExtent.Storage.Faults;
 
 namespace IceExtent.Worker.Configuration;
 
 /// <summary>What config/defaults.toml says of totals, coasts and weather, for commands that have no run file.</summary>
-internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction, double ErrorLengthMeters, double SmearingFactor, CoastSettings Coast, TiePointSettings TiePoints, WeatherSettings Weather)
+internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction, double ErrorLengthMeters, SmearingFactors Smearing, CoastSettings Coast, TiePointSettings TiePoints, WeatherSettings Weather)
 {
     /// <summary>Reads them.</summary>
     /// <param name="config">Where they stand.</param>
@@ -34,12 +35,13 @@ internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction
         double? land = layered.Number("land", "limit_fraction", 0.01, 1.0, string.Empty);
         double? length = layered.Number("standard_error", "correlation_length_km", 1.0, 3_000.0, "km");
         double? smearing = layered.Number("standard_error", "smearing_factor", 0.0, 1.0, string.Empty);
+        double? curvature = layered.Number("standard_error", "curvature_factor", 0.0, 10.0, string.Empty);
         CoastSettings? correction = CoastLoader.Load(coastal, grid, folder, faults);
         TiePointSettings? tiePoints = TiePointLoader.Load(layered, ice ?? double.NaN);
         WeatherSettings? weather = WeatherLoader.Load(layered, grid, folder, faults);
         layered.RefuseUnknown();
         return faults.Count == 0
-            ? new(new TotalsRules(ice!.Value, pack!.Value), land!.Value, length!.Value * 1_000.0, smearing!.Value, correction!, tiePoints!, weather!)
+            ? new(new TotalsRules(ice!.Value, pack!.Value), land!.Value, length!.Value * 1_000.0, new(smearing!.Value, curvature!.Value), correction!, tiePoints!, weather!)
             : throw new ConfigurationException(faults);
     }
 }

@@ -26,12 +26,19 @@ internal sealed class DayFinishing(DayPreparation preparation, GridArchive? grid
     }
 
     /// <summary>Writes the grid file of a day and sums it.</summary>
+    /// <param name="day">What the outputs say of the day.</param>
+    /// <param name="method">The method.</param>
+    /// <param name="scatter">The part of the errors that is alike over the correlation length.</param>
+    /// <param name="counts">What happened to the cells.</param>
+    /// <param name="filled">How many were filled.</param>
+    /// <param name="planes">The day.</param>
     /// <exception cref="FaultException">The grid file cannot be written: that stops the run.</exception>
-    public MethodResult Publish(DayLabel day, IConcentrationMethod method, RetrievalCounts counts, FilledCells filled, ConcentrationPlanes planes)
+    public MethodResult Publish(
+        DayLabel day, IConcentrationMethod method, RetrievalScatter scatter, RetrievalCounts counts, FilledCells filled, ConcentrationPlanes planes)
     {
         TiePointState tiePoints = preparation.Settings.TiePoints.Moves(method.Name) ? day.TiePoints : TiePointState.Fixed;
         grids?.Write(day, method, tiePoints, planes, sourceDays);
-        DailyRow[] rows = [.. preparation.Regions.Select(region => Row(day, tiePoints, region, planes))];
+        DailyRow[] rows = [.. preparation.Regions.Select(region => Row(day, tiePoints, region, scatter, planes))];
         return new(method.Name, counts, filled, rows, IsEmptied(rows, planes));
     }
 
@@ -58,14 +65,14 @@ internal sealed class DayFinishing(DayPreparation preparation, GridArchive? grid
         return rows[0].AreaSquareKilometers == 0.0 && planes.Unscreened.ContainsAnyInRange(ice, 1f);
     }
 
-    private DailyRow Row(DayLabel day, TiePointState tiePoints, TotalsRegion region, ConcentrationPlanes planes)
+    private DailyRow Row(DayLabel day, TiePointState tiePoints, TotalsRegion region, RetrievalScatter scatter, ConcentrationPlanes planes)
     {
         const double SquareMetersPerSquareKilometer = 1e6;
         TotalsRules rules = preparation.Settings.Rules;
         DailyTotals totals = DailyTotals.Sum(region, planes.Total, planes.Conditions, rules);
         bool known = totals.Observed > 0.0 || totals.Filled > 0.0;
         (double extentError, double areaError) = known
-            ? uncertainty.StandardErrorsSquareMeters(region, planes.Total, planes.StandardError, rules.IceFraction)
+            ? uncertainty.StandardErrorsSquareMeters(region, planes.Total, planes.StandardError, rules.IceFraction, scatter)
             : default;
         return new()
         {

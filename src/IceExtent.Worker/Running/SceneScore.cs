@@ -31,7 +31,7 @@ internal sealed class SceneScore
     {
         (this.scene, rules) = (scene, defaults.Rules);
         bool[] ocean = land.OceanBelow(defaults.LandLimitFraction);
-        choices = new(scene.Grid, ocean, land, methods, defaults.Coast, defaults.SmearingFactor, defaults.TiePoints, defaults.Weather);
+        choices = new(scene.Grid, ocean, land, methods, defaults.Coast, defaults.Smearing, defaults.TiePoints, defaults.Weather);
         CellMask mask = new(scene.Grid, ocean, scene.Sensor.PolarGapLatitudeDegrees);
         ICoastStep? step = defaults.Coast.InConcentrations
             ? new CoastSpillStep(scene.Grid, land, ocean, defaults.Coast.Spill)
@@ -94,7 +94,7 @@ internal sealed class SceneScore
             source.Coast?.WidenErrors(bench.Concentration);
             methods[method] = (
                 DayScore.Of(scene.Grid, region, bench.Concentration.Total, bench.Concentration.StandardError, bench.Truth.Concentration, rules, bench.Melting),
-                bench.Uncertainty.StandardErrorsSquareMeters(region, bench.Concentration.Total, bench.Concentration.StandardError, rules.IceFraction).Extent);
+                bench.Uncertainty.StandardErrorsSquareMeters(region, bench.Concentration.Total, bench.Concentration.StandardError, rules.IceFraction, retrievals[method].SurfaceScatter).Extent);
         }
 
         return new(day, methods);

@@ -10,7 +10,7 @@ namespace IceExtent.Worker.Running;
 /// <param name="Land">How much of each cell is land.</param>
 /// <param name="Methods">The methods, in the run's order.</param>
 /// <param name="Coast">What is done about land in footprints.</param>
-/// <param name="SmearingFactor">How much a change from cell to cell widens a standard error.</param>
+/// <param name="Smearing">How much a change from cell to cell widens a standard error.</param>
 /// <param name="TiePoints">Whether and how tie points move.</param>
 /// <param name="Weather">Where the limits of the screens come from.</param>
 internal sealed record RetrievalChoices(
@@ -19,7 +19,7 @@ internal sealed record RetrievalChoices(
     LandShare Land,
     IReadOnlyList<string> Methods,
     CoastSettings Coast,
-    double SmearingFactor,
+    SmearingFactors Smearing,
     TiePointSettings TiePoints,
     WeatherSettings Weather);
 
@@ -89,7 +89,7 @@ internal sealed class SourceRetrieval
     {
         IConcentrationMethod method = ConcentrationMethods.Create(name, tuning, choices.Grid.Hemisphere);
         RetrievalScatter scatter = tuning.Samples is { } samples ? RetrievalScatter.Of(method, samples) : sensor.Scatter;
-        return new(method, screens, scatter, mask, step, choices.SmearingFactor, sensor.NoiseKelvins, offsetErrors);
+        return new(method, screens, scatter, mask, step, choices.Smearing, sensor.NoiseKelvins, offsetErrors);
     }
 
     private Channel[] Needed(IReadOnlyCollection<Channel> available)

@@ -42,6 +42,7 @@ internal sealed class WindowWorker(DayPreparation preparation, SampleSeries? sam
         RetrievedDay room = window.Rent();
         for (int method = 0; method < retrievals.Count; method++)
         {
+            room.Scatters[method] = retrievals[method].SurfaceScatter;
             room.Counts[method] = observed.RetrieveWith(retrievals[method], month, coast, room.Planes[method]);
         }
 
@@ -76,7 +77,7 @@ internal sealed class WindowWorker(DayPreparation preparation, SampleSeries? sam
             FilledCells filled = finishing.Fill(day.Date, masks.Source.Index, own, planes);
             if (retrieved is not null || filled.FromDays > 0)
             {
-                results.Add(finishing.Publish(label, retrievals[method].Method, retrieved?.Counts[method] ?? default, filled, own));
+                results.Add(finishing.Publish(label, retrievals[method].Method, shown.Scatters[method], retrieved?.Counts[method] ?? default, filled, own));
             }
         }
 
