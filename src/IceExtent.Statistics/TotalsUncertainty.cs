@@ -9,10 +9,10 @@ namespace IceExtent.Statistics;
 /// Area: the variance of Σ a·C over cells counted as ice. Extent: the variance of Σ a·[C + error ≥ limit], by the
 /// tetrachoric series of the two-by-two probabilities, with z = (C − limit)/σ:
 /// Σₖ (1/k!) ΣᵢΣⱼ aᵢaⱼ He₍ₖ₋₁₎(zᵢ)φ(zᵢ) He₍ₖ₋₁₎(zⱼ)φ(zⱼ) ρᵢⱼᵏ. Five terms are kept.
-/// Source of the series: [Kendall1941], value from memory. Where the scatter of the pure surfaces is given, that part of a cell's error
-/// alone is alike over the correlation length; the rest (noise, smearing, coasts, filling) is alike inside one footprint
-/// (<see cref="LocalErrors"/>): with λ the share of the first, correlations are λᵢλⱼρᵢⱼ, so term k gets λᵢᵏλⱼᵏ. Our own. Empty cells
-/// and an unfilled polar gap add nothing here.
+/// Source of the series: [Kendall1941], value from memory. Where the scatter of the pure surfaces is given, the area takes that
+/// part of a cell's error alone as alike over the correlation length, and the rest (noise, smearing, coasts, filling) as alike inside one
+/// footprint (<see cref="LocalErrors"/>): what a footprint takes from one cell it gives to the next. Extent does not: along an edge
+/// smearing has one sign, over hundreds of kilometres. Our own. Empty cells and an unfilled polar gap add nothing here.
 /// </remarks>
 public sealed class TotalsUncertainty
 {
@@ -62,8 +62,8 @@ public sealed class TotalsUncertainty
     {
         ArgumentNullException.ThrowIfNull(region);
         Gather(region, totalFraction, standardErrorFraction, iceFraction, scatter);
-        (double extentVariance, double areaVariance) = local.TakeVariances();
-        areaVariance += correlation.PairSum(areaWeights, 1, scratch);
+        double areaVariance = local.TakeVariance() + correlation.PairSum(areaWeights, 1, scratch);
+        double extentVariance = 0.0;
         for (int term = 0; term < extentWeights.Length; term++)
         {
             extentVariance += correlation.PairSum(extentWeights[term], term + 1, scratch);
@@ -112,13 +112,13 @@ public sealed class TotalsUncertainty
             {
                 (knownFraction, knownError) = (fraction, error);
                 nearLimit = ComputeTerms((fraction - iceFraction) / error);
-                shared = scatter is not null && (nearLimit || fraction >= limit) ? Math.Min(scatter.At(fraction) / error, 1.0) : 1.0;
+                shared = scatter is not null && fraction >= limit ? Math.Min(scatter.At(fraction) / error, 1.0) : 1.0;
             }
 
             runArea += areas[index];
             if (shared < 1.0)
             {
-                local.Add(cell, areas[index], fraction >= limit ? error : 0.0, nearLimit ? terms : [], shared);
+                local.Add(cell, areas[index] * error, shared);
             }
         }
 
@@ -128,11 +128,9 @@ public sealed class TotalsUncertainty
     private void Spread(int block, double area, double iceError, bool nearLimit)
     {
         areaWeights[block] += area * iceError * shared;
-        double power = shared;
         for (int term = 0; nearLimit && term < terms.Length; term++)
         {
-            extentWeights[term][block] += area * terms[term] * power;
-            power *= shared;
+            extentWeights[term][block] += area * terms[term];
         }
     }
 
