@@ -20,19 +20,24 @@ days=$(ls "$folder/brightness" | wc -l)
 sed 's/^output .*/output = "with-grids"/' "$folder/run.toml" > "$folder/with-grids.toml"
 sed 's/^output .*/output = "no-grids"\nwrite_grids = false/' "$folder/run.toml" > "$folder/no-grids.toml"
 
+# Three methods on tie points that move: every day is read twice.
+sed -e 's/^output .*/output = "three-methods"\nwrite_grids = false/' -e 's/^methods .*/methods = ["nasa-team", "bootstrap", "self-tuning"]/' \
+  -e 's/^\[\[source\]\]/[tie_points]\nmoving = true\n\n[[source]]/' "$folder/run.toml" > "$folder/three-methods.toml"
+
 seconds() { # wall seconds and peak memory in MB of one command
   /usr/bin/time -f '%e %M' -o "$folder/time" "$@" >/dev/null 2>"$folder/messages" || { cat "$folder/messages" >&2; exit 1; }
   awk '{printf "%s %d\n", $1, $2 / 1024}' "$folder/time"
 }
 
 : > "$folder/rounds.txt"
-for round in $(seq "$rounds"); do # Interleaved, so that a slow minute of the machine meets all three.
-  rm -rf "$folder/with-grids" "$folder/no-grids"
+for round in $(seq "$rounds"); do # Interleaved, so that a slow minute of the machine meets all four.
+  rm -rf "$folder/with-grids" "$folder/no-grids" "$folder/three-methods"
   inflate=$(dotnet "$bench" inflate "$folder/brightness" tb_19v tb_19h tb_22v tb_37v tb_37h --workers "$workers" | awk '{print $1}')
   read -r grids gridsMemory <<<"$(seconds "$program" run "$folder/with-grids.toml" --workers "$workers")"
   read -r plain plainMemory <<<"$(seconds "$program" run "$folder/no-grids.toml" --workers "$workers")"
-  echo "$inflate $grids $gridsMemory $plain $plainMemory" >> "$folder/rounds.txt"
-  echo "round $round: inflate only $inflate s, with grids $grids s ($gridsMemory MB), without $plain s ($plainMemory MB)" >&2
+  read -r three threeMemory <<<"$(seconds "$program" run "$folder/three-methods.toml" --workers "$workers")"
+  echo "$inflate $grids $gridsMemory $plain $plainMemory $three $threeMemory" >> "$folder/rounds.txt"
+  echo "round $round: inflate only $inflate s, with grids $grids s ($gridsMemory MB), without $plain s ($plainMemory MB), three methods $three s ($threeMemory MB)" >&2
 done
 
 median() { awk -v c="$1" '{print $c}' "$folder/rounds.txt" | sort -g | awk '{v[NR] = $1} END {print NR % 2 ? v[(NR + 1) / 2] : (v[NR / 2] + v[NR / 2 + 1]) / 2}'; }
@@ -42,6 +47,8 @@ printf '%-28s %8s %10s %8s\n' what seconds days/s peak_MB
 printf '%-28s %8.2f %10.0f %8s\n' "read and inflate only" "$(median 1)" "$(awk -v d="$days" -v s="$(median 1)" 'BEGIN {print d / s}')" -
 printf '%-28s %8.2f %10.0f %8.0f\n' "run, grids written" "$(median 2)" "$(awk -v d="$days" -v s="$(median 2)" 'BEGIN {print d / s}')" "$(median 3)"
 printf '%-28s %8.2f %10.0f %8.0f\n' "run, tables only" "$(median 4)" "$(awk -v d="$days" -v s="$(median 4)" 'BEGIN {print d / s}')" "$(median 5)"
+printf '%-28s %8.2f %10.0f %8.0f\n' "three methods, moving points" "$(median 6)" "$(awk -v d="$days" -v s="$(median 6)" 'BEGIN {print d / s}')" "$(median 7)"
+awk -v p="$(median 4)" -v t="$(median 6)" 'BEGIN {printf "three methods with moving tie points: %.2f of the days per second of one with fixed ones\n", p / t}'
 awk -v i="$(median 1)" -v g="$(median 2)" -v p="$(median 4)" 'BEGIN {printf "time over inflating alone: %.1f with grids, %.1f without\n", g / i, p / i}'
 
 if [ "${TEN_YEARS:-0}" = 1 ]; then
