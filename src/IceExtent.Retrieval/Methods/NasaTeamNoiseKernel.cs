@@ -31,6 +31,7 @@ public sealed class NasaTeamNoiseKernel
     /// <param name="noise">The noise of the three channels.</param>
     /// <param name="variance">Receives one variance a cell, without unit; NaN where a channel is missing, no meaning where there is no solution.</param>
     /// <exception cref="ArgumentException">The spans differ in length.</exception>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     public void Write(
         ReadOnlySpan<float> v19Kelvins, ReadOnlySpan<float> h19Kelvins, ReadOnlySpan<float> v37Kelvins, ChannelNoise noise, Span<float> variance)
     {

@@ -15,6 +15,7 @@ public static class CellScatter
     /// <param name="scatter">The scatter over the pure surfaces.</param>
     /// <param name="standardErrorFraction">Receives one standard error a cell, NaN where the concentration is.</param>
     /// <exception cref="ArgumentException">The spans differ in length.</exception>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     public static void Apply(ReadOnlySpan<float> totalFraction, RetrievalScatter scatter, Span<float> standardErrorFraction)
     {
         ArgumentNullException.ThrowIfNull(scatter);
@@ -41,12 +42,14 @@ public static class CellScatter
     /// <param name="totalFraction">Clipped concentrations; NaN is missing.</param>
     /// <param name="scatter">The scatter over the pure surfaces, without noise.</param>
     /// <param name="noiseVariance">The variance that noise gives each cell, without unit; above 1 it counts as 1, which is all there is to be wrong by.</param>
+    /// <param name="waterNoiseVariance">The variance that stands in cells of concentration 0, screened and clipped ones: no ice, no ice's noise.</param>
     /// <param name="standardErrorFraction">
     /// Receives one standard error a cell, NaN where the concentration is. May be the same memory as <paramref name="noiseVariance"/>.
     /// </param>
     /// <exception cref="ArgumentException">The spans differ in length.</exception>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     public static void Apply(
-        ReadOnlySpan<float> totalFraction, RetrievalScatter scatter, ReadOnlySpan<float> noiseVariance, Span<float> standardErrorFraction)
+        ReadOnlySpan<float> totalFraction, RetrievalScatter scatter, ReadOnlySpan<float> noiseVariance, double waterNoiseVariance, Span<float> standardErrorFraction)
     {
         ArgumentNullException.ThrowIfNull(scatter);
         int cells = totalFraction.Length;
@@ -55,18 +58,19 @@ public static class CellScatter
             throw new ArgumentException("All planes must have the same number of cells.", nameof(standardErrorFraction));
         }
 
+        Vector<float> water = new((float)waterNoiseVariance);
         Surfaces surfaces = new(scatter);
         int cell = 0;
         for (; cell <= cells - Vector<float>.Count; cell += Vector<float>.Count)
         {
-            Vector<float> noise = Vector.Min(new Vector<float>(noiseVariance[cell..]), Vector<float>.One);
-            Vector.SquareRoot(VarianceOf(new Vector<float>(totalFraction[cell..]), surfaces) + noise).CopyTo(standardErrorFraction[cell..]);
+            Vector<float> fraction = new(totalFraction[cell..]);
+            Vector.SquareRoot(VarianceOf(fraction, surfaces) + NoiseOf(fraction, new(noiseVariance[cell..]), water)).CopyTo(standardErrorFraction[cell..]);
         }
 
         for (; cell < cells; cell++)
         {
-            Vector<float> noise = Vector.Min(new Vector<float>(noiseVariance[cell]), Vector<float>.One);
-            standardErrorFraction[cell] = Vector.SquareRoot(VarianceOf(new Vector<float>(totalFraction[cell]), surfaces) + noise)[0];
+            Vector<float> fraction = new(totalFraction[cell]);
+            standardErrorFraction[cell] = Vector.SquareRoot(VarianceOf(fraction, surfaces) + NoiseOf(fraction, new(noiseVariance[cell]), water))[0];
         }
     }
 
@@ -82,6 +86,10 @@ public static class CellScatter
         Vector<float> fromIce = fraction * (surfaces.Loose + (closed * surfaces.Closing));
         return (fromWater * fromWater) + (fromIce * fromIce);
     }
+
+    [MethodImpl(MethodImplOptions.AggressiveInlining)] // Called once a vector.
+    private static Vector<float> NoiseOf(Vector<float> fraction, Vector<float> noise, Vector<float> water) =>
+        Vector.ConditionalSelect(Vector.Equals(fraction, Vector<float>.Zero), water, Vector.Min(noise, Vector<float>.One));
 
     private readonly struct Surfaces(RetrievalScatter scatter)
     {

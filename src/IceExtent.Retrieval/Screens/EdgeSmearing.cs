@@ -1,5 +1,6 @@
 using System.Buffers;
 using System.Numerics;
+using System.Runtime.CompilerServices;
 
 namespace IceExtent.Retrieval;
 
@@ -75,6 +76,7 @@ public static class EdgeSmearing
             count.Clear();
         }
 
+        [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
         public void Add(ReadOnlySpan<float> fractions)
         {
             int cell = 0;
@@ -96,6 +98,7 @@ public static class EdgeSmearing
             }
         }
 
+        [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
         public void Widen(ReadOnlySpan<float> fractions, SmearingFactors factors, Span<float> errors)
         {
             (Vector<float> range, Vector<float> curvature) = (new((float)factors.Range), new((float)factors.Curvature));

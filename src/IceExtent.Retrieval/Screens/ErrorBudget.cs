@@ -10,6 +10,7 @@ public sealed class ErrorBudget
     private readonly IConcentrationMethod method;
     private readonly ChannelNoise noise;
     private readonly bool hasNoise;
+    private readonly double waterNoiseVariance;
 
     /// <summary>Parts the scatter of one method.</summary>
     /// <param name="method">The tuned method.</param>
@@ -30,6 +31,7 @@ public sealed class ErrorBudget
 
         // Two kinds of ice have one scatter but not the same noise: the smaller leaves more, which is the safe side.
         PureTangents pure = method.PureTangents;
+        waterNoiseVariance = this.noise.VarianceOf(pure.OpenWater);
         double iceVariance = Math.Min(noise.VarianceOf(pure.FirstYear), noise.VarianceOf(pure.Multiyear));
         SurfaceScatter = scatterHasNoise
             ? new(Rest(scatter.OpenWaterFraction, noise.VarianceOf(pure.OpenWater)), Rest(scatter.ClosedIceFraction, iceVariance))
@@ -56,7 +58,7 @@ public sealed class ErrorBudget
         }
 
         method.WriteNoiseVariance(observed, cells, noise, standardErrorFraction);
-        CellScatter.Apply(totalFraction, SurfaceScatter, noiseVariance: standardErrorFraction, standardErrorFraction);
+        CellScatter.Apply(totalFraction, SurfaceScatter, noiseVariance: standardErrorFraction, waterNoiseVariance, standardErrorFraction);
     }
 
     private static double Rest(double scatterFraction, double noiseVariance) =>

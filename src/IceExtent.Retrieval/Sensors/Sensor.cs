@@ -48,7 +48,8 @@ public sealed record RetrievalScatter(double OpenWaterFraction, double ClosedIce
     {
         double closed = Math.Clamp((fraction - LooseTo) / (ClosedFrom - LooseTo), 0.0, 1.0);
         double ice = LooseIceFraction + (closed * (ClosedIceFraction - LooseIceFraction));
-        return double.Hypot((1.0 - fraction) * OpenWaterFraction, fraction * ice);
+        double water = (1.0 - fraction) * OpenWaterFraction;
+        return Math.Sqrt((water * water) + (fraction * fraction * ice * ice));
     }
 
     /// <summary>The scatter of a method over samples: their covariance through its derivatives at their centres, and half way between.</summary>
