@@ -120,6 +120,30 @@ public sealed class TiePointTests : IDisposable
         Assert.Equal("too-few-samples", Assert.Single(record.Days).TiePoints);
     }
 
+    /// <summary>No open water anywhere, and none but open water: whole numbers by the sensor's own points, never NaN. Origin: worked, 16 cells of 625 km².</summary>
+    [Theory]
+    [InlineData(1.0, 10_000.0)]
+    [InlineData(0.0, 0.0)]
+    public async Task Run_OneSurfaceAlone_HasTotals(double fraction, double extent)
+    {
+        string[] methods = ["nasa-team", "bootstrap", "bristol", "self-tuning"];
+        tiny.WriteDay(new(1990, 1, 1), _ => fraction);
+        tiny.Write("tiny.toml", TinyRun.Sensor("1990-01-01", "1999-12-31") + "\n" + Surfaces);
+        tiny.WriteRunFile("[tie_points]\nmoving = true\nleast_days = 1\nleast_samples = 2\ncoast_distance_km = 0.0\nedge_distance_km = 0.0\nwater_from_km = 0.0");
+        tiny.Write("run.toml", File.ReadAllText(tiny.RunFile).Replace(
+            "[\"nasa-team\"]", $"[{string.Join(", ", methods.Select(method => $"\"{method}\""))}]", StringComparison.Ordinal));
+
+        ProgramRun ended = await ProgramRun.OfAsync("run", tiny.RunFile);
+
+        Assert.Equal(ExitCode.Done, ended.ExitCode);
+        foreach (string method in methods)
+        {
+            Statistics.DailyRow row = Assert.Single(DailyTable.Read(new ArchiveLayout(tiny.PathOf("out")).DailyFile(method, Grids.Hemisphere.North, 1990)).Rows);
+            Assert.Equal(extent, row.ExtentSquareKilometers!.Value, 1e-6);
+            Assert.True(double.IsFinite(row.ExtentStandardErrorSquareKilometers!.Value) && double.IsFinite(row.AreaStandardErrorSquareKilometers!.Value));
+        }
+    }
+
     /// <summary>A day that can no longer be read loses its tie points with its numbers.</summary>
     [Fact]
     public async Task Run_DayThatBreaks_LosesItsTiePoints()

@@ -89,9 +89,20 @@ public sealed class ErrorBudgetTests
     {
         float[] errors = [.. Enumerable.Repeat(4000f, 9), float.PositiveInfinity];
 
-        CellScatter.Apply(new float[10], File, errors, errors);
+        CellScatter.Apply([.. Enumerable.Repeat(1f, 10)], File, errors, 0.0, errors);
 
-        Assert.All(errors, error => Assert.Equal(Math.Sqrt(1.0025), error, 1e-6));
+        Assert.All(errors, error => Assert.Equal(Math.Sqrt(1.0016), error, 1e-6)); // 0.04² and 1.
+    }
+
+    /// <summary>Origin: worked. A cell set to open water has the noise of water, 0.03², whatever its temperatures: sqrt(0.05² + 0.03²).</summary>
+    [Fact]
+    public void CellScatter_ScreenedCell_HasTheNoiseOfWater()
+    {
+        float[] errors = [.. Enumerable.Repeat(0.25f, 10)];
+
+        CellScatter.Apply(new float[10], File, errors, 0.0009, errors);
+
+        Assert.All(errors, error => Assert.Equal(Math.Sqrt(0.0034), error, 1e-6));
     }
 
     /// <summary>Without noise, with noise of 0 K and with noise in a channel that the method does not use, every byte is the same.</summary>
@@ -114,9 +125,9 @@ public sealed class ErrorBudgetTests
         Assert.Equal(total, Day(method, TunedMethods.Noise).Total);
     }
 
-    /// <summary>A screened cell has the scatter of open water and the noise of its own temperatures.</summary>
+    /// <summary>A screened cell has the error of open water, noise included: 0.05 as the file says, whatever its temperatures.</summary>
     [Fact]
-    public void Retrieve_ScreenedCell_HasTheNoiseOfItsTemperatures()
+    public void Retrieve_ScreenedCell_HasTheErrorOfOpenWater()
     {
         NasaTeam method = new(TiePointSets.F13North);
         ChannelKelvins windy = new TiePoint(200.0, 150.0, 225.0).Kelvins; // GR(37/19) = 25/425 = 0.059, above 0.05.
@@ -130,15 +141,14 @@ public sealed class ErrorBudgetTests
         DayRetrieval retrieval = new(method, new(0.05, null), File, Mask(1), noise: TunedMethods.Noise);
         RetrievalCounts counts = retrieval.Retrieve(observed, new CellConditions[1], day);
 
-        double left = 0.0025 - TunedMethods.Noise.VarianceOf(method.PureTangents.OpenWater);
         Assert.Equal(1, counts.Gradient3719);
         Assert.Equal(0f, day.Total[0]);
-        Assert.Equal(Math.Sqrt(left + TunedMethods.Noise.VarianceOf(method.TangentAt(windy))), day.StandardError[0], 1e-6);
+        Assert.Equal(0.05, day.StandardError[0], 1e-6);
     }
 
-    /// <summary>A cell that a coast correction empties has the scatter of open water and still the noise of its own temperatures.</summary>
+    /// <summary>A cell that a coast correction empties has the error of open water too.</summary>
     [Fact]
-    public void Retrieve_CoastCorrectedCell_HasTheNoiseOfItsTemperatures()
+    public void Retrieve_CoastCorrectedCell_HasTheErrorOfOpenWater()
     {
         NasaTeam method = new(TiePointSets.F13North);
         ChannelKelvins half = TunedMethods.Mixture(0.3, 0.2);
@@ -147,8 +157,7 @@ public sealed class ErrorBudgetTests
         new DayRetrieval(method, new(0.05, null), File, Mask(1), new Emptying(), noise: TunedMethods.Noise)
             .Retrieve(TunedMethods.Planes(half), new CellConditions[1], day);
 
-        double left = 0.0025 - TunedMethods.Noise.VarianceOf(method.PureTangents.OpenWater);
-        Assert.Equal(Math.Sqrt(left + TunedMethods.Noise.VarianceOf(method.TangentAt(half))), day.StandardError[0], 1e-6);
+        Assert.Equal(0.05, day.StandardError[0], 1e-6);
     }
 
     private static (float[] Total, float[] Error) Day(IConcentrationMethod method, ChannelNoise? noise)

@@ -43,7 +43,27 @@ public static class MovingTiePoints
             (null, _) => TiePointState.MovingIce,
             _ => TiePointState.Moving,
         };
-        return new(tuning, state, [.. Estimates(tuning, (waterDays, water), (iceDays, ice))]);
+        return state == TiePointState.TooFewSamples || IsSolvable(tuning)
+            ? new(tuning, state, [.. Estimates(tuning, (waterDays, water), (iceDays, ice))])
+            : new(own, TiePointState.NoSolution, [.. Estimates(own, (waterDays, null), (iceDays, null))]);
+    }
+
+    // Whether every method that the sensor is tuned for has a solution: samples of one and the same surface leave none.
+    private static bool IsSolvable(HemisphereTuning tuning)
+    {
+        try
+        {
+            foreach (string name in ConcentrationMethods.Names)
+            {
+                _ = ConcentrationMethods.TryCreate(name, tuning, Grids.Hemisphere.North);
+            }
+
+            return true;
+        }
+        catch (ArgumentException)
+        {
+            return false;
+        }
     }
 
     private static TiePoints Moved(TiePoints own, SurfaceMoments? water, SurfaceMoments? ice, TuningRules rules)

@@ -44,4 +44,7 @@ public enum TiePointState
 
     /// <summary>None, though the run asks for it: both surfaces had too few samples.</summary>
     TooFewSamples,
+
+    /// <summary>None: those of the samples leave methods without a solution, such as water on the line of ice.</summary>
+    NoSolution,
 }

@@ -11,6 +11,7 @@ public static class TiePointStates
         TiePointState.MovingWater => "moving-water",
         TiePointState.MovingIce => "moving-ice",
         TiePointState.TooFewSamples => "too-few-samples",
+        TiePointState.NoSolution => "no-solution",
         _ => throw new ArgumentOutOfRangeException(nameof(state), state, "There is no such state."),
     };
 

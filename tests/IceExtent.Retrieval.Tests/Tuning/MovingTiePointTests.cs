@@ -69,6 +69,19 @@ public sealed class MovingTiePointTests
         Assert.All(tuned.Estimates.Where(row => row.StandardErrorKelvins is null), row => Assert.Null(row.ScatterKelvins));
     }
 
+    /// <summary>Water that looks like first-year ice leaves a triangle without area: the sensor's own points stand, and the day says why.</summary>
+    [Fact]
+    public void Tune_WaterLikeIce_HasNoSolutionAndKeepsTheSensorsOwn()
+    {
+        DaySamples[] window = [.. Enumerable.Range(1, 4).Select(seed => PureDays.Day(seed, noiseKelvins: 0.0, multiyearShare: 0.0)).Select(day => new DaySamples(day.ClosedIce, day.ClosedIce))];
+
+        TunedDay tuned = MovingTiePoints.Tune(PureDays.Own, window, PureDays.Rules);
+
+        Assert.Equal(TiePointState.NoSolution, tuned.State);
+        Assert.Equal(PureDays.Own, tuned.Tuning);
+        Assert.All(tuned.Estimates, row => Assert.Null(row.StandardErrorKelvins));
+    }
+
     [Fact]
     public void Tune_SamplesOnTooFewDays_KeepsTheSensorsOwn() =>
         Assert.Equal(
