@@ -84,22 +84,36 @@ public sealed class IceMaskTests : IDisposable
 
         Assert.Equal(ExitCode.Configuration, made.ExitCode);
         Assert.Contains("IE3140", made.Messages, StringComparison.Ordinal);
-        Assert.Contains("in the months 11, 12", made.Messages, StringComparison.Ordinal);
+        Assert.Contains("in the months 11 (0), 12 (0)", made.Messages, StringComparison.Ordinal);
         Assert.False(File.Exists(run.PathOf("mask.nc")));
     }
 
     [Fact]
     public async Task IceMask_DamagedGrid_CostsItsDayAndIsTold()
     {
-        await RunAsync(Rules);
-        await File.WriteAllTextAsync(new ArchiveLayout(run.PathOf("out")).GridFile("nasa-team", Hemisphere.North, new(1990, 3, 2)), "damaged");
+        await RunAsync(Rules.Replace("least_days = 2", "least_days = 1", StringComparison.Ordinal));
+        await File.WriteAllTextAsync(new ArchiveLayout(run.PathOf("out")).GridFile("nasa-team", Hemisphere.North, new(1990, 3, 1)), "damaged");
 
         ProgramRun made = await ProgramRun.OfAsync("ice-mask", run.RunFile, "--out", run.PathOf("mask.nc"));
 
         Assert.Equal(ExitCode.DoneWithGaps, made.ExitCode);
         Assert.Contains("IE2102", made.Messages, StringComparison.Ordinal);
         bool[][] outside = IceMaskFile.ReadOutside(run.PathOf("mask.nc"), TinyRun.Grid);
-        Assert.Equal((true, false), (outside[2][1], outside[3][1])); // One day is less than two.
+        Assert.Equal((true, false), (outside[2][3], outside[3][3])); // Column 3 had ice on the damaged day alone.
+    }
+
+    /// <summary>One readable day of March where two are needed: a mask of it would have no ice anywhere, so there is none.</summary>
+    [Fact]
+    public async Task IceMask_FewerDaysThanACellNeeds_IsRefused()
+    {
+        await RunAsync(Rules);
+        await File.WriteAllTextAsync(new ArchiveLayout(run.PathOf("out")).GridFile("nasa-team", Hemisphere.North, new(1990, 3, 2)), "damaged");
+
+        ProgramRun made = await ProgramRun.OfAsync("ice-mask", run.RunFile, "--out", run.PathOf("mask.nc"));
+
+        Assert.Equal(ExitCode.Configuration, made.ExitCode);
+        Assert.Contains("in the months 3 (1)", made.Messages, StringComparison.Ordinal);
+        Assert.False(File.Exists(run.PathOf("mask.nc")));
     }
 
     [Theory]
@@ -107,7 +121,7 @@ public sealed class IceMaskTests : IDisposable
     [InlineData("[weather]\nice_mask_file = \"mask.nc\"", "nasa-team", "IE1011")]
     public async Task IceMask_OtherMethodOrMaskedRun_IsRefused(string table, string method, string code)
     {
-        await RunAsync(string.Empty);
+        await RunAsync(Rules);
         await ProgramRun.OfAsync("ice-mask", run.RunFile, "--out", run.PathOf("mask.nc"));
         run.WriteRunFile(table);
 

@@ -64,11 +64,11 @@ internal static class SensorReport
         $"{settings.Overlap.LeastDays} days or more for an offset",
         "Add files of the overlap, or set overlap.least_days or overlap.least_cells; the differences of totals are written all the same.");
 
-    // The lines that a [[source]] takes. A channel whose standard error cannot be told is left out: nobody could say how far it holds.
+    // The lines that a [[source]] takes: all channels or none, because taking some off turns the ratios and lines of the methods.
     private static string[] RunFileLines(IEnumerable<ChannelOffset> offsets)
     {
-        ChannelOffset[] usable = [.. offsets.Where(offset => offset.Surface == ChannelOffset.BothSurfaces && offset.StandardErrorKelvins is not null)];
-        return usable.Length == 0 ? [] :
+        ChannelOffset[] usable = [.. offsets.Where(offset => offset.Surface == ChannelOffset.BothSurfaces)];
+        return usable.Length == 0 || usable.Any(offset => offset.StandardErrorKelvins is null) ? [] :
         [
             "offset_k = { " + string.Join(", ", usable.Select(offset => FormattableString.Invariant($"{offset.Channel} = {offset.OffsetKelvins:F4}"))) + " }",
             "offset_se_k = { " + string.Join(", ", usable.Select(offset => FormattableString.Invariant($"{offset.Channel} = {offset.StandardErrorKelvins:F4}"))) + " }",
@@ -170,6 +170,11 @@ internal static class SensorReport
         {
             console.Print($"For source {pair.Later} ({pair.LaterSensor}) in the run file, so that it reads as source {pair.Earlier} ({pair.EarlierSensor}) does:");
             Array.ForEach(lines, console.Print);
+            console.Print("One number stands for both surfaces: where open water and closed ice differ by more than a standard error, it is wrong over either. Compare again with it.");
+        }
+        else if (offsets.Length > 0)
+        {
+            console.Print("No lines for the run file: the offset of some channel has no standard error, and offsets of some channels alone would make a new step.");
         }
     }
 

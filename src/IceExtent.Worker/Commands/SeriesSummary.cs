@@ -1,4 +1,5 @@
 using System.Globalization;
+using IceExtent.Retrieval;
 using IceExtent.Statistics;
 using IceExtent.Worker.Running;
 
@@ -14,6 +15,7 @@ internal sealed class SeriesSummary
     private int days;
     private int emptiedDays;
     private int poorDays;
+    private int fixedDays;
     private double lowestShare = 1.0;
 
     /// <summary>Takes one day. Days come in date order.</summary>
@@ -29,6 +31,7 @@ internal sealed class SeriesSummary
         if (result.Methods is [{ Rows: [var first, ..] }, ..])
         {
             days++;
+            fixedDays += result is { Observed: true, Tuned: { } tuned } && tuned.State != TiePointState.Moving ? 1 : 0;
             emptiedDays += result.Methods.Any(method => method.Emptied) ? 1 : 0;
             double share = result.Observed ? first.ObservedShare : first.FilledShare; // A day made from others has nothing of its own.
             poorDays += share < WellObservedShare ? 1 : 0;
@@ -55,9 +58,14 @@ internal sealed class SeriesSummary
                 $"{method}: ice taken away from {(double)outside / days:F0} cells a day outside the ice mask, from {(double)warm / days:F0} in warm water."));
         }
 
+        if (fixedDays > 0)
+        {
+            console.Print($"{Counted.Days(fixedDays)} with the sensor's own tie points for a surface or both, though tie points move: too few samples in the window; the column tie_points says which.");
+        }
+
         if (emptiedDays > 0)
         {
-            console.Print($"{Counted.Days(emptiedDays)} with ice before screens, masks and coast correction and none after them: their totals are 0.");
+            console.Print($"{Counted.Days(emptiedDays)} with ice before screens, masks and coast correction and none after them: their area is 0.");
         }
 
         if (poorDays > 0)

@@ -29,6 +29,9 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
     private static readonly KeyValuePair<string, string>[] Nothing = [];
     private static readonly KeyValuePair<string, string>[] Ancillary = [new("ancillary_variables", "concentration_se conditions")];
 
+    private static readonly KeyValuePair<string, string>[] AncillaryWithDays =
+        [new("ancillary_variables", "concentration_se conditions fill_days_before fill_days_after")];
+
     private static readonly BytePacking WholeDays = new(1.0, 0.0, 1.0, DayFillingRules.MostDays);
 
     private readonly double[] limits = [settings.Rules.IceFraction, settings.Rules.PackFraction];
@@ -44,7 +47,7 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
         List<GridVariable> variables =
         [
             new PackedVariable(
-                "concentration", "sea-ice concentration of all ice, screened for weather and clipped to 0-1", "sea_ice_area_fraction", Ancillary, "1", planes.TotalMemory, Packing.Fraction)
+                "concentration", "sea-ice concentration of all ice, screened for weather and clipped to 0-1", "sea_ice_area_fraction", sourceDays is null ? Ancillary : AncillaryWithDays, "1", planes.TotalMemory, Packing.Fraction)
             {
                 Limits = limits, // So that totals can be recomputed from the grids.
             },
@@ -64,8 +67,8 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
 
         if (sourceDays is not null)
         {
-            variables.Add(new BytePackedVariable("fill_days_before", "days back to the earlier day that the cell was filled from", null, Nothing, "days", sourceDays.Before, WholeDays));
-            variables.Add(new BytePackedVariable("fill_days_after", "days ahead to the later day that the cell was filled from", null, Nothing, "days", sourceDays.After, WholeDays));
+            variables.Add(new BytePackedVariable("fill_days_before", "days back to the earlier day that the cell was filled from", null, Nothing, "1", sourceDays.Before, WholeDays));
+            variables.Add(new BytePackedVariable("fill_days_after", "days ahead to the later day that the cell was filled from", null, Nothing, "1", sourceDays.After, WholeDays));
         }
 
         variables.Add(new MaskVariable(

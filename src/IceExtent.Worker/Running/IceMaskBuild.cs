@@ -26,16 +26,16 @@ internal sealed class IceMaskBuild(RunSettings settings, string method)
     /// <param name="to">The last day wanted, or null.</param>
     /// <param name="workers">How many months are handled at a time.</param>
     /// <param name="cancellation">Stops at the next day.</param>
-    /// <exception cref="FaultException">IE3140: the archive has no day of some month that can be read.</exception>
+    /// <exception cref="FaultException">IE3140: the archive has too few days of some month that can be read.</exception>
     public IReadOnlyList<BuiltMonth> Build(DateOnly? from, DateOnly? to, int workers, CancellationToken cancellation)
     {
         ArchiveGrids grids = new(new ArchiveLayout(settings.Output), method, settings.Grid);
         ILookup<int, string> days = grids.List(from, to).ToLookup(file => file.Day.Month, file => file.Path);
-        RefuseEmpty(month => days[month].Any());
+        RefusePoor(month => days[month].Count());
         BuiltMonth[] built = new BuiltMonth[Months];
         Parallel.For(0, Months, new ParallelOptions { MaxDegreeOfParallelism = workers, CancellationToken = cancellation }, at =>
             built[at] = Month(at + 1, grids, days[at + 1], cancellation));
-        RefuseEmpty(month => built[month - 1].Days > 0);
+        RefusePoor(month => built[month - 1].Days);
         return built;
     }
 
@@ -98,17 +98,19 @@ internal sealed class IceMaskBuild(RunSettings settings, string method)
         return new(month, counting.Days, counting.Build(), faults);
     }
 
-    private void RefuseEmpty(Func<int, bool> hasDays)
+    // A month with fewer days than a cell needs would have no ice anywhere.
+    private void RefusePoor(Func<int, int> daysOf)
     {
-        int[] empty = [.. Enumerable.Range(1, Months).Where(month => !hasDays(month))];
-        if (empty.Length > 0)
+        int least = settings.IceMask.LeastDays;
+        int[] poor = [.. Enumerable.Range(1, Months).Where(month => daysOf(month) < least)];
+        if (poor.Length > 0)
         {
             throw new FaultException(new(
                 "IE3140",
                 settings.Output,
-                $"no concentration grid of {method} in the months {string.Join(", ", empty)}",
-                "one day at least of every month of the year",
-                "Widen the period, or run the missing months with write_grids = true."));
+                FormattableString.Invariant($"too few concentration grids of {method} in the months {string.Join(", ", poor.Select(month => $"{month} ({daysOf(month)})"))}"),
+                FormattableString.Invariant($"{least} days or more of every month of the year, ice_mask.least_days"),
+                "Widen the period, or run the missing days with write_grids = true."));
         }
     }
 }
