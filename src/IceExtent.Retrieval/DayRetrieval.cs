@@ -43,6 +43,9 @@ public sealed class DayRetrieval
     /// <summary>The tuned method.</summary>
     public IConcentrationMethod Method => method;
 
+    /// <summary>The limits of the weather screens.</summary>
+    public WeatherScreens Screens => screens;
+
     /// <summary>The scatter over the pure surfaces, instrument noise left out.</summary>
     public RetrievalScatter SurfaceScatter => errors.SurfaceScatter;
 

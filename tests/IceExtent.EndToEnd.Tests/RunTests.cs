@@ -141,7 +141,7 @@ public sealed class RunTests : IDisposable
         ProgramRun ended = await ProgramRun.OfAsync("plan", run.RunFile);
 
         Assert.Equal(ExitCode.Done, ended.ExitCode);
-        Assert.Contains("1 days", ended.Results, StringComparison.Ordinal);
+        Assert.Contains("1 day,", ended.Results, StringComparison.Ordinal);
         Assert.False(Directory.Exists(run.PathOf("out")));
     }
 

@@ -15,7 +15,7 @@ internal static class CoastMinimumCommand
     public static Command Make(CommandConsole console)
     {
         Argument<string> runFile = new("RUNFILE") { Description = "The run file (TOML) of the archive." };
-        Option<int> year = CommonOptions.Count("--year", "The year whose grids are read.", _ => 0, LastYear);
+        Option<int> year = CommonOptions.Count("--year", "The year whose grids are read.", null, LastYear);
         Option<string?> method = new("--method") { Description = "A method of the run file; needed where it has several.", HelpName = "METHOD" };
         Option<string> output = new("--out") { Description = "The file to write.", HelpName = "FILE", DefaultValueFactory = _ => "minima.nc" };
         Option<bool> json = CommonOptions.Json();

@@ -38,10 +38,15 @@ internal static class CommonOptions
     public static Option<int> Workers() =>
         Count("--workers", "How many days are processed at a time; results do not depend on it.", _ => Environment.ProcessorCount, 256);
 
-    /// <summary>A whole number from 1 to a most.</summary>
-    public static Option<int> Count(string name, string description, Func<ArgumentResult, int> byDefault, int most)
+    /// <summary>A whole number from 1 to a most; without a default it must be given.</summary>
+    public static Option<int> Count(string name, string description, Func<ArgumentResult, int>? byDefault, int most)
     {
-        Option<int> option = new(name) { Description = description, HelpName = "N", DefaultValueFactory = byDefault };
+        Option<int> option = new(name) { Description = description, HelpName = "N" };
+        if (byDefault is not null)
+        {
+            option.DefaultValueFactory = byDefault;
+        }
+
         option.Validators.Add(result =>
         {
             if (result.Tokens.Count == 1 && !(int.TryParse(result.Tokens[0].Value, CultureInfo.InvariantCulture, out int count) && count >= 1 && count <= most))

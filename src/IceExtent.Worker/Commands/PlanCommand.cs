@@ -68,7 +68,7 @@ internal static class PlanCommand
         console.Print($"Grid:    {settings.Grid.Name}, methods {string.Join(", ", settings.Methods)}, grids {(settings.WriteGrids ? "written" : "not written")}");
         foreach (var span in spans)
         {
-            console.Print(string.Create(CultureInfo.InvariantCulture, $"Sensor:  {span.Sensor,-12} {span.Days,6} days, {span.First:yyyy-MM-dd} to {span.Last:yyyy-MM-dd}"));
+            console.Print(string.Create(CultureInfo.InvariantCulture, $"Sensor:  {span.Sensor,-12} {Counted.Days(span.Days),11}, {span.First:yyyy-MM-dd} to {span.Last:yyyy-MM-dd}"));
         }
 
         if (settings.Sources.Count > 1)

@@ -27,19 +27,18 @@ internal sealed class DayFinishing(DayPreparation preparation, GridArchive? grid
 
     /// <summary>Writes the grid file of a day and sums it.</summary>
     /// <param name="day">What the outputs say of the day.</param>
-    /// <param name="method">The method.</param>
-    /// <param name="scatter">The part of the errors that is alike over the correlation length.</param>
+    /// <param name="retrieval">What retrieved it; of a day made from others, what retrieved the nearest.</param>
     /// <param name="counts">What happened to the cells.</param>
     /// <param name="filled">How many were filled.</param>
     /// <param name="planes">The day.</param>
     /// <exception cref="FaultException">The grid file cannot be written: that stops the run.</exception>
     public MethodResult Publish(
-        DayLabel day, IConcentrationMethod method, RetrievalScatter scatter, RetrievalCounts counts, FilledCells filled, ConcentrationPlanes planes)
+        DayLabel day, DayRetrieval retrieval, RetrievalCounts counts, FilledCells filled, ConcentrationPlanes planes)
     {
-        TiePointState tiePoints = preparation.Settings.TiePoints.Moves(method.Name) ? day.TiePoints : TiePointState.Fixed;
-        grids?.Write(day, method, tiePoints, planes, sourceDays);
-        DailyRow[] rows = [.. preparation.Regions.Select(region => Row(day, tiePoints, region, scatter, planes))];
-        return new(method.Name, counts, filled, rows, IsEmptied(rows, planes));
+        TiePointState tiePoints = preparation.Settings.TiePoints.Moves(retrieval.Method.Name) ? day.TiePoints : TiePointState.Fixed;
+        grids?.Write(day, retrieval, tiePoints, planes, sourceDays);
+        DailyRow[] rows = [.. preparation.Regions.Select(region => Row(day, tiePoints, region, retrieval.SurfaceScatter, planes))];
+        return new(retrieval.Method.Name, counts, filled, rows, IsEmptied(rows, planes));
     }
 
     private int? FillPolarGap(int source, ConcentrationPlanes planes)

@@ -33,7 +33,7 @@ internal sealed class DayWorker(DayPreparation preparation, SampleSeries? sample
         {
             RetrievalCounts counts = observed.RetrieveWith(retrievals[method], month, coast, concentration);
             FilledCells filled = finishing.Fill(day.Date, day.Source.Index, concentration, []);
-            results[method] = finishing.Publish(label, retrievals[method].Method, retrievals[method].SurfaceScatter, counts, filled, concentration);
+            results[method] = finishing.Publish(label, retrievals[method], counts, filled, concentration);
         }
 
         return [new(day.Order, day.Date, day.Input.Files, Observed: true, null, observed.OutOfRange, results) { Sensor = label.Sensor, Tuned = tuned }];

@@ -38,12 +38,13 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
 
     /// <summary>Writes one day of one method.</summary>
     /// <param name="day">The day.</param>
-    /// <param name="method">The method.</param>
+    /// <param name="retrieval">What retrieved it.</param>
     /// <param name="tiePoints">Where the method's tie points come from.</param>
     /// <param name="planes">What is written.</param>
     /// <param name="sourceDays">How far away the days lie that cells were filled from, or null where the run fills nothing over days.</param>
-    public void Write(DayLabel day, IConcentrationMethod method, TiePointState tiePoints, ConcentrationPlanes planes, SourceDays? sourceDays)
+    public void Write(DayLabel day, DayRetrieval retrieval, TiePointState tiePoints, ConcentrationPlanes planes, SourceDays? sourceDays)
     {
+        IConcentrationMethod method = retrieval.Method;
         List<GridVariable> variables =
         [
             new PackedVariable(
@@ -78,6 +79,18 @@ internal sealed class GridArchive(RunSettings settings, ArchiveLayout layout, IR
             settings.Grid,
             day.Date,
             variables,
-            [.. attributes, new("method", method.Name), new("method_source", method.Source), new("sensor", day.Sensor), new("sensor_offsets_k", day.Offsets), new("tie_points", TiePointStates.NameOf(tiePoints))]);
+            [
+                .. attributes,
+                new("method", method.Name),
+                new("method_source", method.Source),
+                new("sensor", day.Sensor),
+                new("sensor_offsets_k", day.Offsets),
+                new("tie_points", TiePointStates.NameOf(tiePoints)),
+                new("gradient_limits", TextOf(retrieval.Screens)),
+            ]);
     }
+
+    private static string TextOf(WeatherScreens screens) => screens.Gradient2219Limit is { } second
+        ? FormattableString.Invariant($"37/19: {screens.Gradient3719Limit:F4}; 22/19: {second:F4}")
+        : FormattableString.Invariant($"37/19: {screens.Gradient3719Limit:F4}");
 }

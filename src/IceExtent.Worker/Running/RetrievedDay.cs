@@ -12,7 +12,6 @@ internal sealed class RetrievedDay
     {
         Planes = [.. Enumerable.Range(0, methods).Select(_ => new ConcentrationPlanes(cellCount))];
         Counts = new RetrievalCounts[methods];
-        Scatters = new RetrievalScatter[methods];
     }
 
     /// <summary>One set a method, in the run's order. Written by the worker that retrieves the day, then only read.</summary>
@@ -21,8 +20,8 @@ internal sealed class RetrievedDay
     /// <summary>What happened to the cells, one entry a method.</summary>
     public RetrievalCounts[] Counts { get; }
 
-    /// <summary>The scatter over the pure surfaces, one entry a method.</summary>
-    public RetrievalScatter[] Scatters { get; }
+    /// <summary>What retrieved the planes, one entry a method: methods, screens and scatter as tuned for the day.</summary>
+    public IReadOnlyList<DayRetrieval> Retrievals { get; set; } = [];
 
     /// <summary>The day's pure surfaces, or null where the run takes no samples.</summary>
     public TunedDay? Tuned { get; set; }

@@ -42,11 +42,10 @@ internal sealed class WindowWorker(DayPreparation preparation, SampleSeries? sam
         RetrievedDay room = window.Rent();
         for (int method = 0; method < retrievals.Count; method++)
         {
-            room.Scatters[method] = retrievals[method].SurfaceScatter;
             room.Counts[method] = observed.RetrieveWith(retrievals[method], month, coast, room.Planes[method]);
         }
 
-        (room.Tuned, room.OutOfRange) = (tuned, observed.OutOfRange);
+        (room.Retrievals, room.Tuned, room.OutOfRange) = (retrievals, tuned, observed.OutOfRange);
         window.Complete(day.Order, room, null);
     }
 
@@ -69,15 +68,14 @@ internal sealed class WindowWorker(DayPreparation preparation, SampleSeries? sam
         DayLabel label = DayLabel.Of(masks, shown.Tuned);
         label = retrieved is not null ? label : label with { Date = day.Date, Sensor = DayLabel.NoSensor, Status = StatusOf(near) };
         List<MethodResult> results = [];
-        IReadOnlyList<DayRetrieval> retrievals = preparation.Of(masks.Source).RetrievalsWith(null); // For their names alone.
-        for (int method = 0; method < retrievals.Count; method++)
+        for (int method = 0; method < shown.Retrievals.Count; method++)
         {
             NearDay[] planes = [.. near.Select(other => new NearDay(window.Steps[other.Step].Date.DayNumber - day.Date.DayNumber, other.Retrieved.Planes[method]))];
             TakeOver(retrieved?.Planes[method], masks.Source.Index);
             FilledCells filled = finishing.Fill(day.Date, masks.Source.Index, own, planes);
             if (retrieved is not null || filled.FromDays > 0)
             {
-                results.Add(finishing.Publish(label, retrievals[method].Method, shown.Scatters[method], retrieved?.Counts[method] ?? default, filled, own));
+                results.Add(finishing.Publish(label, shown.Retrievals[method], retrieved?.Counts[method] ?? default, filled, own));
             }
         }
 
