@@ -1,4 +1,5 @@
 using System.Numerics;
+using System.Runtime.CompilerServices;
 
 namespace IceExtent.Retrieval;
 
@@ -110,6 +111,7 @@ public sealed class SelfTuning : IConcentrationMethod
     }
 
     // Takes concentrations over water, gives variances.
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     private void ToVariance(ReadOnlySpan<float> closed, NoiseOfForms forms, Span<float> openThenVariance)
     {
         for (int cell = 0; cell < openThenVariance.Length; cell++)
@@ -130,6 +132,7 @@ public sealed class SelfTuning : IConcentrationMethod
     private static LinearForm? Projection(SurfaceMoments surface, PureSamples samples) =>
         LeastScatterAxis.Find(surface, samples.OpenWater.Center, samples.ClosedIce.Center, samples.IceDirection);
 
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     private void Blend(ReadOnlySpan<float> closed, Span<float> total)
     {
         int cell = 0;

@@ -1,3 +1,4 @@
+using System.Runtime.CompilerServices;
 using IceExtent.Grids;
 
 namespace IceExtent.Retrieval;
@@ -54,6 +55,7 @@ public sealed class ChamferDistance
     }
 
     // From the row above and the left.
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     private void Sweep(ReadOnlySpan<bool> members, int start)
     {
         Span<int> above = padded.AsSpan(start - stride, stride);
@@ -67,6 +69,7 @@ public sealed class ChamferDistance
     }
 
     // From the row below and the right.
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     private void SweepBack(int start)
     {
         Span<int> here = padded.AsSpan(start, stride);

@@ -1,3 +1,5 @@
+using System.Runtime.CompilerServices;
+
 namespace IceExtent.Retrieval;
 
 /// <summary>Drops samples that lie far from the others in one of several linear forms of their temperatures.</summary>
@@ -43,6 +45,7 @@ public sealed class OutlierTrim
         return kept;
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     private int Keep(BrightnessPlanes observed, LinearForm form, Span<int> cells)
     {
         Evaluate(observed, form, cells);
@@ -66,6 +69,7 @@ public sealed class OutlierTrim
         return kept;
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     private void Evaluate(BrightnessPlanes observed, LinearForm form, ReadOnlySpan<int> cells)
     {
         if (values.Length < cells.Length)

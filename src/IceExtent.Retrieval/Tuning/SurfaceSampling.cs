@@ -1,3 +1,4 @@
+using System.Runtime.CompilerServices;
 using System.Runtime.InteropServices;
 using IceExtent.Grids;
 
@@ -83,6 +84,7 @@ public sealed class SurfaceSampling
             .Select(channel => IceLine.Through(abscissa, new(0.0, (channel, 1.0)), firstYear, multiyear).AboveLine);
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     private void MeasureEdges()
     {
         Span<float> total = planes.Total;
@@ -101,6 +103,7 @@ public sealed class SurfaceSampling
         distance.Measure(members, fromWater);
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     private void Choose(BrightnessPlanes observed)
     {
         water.Clear();

@@ -79,7 +79,7 @@ internal sealed class SourceRetrieval
 
     /// <summary>Makes a sampling of pure surfaces with memory of its own.</summary>
     public SurfaceSampling MakeSampling() =>
-        new(choices.Grid, choices.Ocean, Make(NasaTeam.MethodName, Own, Own.Screens), Own, Channels, choices.TiePoints.Rules.Samples);
+        new(choices.Grid, choices.Ocean, new(new NasaTeam(Own.TiePoints), Own.Screens, sensor.Scatter, mask, step), Own, Channels, choices.TiePoints.Rules.Samples);
 
     /// <summary>One day's surfaces.</summary>
     /// <param name="window">The samples of the days round it, in date order.</param>
