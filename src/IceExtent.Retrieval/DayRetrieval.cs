@@ -17,6 +17,7 @@ public sealed class DayRetrieval
     private readonly ICoastStep? coast;
     private readonly SmearingFactors smearing;
     private readonly Channel[] needed;
+    private readonly float? screenedError;
 
     /// <summary>Prepares the retrieval of one sensor on one grid.</summary>
     /// <param name="method">The tuned method.</param>
@@ -27,9 +28,10 @@ public sealed class DayRetrieval
     /// <param name="smearing">How much a change from cell to cell widens the standard error, or null for not at all.</param>
     /// <param name="noise">The instrument noise, or null where it is not told apart.</param>
     /// <param name="offsetErrors">The standard errors of offsets taken off the temperatures, or null.</param>
+    /// <param name="screenedError">The standard error of a cell that a screen or a mask set to open water, or null for that of open water. Unit: 1.</param>
     public DayRetrieval(
         IConcentrationMethod method, WeatherScreens screens, RetrievalScatter scatter, CellMask mask, ICoastStep? coast = null, SmearingFactors? smearing = null,
-        ChannelNoise? noise = null, ChannelNoise? offsetErrors = null)
+        ChannelNoise? noise = null, ChannelNoise? offsetErrors = null, double? screenedError = null)
     {
         ArgumentNullException.ThrowIfNull(method);
         ArgumentNullException.ThrowIfNull(screens);
@@ -37,6 +39,7 @@ public sealed class DayRetrieval
         ArgumentNullException.ThrowIfNull(mask);
         (this.method, this.screens, this.mask, this.coast, this.smearing) = (method, screens, mask, coast, smearing ?? SmearingFactors.None);
         errors = new(method, scatter, noise ?? ChannelNoise.None, offsetErrors);
+        this.screenedError = (float?)screenedError;
         needed = [.. method.Channels];
     }
 
@@ -86,6 +89,11 @@ public sealed class DayRetrieval
         }
 
         counts = coast is null ? counts : counts with { CoastCorrected = CorrectCoast(coast, observed, into) };
+        if (screenedError is { } screened)
+        {
+            ScreenedError.Apply(into.Conditions, screened, into.StandardError);
+        }
+
         EdgeSmearing.Apply(into.Total, mask.Columns, smearing, into.StandardError);
         return counts;
     }

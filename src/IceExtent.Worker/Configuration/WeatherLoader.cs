@@ -17,6 +17,7 @@ internal static class WeatherLoader
         int before = faults.Count;
         string? limits = layered.Name("weather", "limits", LimitNames);
         double? fraction = layered.Number("weather", "retuned_ice_fraction", 0.01, 0.50, string.Empty);
+        double? screened = layered.Number("weather", "screened_error_fraction", 0.001, 0.50, string.Empty);
         double? north = layered.Number("weather", "warm_water_north_k", 270.0, 300.0, "K");
         double? south = layered.Number("weather", "warm_water_south_k", 270.0, 300.0, "K");
         string? iceMask = layered.Text("weather", "ice_mask_file");
@@ -36,6 +37,7 @@ internal static class WeatherLoader
             : new(
                 (ScreenLimits)Array.IndexOf(LimitNames, limits),
                 fraction!.Value,
+                screened!.Value,
                 icePath,
                 warmPath,
                 warmKelvins,

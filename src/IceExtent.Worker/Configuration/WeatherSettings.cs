@@ -15,6 +15,7 @@ internal enum ScreenLimits
 /// <summary>What a run does about weather that looks like ice.</summary>
 /// <param name="Limits">Where the limits of the screens come from.</param>
 /// <param name="RetunedIceFraction">The largest concentration that retuned limits may remove. Unit: 1.</param>
+/// <param name="ScreenedErrorFraction">The standard error of a cell that a screen or a mask set to open water. Unit: 1.</param>
 /// <param name="IceMaskPath">The file of the ice mask, absolute, or null.</param>
 /// <param name="WarmWaterPath">The file of sea-surface temperatures, absolute, or null.</param>
 /// <param name="WarmWaterKelvins">A sea warmer than this has no ice. Unit: K.</param>
@@ -22,6 +23,7 @@ internal enum ScreenLimits
 internal sealed record WeatherSettings(
     ScreenLimits Limits,
     double RetunedIceFraction,
+    double ScreenedErrorFraction,
     string? IceMaskPath,
     string? WarmWaterPath,
     double WarmWaterKelvins,
@@ -42,6 +44,7 @@ internal sealed record WeatherSettings(
 
     private IEnumerable<string> Choices()
     {
+        yield return FormattableString.Invariant($"standard error of screened cells {ScreenedErrorFraction:R}");
         yield return Limits == ScreenLimits.Retuned ? FormattableString.Invariant($"limits retuned to {RetunedIceFraction:R} of ice") : "limits fixed";
         if (IceMaskPath is not null)
         {

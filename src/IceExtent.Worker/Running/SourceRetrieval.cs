@@ -89,7 +89,7 @@ internal sealed class SourceRetrieval
     {
         IConcentrationMethod method = ConcentrationMethods.Create(name, tuning, choices.Grid.Hemisphere);
         RetrievalScatter scatter = tuning.Samples is { } samples ? RetrievalScatter.Of(method, samples) : sensor.Scatter;
-        return new(method, screens, scatter, mask, step, choices.Smearing, sensor.NoiseKelvins, offsetErrors);
+        return new(method, screens, scatter, mask, step, choices.Smearing, sensor.NoiseKelvins, offsetErrors, choices.Weather.ScreenedErrorFraction);
     }
 
     private Channel[] Needed(IReadOnlyCollection<Channel> available)
