@@ -1,7 +1,7 @@
 using System.Numerics;
 using System.Runtime.CompilerServices;
-using System.Runtime.Intrinsics;
 using IceExtent.Grids;
+using IceExtent.Retrieval;
 
 namespace IceExtent.Statistics;
 
@@ -16,9 +16,6 @@ public sealed class ErrorCorrelation
     /// <summary>The most powers of the correlation that are prepared.</summary>
     public const int MostPowers = 5;
 
-    /// <summary>Two cells of 25 km: near the footprint at 19 GHz.</summary>
-    public const double DefaultFootprintMeters = 50_000.0;
-
     private const double ReachInLengths = 3.5; // exp(−3.5²/2) = 0.2 %: what lies farther off is nothing.
     private const double BlocksPerLength = 3.0;
 
@@ -30,7 +27,7 @@ public sealed class ErrorCorrelation
     /// <param name="lengthMeters">The correlation length L, in m.</param>
     /// <param name="footprintMeters">The side of the squares inside which local errors are alike, in m.</param>
     /// <exception cref="ArgumentOutOfRangeException">A length is not positive.</exception>
-    public ErrorCorrelation(Grid grid, double lengthMeters, double footprintMeters = DefaultFootprintMeters)
+    public ErrorCorrelation(Grid grid, double lengthMeters, double footprintMeters)
     {
         ArgumentOutOfRangeException.ThrowIfLessThanOrEqual(footprintMeters, 0.0);
         ArgumentNullException.ThrowIfNull(grid);
@@ -102,10 +99,10 @@ public sealed class ErrorCorrelation
             }
 
             // The blur is symmetric, so a pair of rows counts twice from one side.
-            sum += kernel[0] * Dot(from, blurred);
+            sum += kernel[0] * OrderedSum.OfProducts(from, blurred);
             for (int apart = 1; apart < kernel.Length && apart <= row; apart++)
             {
-                sum += 2.0 * kernel[apart] * Dot(from, across.Slice((row - apart) * BlockColumns, BlockColumns));
+                sum += 2.0 * kernel[apart] * OrderedSum.OfProducts(from, across.Slice((row - apart) * BlockColumns, BlockColumns));
             }
         }
 
@@ -121,25 +118,6 @@ public sealed class ErrorCorrelation
         }
 
         return values;
-    }
-
-    // Four lanes on every machine, so the sum has one order everywhere.
-    private static double Dot(ReadOnlySpan<double> left, ReadOnlySpan<double> right)
-    {
-        Vector256<double> lanes = Vector256<double>.Zero;
-        int index = 0;
-        for (; index <= left.Length - Vector256<double>.Count; index += Vector256<double>.Count)
-        {
-            lanes += Vector256.Create(left[index..]) * Vector256.Create(right[index..]);
-        }
-
-        double sum = Vector256.Sum(lanes);
-        for (; index < left.Length; index++)
-        {
-            sum += left[index] * right[index];
-        }
-
-        return sum;
     }
 
     private static void Accumulate(ReadOnlySpan<double> from, double factor, Span<double> to)

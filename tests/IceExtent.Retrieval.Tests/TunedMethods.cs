@@ -36,7 +36,7 @@ internal static class TunedMethods
     {
         Bootstrap bootstrap => Math.Abs(bootstrap.PolarizationMode.AboveLine.At(surface) + Bootstrap.ClosedIceMarginKelvins) < 1e-3,
         SelfTuning blend => Math.Min(
-            Math.Abs(blend.OverWater.At(surface) - SelfTuning.FixedBlend.From), Math.Abs(blend.OverWater.At(surface) - SelfTuning.FixedBlend.To)) < 1e-4,
+            Math.Abs(blend.OverWater.At(surface) - ProjectionBlend.Whole.From), Math.Abs(blend.OverWater.At(surface) - ProjectionBlend.Whole.To)) < 1e-4,
         _ => false,
     };
 

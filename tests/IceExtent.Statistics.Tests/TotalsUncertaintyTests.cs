@@ -24,7 +24,7 @@ public sealed class TotalsUncertaintyTests
         float[] total = Edge(grid);
         float[] errors = Enumerable.Repeat((float)cellError, grid.CellCount).ToArray();
 
-        (double extent, double area) = new TotalsUncertainty(new ErrorCorrelation(grid, Length))
+        (double extent, double area) = new TotalsUncertainty(new ErrorCorrelation(grid, Length, 50_000.0))
             .StandardErrorsSquareMeters(region, total, errors, 0.15);
 
         (double drawnExtent, double drawnArea) = MonteCarlo(grid, total, cellError);
@@ -45,11 +45,11 @@ public sealed class TotalsUncertaintyTests
         float[] errors = Enumerable.Repeat(0.12f, grid.CellCount).ToArray();
         RetrievalScatter scatter = new(0.06, 0.06); // Of cells between, less: as much as the mixture leaves.
 
-        (double extent, double area) = new TotalsUncertainty(new ErrorCorrelation(grid, Length))
+        (double extent, double area) = new TotalsUncertainty(new ErrorCorrelation(grid, Length, 50_000.0))
             .StandardErrorsSquareMeters(region, total, errors, 0.15, scatter);
 
         (_, double drawnArea) = MonteCarlo(grid, total, 0.12, cell => scatter.At(total[cell]));
-        (double whole, double wholeArea) = new TotalsUncertainty(new ErrorCorrelation(grid, Length)).StandardErrorsSquareMeters(region, total, errors, 0.15);
+        (double whole, double wholeArea) = new TotalsUncertainty(new ErrorCorrelation(grid, Length, 50_000.0)).StandardErrorsSquareMeters(region, total, errors, 0.15);
         Assert.InRange(area / drawnArea, 0.95, 1.05);
         Assert.True(area < 0.9 * wholeArea);
         Assert.Equal(whole, extent);
@@ -62,7 +62,7 @@ public sealed class TotalsUncertaintyTests
         TotalsRegion region = TotalsRegion.Hemisphere(grid, SmallGrid.AllOcean(grid));
         float[] nothing = Enumerable.Repeat(float.NaN, 9).ToArray();
 
-        (double extent, double area) = new TotalsUncertainty(new ErrorCorrelation(grid, Length))
+        (double extent, double area) = new TotalsUncertainty(new ErrorCorrelation(grid, Length, 50_000.0))
             .StandardErrorsSquareMeters(region, nothing, nothing, 0.15);
 
         Assert.Equal(0.0, extent);

@@ -22,7 +22,7 @@ public static class ConcentrationMethods
             NasaTeam.MethodName => new NasaTeam(tuning.TiePoints),
             Bootstrap.MethodName => tuning.Surfaces is { } surfaces ? new Bootstrap(surfaces, hemisphere) : null,
             Bristol.MethodName => tuning.Surfaces is { } surfaces ? new Bristol(surfaces) : null,
-            SelfTuning.MethodName => tuning.Surfaces is { } surfaces ? SelfTuning.From(surfaces, tuning.Samples) : null,
+            SelfTuning.MethodName => tuning.Surfaces is { } surfaces ? SelfTuning.From(surfaces, tuning.Samples, tuning.Blend ?? ProjectionBlend.Whole) : null,
             Polynomial89.MethodName => tuning.Polarization89 is { } points ? new Polynomial89(points) : null,
             _ => throw new ArgumentException($"There is no method {name}.", nameof(name)),
         };

@@ -6,7 +6,7 @@ namespace IceExtent.Retrieval;
 /// <summary>Two projections, one that scatters least over open water and one over closed ice, blended by concentration.</summary>
 /// <remarks>
 /// The weight of the first falls from 1 to 0 between two concentrations that it finds itself. Source: [Tonboe2016], [Lavergne2019]; the
-/// two concentrations are from memory (high). With the samples of the day's window the projections are those of
+/// two concentrations are in config, from memory (high). With the samples of the day's window the projections are those of
 /// <see cref="LeastScatterAxis"/>. Without, they are the fixed pair of [Tonboe2016]: Bootstrap in frequency mode over water and Bristol
 /// over ice, with the same blend.
 /// </remarks>
@@ -22,15 +22,12 @@ public sealed class SelfTuning : IConcentrationMethod
     private readonly float blendFrom;
     private readonly float inverseBlend;
 
-    private SelfTuning(LinearForm overWater, LinearForm overIce, double blendFrom, double blendTo)
+    private SelfTuning(LinearForm overWater, LinearForm overIce, ProjectionBlend blend)
     {
         (OverWater, OverIce) = (overWater, overIce);
         (this.overWater, this.overIce) = (new(overWater), new(overIce));
-        (this.blendFrom, inverseBlend) = ((float)blendFrom, (float)(1.0 / (blendTo - blendFrom)));
+        (this.blendFrom, inverseBlend) = ((float)blend.From, (float)(1.0 / (blend.To - blend.From)));
     }
-
-    /// <summary>The blend where the tuning has no samples: the values of [Lavergne2019], as in config/defaults.toml.</summary>
-    public static (double From, double To) FixedBlend { get; } = (0.7, 0.9);
 
     /// <summary>The projection used up to the lower end of the blend.</summary>
     public LinearForm OverWater { get; }
@@ -53,19 +50,21 @@ public sealed class SelfTuning : IConcentrationMethod
     /// <summary>Tunes the method.</summary>
     /// <param name="surfaces">The pure surfaces of the day, or the sensor's own.</param>
     /// <param name="samples">The samples behind them, or null.</param>
+    /// <param name="blend">Where the fixed pair changes, if there are no samples.</param>
     /// <exception cref="ArgumentException">The surfaces leave no solution.</exception>
-    public static SelfTuning From(SurfacePoints surfaces, PureSamples? samples)
+    public static SelfTuning From(SurfacePoints surfaces, PureSamples? samples, ProjectionBlend blend)
     {
         ArgumentNullException.ThrowIfNull(surfaces);
+        ArgumentNullException.ThrowIfNull(blend);
         if (samples is not null
             && Projection(samples.OpenWater, samples) is { } water
             && Projection(samples.ClosedIce, samples) is { } ice)
         {
-            return new(water, ice, samples.BlendFrom, samples.BlendTo);
+            return new(water, ice, samples.Blend);
         }
 
         IceLine frequency = IceLine.Through(new(0.0, (Channel.V37, 1.0)), new(0.0, (Channel.V19, 1.0)), surfaces.FirstYear, surfaces.Multiyear);
-        return new(frequency.Concentration(surfaces.OpenWater), new Bristol(surfaces).Line.Concentration(surfaces.OpenWater), FixedBlend.From, FixedBlend.To);
+        return new(frequency.Concentration(surfaces.OpenWater), new Bristol(surfaces).Line.Concentration(surfaces.OpenWater), blend);
     }
 
     /// <inheritdoc/>

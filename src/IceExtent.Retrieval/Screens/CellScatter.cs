@@ -96,7 +96,7 @@ public static class CellScatter
         public readonly Vector<float> Water = new((float)scatter.OpenWaterFraction);
         public readonly Vector<float> Loose = new((float)scatter.LooseIceFraction);
         public readonly Vector<float> Closing = new((float)(scatter.ClosedIceFraction - scatter.LooseIceFraction));
-        public readonly Vector<float> LooseTo = new((float)RetrievalScatter.LooseTo);
-        public readonly Vector<float> InverseChange = new((float)(1.0 / (RetrievalScatter.ClosedFrom - RetrievalScatter.LooseTo)));
+        public readonly Vector<float> LooseTo = new((float)scatter.Blend.From);
+        public readonly Vector<float> InverseChange = new((float)(1.0 / (scatter.Blend.To - scatter.Blend.From)));
     }
 }

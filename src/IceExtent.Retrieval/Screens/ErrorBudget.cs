@@ -37,6 +37,7 @@ public sealed class ErrorBudget
             ? new(Rest(scatter.OpenWaterFraction, noise.VarianceOf(pure.OpenWater)), Rest(scatter.ClosedIceFraction, iceVariance))
             {
                 LooseIceFraction = Rest(scatter.LooseIceFraction, iceVariance),
+                Blend = scatter.Blend,
             }
             : scatter;
     }

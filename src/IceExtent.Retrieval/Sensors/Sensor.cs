@@ -8,12 +8,14 @@ namespace IceExtent.Retrieval;
 /// <param name="Surfaces">The pure surfaces of methods that are linear in temperature, or null where none are known.</param>
 /// <param name="Polarization89">The pure surfaces at 85 to 91 GHz, or null where none are known.</param>
 /// <param name="Samples">The samples the surfaces come from, or null for the sensor's own.</param>
+/// <param name="Blend">Where self-tuning changes its projection, or null where nothing says.</param>
 public sealed record HemisphereTuning(
     TiePoints TiePoints,
     WeatherScreens Screens,
     SurfacePoints? Surfaces = null,
     PolarizationPoints? Polarization89 = null,
-    PureSamples? Samples = null);
+    PureSamples? Samples = null,
+    ProjectionBlend? Blend = null);
 
 /// <summary>Gradient ratios above which a cell is open water.</summary>
 /// <param name="Gradient3719Limit">GR(37V/19V), without unit.</param>
@@ -36,18 +38,14 @@ public sealed record RetrievalScatter(double OpenWaterFraction, double ClosedIce
     /// </summary>
     public double LooseIceFraction { get; init; } = ClosedIceFraction;
 
-    /// <summary>Up to this concentration ice is loose, and from <see cref="ClosedFrom"/> on it is closed; a straight line between. Unit: 1.</summary>
-    public static double LooseTo { get; } = SelfTuning.FixedBlend.From;
-
-    /// <inheritdoc cref="LooseTo"/>
-    public static double ClosedFrom { get; } = SelfTuning.FixedBlend.To;
+    /// <summary>Where loose ice becomes closed, by a straight line; of no weight where both scatter alike.</summary>
+    public ProjectionBlend Blend { get; init; } = ProjectionBlend.Whole;
 
     /// <summary>The standard deviation that the pure surfaces give a cell: the plain twin of <see cref="CellScatter"/>. Unit: 1.</summary>
     /// <param name="fraction">The cell's concentration, 0 to 1.</param>
     public double At(double fraction)
     {
-        double closed = Math.Clamp((fraction - LooseTo) / (ClosedFrom - LooseTo), 0.0, 1.0);
-        double ice = LooseIceFraction + (closed * (ClosedIceFraction - LooseIceFraction));
+        double ice = LooseIceFraction + (Blend.ShareAt(fraction) * (ClosedIceFraction - LooseIceFraction));
         double water = (1.0 - fraction) * OpenWaterFraction;
         return Math.Sqrt((water * water) + (fraction * fraction * ice * ice));
     }
@@ -64,6 +62,7 @@ public sealed record RetrievalScatter(double OpenWaterFraction, double ClosedIce
         return new(Scatter(samples.OpenWater, samples.OpenWater.Center), Scatter(samples.ClosedIce, samples.ClosedIce.Center))
         {
             LooseIceFraction = Scatter(samples.ClosedIce, half),
+            Blend = samples.Blend,
         };
 
         double Scatter(SurfaceMoments surface, ChannelKelvins at) => Math.Sqrt(surface.VarianceOf(method.TangentAt(at)));

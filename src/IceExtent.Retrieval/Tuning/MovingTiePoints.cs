@@ -104,7 +104,7 @@ public static class MovingTiePoints
 
     private static PureSamples? Samples(HemisphereTuning own, SurfaceMoments water, SurfaceMoments ice, TuningRules rules) =>
         own.Surfaces is { } surfaces && LeastScatterAxis.Space.All(ice.Channels.Contains)
-            ? new(water, ice, IceDirection.Of(ice, LeastScatterAxis.Space, Apart(surfaces.FirstYear, surfaces.Multiyear, LeastScatterAxis.Space), rules.LeastElongation), rules.BlendFrom, rules.BlendTo)
+            ? new(water, ice, IceDirection.Of(ice, LeastScatterAxis.Space, Apart(surfaces.FirstYear, surfaces.Multiyear, LeastScatterAxis.Space), rules.LeastElongation), rules.Blend)
             : null;
 
     private static (ChannelKelvins FirstYear, ChannelKelvins Multiyear) OntoLine(

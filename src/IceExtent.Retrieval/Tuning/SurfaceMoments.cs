@@ -1,6 +1,5 @@
 using System.Buffers;
 using System.Runtime.CompilerServices;
-using System.Runtime.Intrinsics;
 
 namespace IceExtent.Retrieval;
 
@@ -46,7 +45,7 @@ public sealed class SurfaceMoments
             mean[first] = Deviate(observed.Kelvins(channels[first]), cells, deviations);
             for (int second = 0; second <= first; second++)
             {
-                double sum = Dot(deviations, room.AsSpan(second * cells.Length, cells.Length));
+                double sum = OrderedSum.OfProducts(deviations, room.AsSpan(second * cells.Length, cells.Length));
                 products[(first * channels.Length) + second] = sum;
                 products[(second * channels.Length) + first] = sum;
             }
@@ -120,26 +119,6 @@ public sealed class SurfaceMoments
         }
 
         return mean;
-    }
-
-    // Four lanes on every machine, so the sum has one order everywhere.
-    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
-    private static double Dot(ReadOnlySpan<double> left, ReadOnlySpan<double> right)
-    {
-        Vector256<double> lanes = Vector256<double>.Zero;
-        int index = 0;
-        for (; index <= left.Length - Vector256<double>.Count; index += Vector256<double>.Count)
-        {
-            lanes += Vector256.Create(left[index..]) * Vector256.Create(right[index..]);
-        }
-
-        double sum = Vector256.Sum(lanes);
-        for (; index < left.Length; index++)
-        {
-            sum += left[index] * right[index];
-        }
-
-        return sum;
     }
 
     // The sums of two sets about their common mean: [Chan1983].

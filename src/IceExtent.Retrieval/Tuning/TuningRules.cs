@@ -10,8 +10,7 @@ namespace IceExtent.Retrieval;
 /// The ice line takes its direction from the samples where their standard deviation along it is at least so many times the one across it,
 /// else from the fixed tie points. Unit: 1.
 /// </param>
-/// <param name="BlendFrom">Up to this concentration self-tuning uses the projection that is best over open water. Unit: 1.</param>
-/// <param name="BlendTo">From this one on, the projection that is best over closed ice. Unit: 1.</param>
+/// <param name="Blend">Where self-tuning changes its projection.</param>
 public sealed record TuningRules(
     SampleRules Samples,
     int DaysBehind,
@@ -19,8 +18,7 @@ public sealed record TuningRules(
     int LeastSamples,
     int LeastDays,
     double LeastElongation,
-    double BlendFrom,
-    double BlendTo)
+    ProjectionBlend Blend)
 {
     /// <summary>Whether a surface has samples enough.</summary>
     /// <param name="days">Its samples, one entry a day that has any.</param>

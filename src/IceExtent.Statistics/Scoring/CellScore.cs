@@ -10,7 +10,8 @@ public readonly record struct CellScore(long Cells, double Sum, double Squares, 
 {
     // Two-sided limits of the normal distribution.
     private const double Limit68 = 0.994457883;
-    private const double Limit95 = 1.959963985;
+    /// <summary>Standard errors on either side that hold 95 % of a normal distribution.</summary>
+    public const double Limit95 = 1.959963985;
 
     /// <summary>Mean of retrieved less true concentration; NaN without a cell. Unit: 1.</summary>
     public double Bias => Sum / Cells;

@@ -71,7 +71,7 @@ internal sealed record RunSettings
 
     public required double LandLimitFraction { get; init; }
 
-    public required double ErrorLengthMeters { get; init; }
+    public required ErrorLengths ErrorLengths { get; init; }
 
     /// <summary>How much a change from cell to cell widens a standard error.</summary>
     public required SmearingFactors Smearing { get; init; }

@@ -6,7 +6,7 @@ using IceExtent.Storage.Faults;
 namespace IceExtent.Worker.Configuration;
 
 /// <summary>What config/defaults.toml says of totals, coasts and weather, for commands that have no run file.</summary>
-internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction, double ErrorLengthMeters, SmearingFactors Smearing, CoastSettings Coast, TiePointSettings TiePoints, WeatherSettings Weather)
+internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction, ErrorLengths ErrorLengths, SmearingFactors Smearing, CoastSettings Coast, TiePointSettings TiePoints, WeatherSettings Weather)
 {
     /// <summary>Reads them.</summary>
     /// <param name="config">Where they stand.</param>
@@ -34,6 +34,7 @@ internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction
         double? pack = layered.Number("totals", "pack_fraction", 0.01, 1.0, string.Empty);
         double? land = layered.Number("land", "limit_fraction", 0.01, 1.0, string.Empty);
         double? length = layered.Number("standard_error", "correlation_length_km", 1.0, 3_000.0, "km");
+        double? footprint = layered.Number("standard_error", "footprint_km", 1.0, 500.0, "km");
         double? smearing = layered.Number("standard_error", "smearing_factor", 0.0, 1.0, string.Empty);
         double? curvature = layered.Number("standard_error", "curvature_factor", 0.0, 10.0, string.Empty);
         CoastSettings? correction = CoastLoader.Load(coastal, grid, folder, faults);
@@ -41,7 +42,7 @@ internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction
         WeatherSettings? weather = WeatherLoader.Load(layered, grid, folder, faults);
         layered.RefuseUnknown();
         return faults.Count == 0
-            ? new(new TotalsRules(ice!.Value, pack!.Value), land!.Value, length!.Value * 1_000.0, new(smearing!.Value, curvature!.Value), correction!, tiePoints!, weather!)
+            ? new(new TotalsRules(ice!.Value, pack!.Value), land!.Value, new(length!.Value * 1_000.0, footprint!.Value * 1_000.0), new(smearing!.Value, curvature!.Value), correction!, tiePoints!, weather!)
             : throw new ConfigurationException(faults);
     }
 }

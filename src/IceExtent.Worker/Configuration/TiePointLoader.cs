@@ -40,7 +40,7 @@ internal static class TiePointLoader
             return null;
         }
 
-        return new(moving.Value, new(samples, behind.Value, ahead.Value, leastSamples.Value, leastDays.Value, elongation.Value, from.Value, to.Value));
+        return new(moving.Value, new(samples, behind.Value, ahead.Value, leastSamples.Value, leastDays.Value, elongation.Value, new(from.Value, to.Value)));
     }
 
     private static SampleRules? Samples(LayeredScope layered, double iceFraction)

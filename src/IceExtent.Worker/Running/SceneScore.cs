@@ -38,7 +38,7 @@ internal sealed class SceneScore
             : null;
         source = new(choices, scene.Sensor, [.. scene.Channels], mask, step);
         region = TotalsRegion.Hemisphere(scene.Grid, ocean);
-        correlation = new(scene.Grid, defaults.ErrorLengthMeters);
+        correlation = new(scene.Grid, defaults.ErrorLengths.FarMeters, defaults.ErrorLengths.FootprintMeters);
     }
 
     /// <summary>Scores days, several at a time; the result does not depend on how many.</summary>

@@ -33,7 +33,6 @@ internal sealed record ErrorTrend(string Method, double ErrorSquareKilometersPer
 /// <summary>Sums scored days up.</summary>
 internal static class ScoreSummary
 {
-    private const double Limit95 = 1.959963985;
     private const double SquareMetersPerSquareKilometer = 1e6;
     private const double DaysPerDecade = 3652.5;
     private const int LeastDaysOfATrend = 730;
@@ -66,7 +65,7 @@ internal static class ScoreSummary
         (DayScore Score, double ExtentError)[] days = [.. scored.Where(day => (day.Date.Month - 1) / 3 == season).Select(day => day.Methods[method])];
         double[] errors = [.. days.Select(day => Error(day.Score) / day.Score.TrueExtentSquareMeters)];
         double[] edges = [.. days.Select(day => day.Score.EdgeErrorMeters / 1_000.0).Where(double.IsFinite)];
-        int held = days.Count(day => Math.Abs(Error(day.Score)) <= Limit95 * day.ExtentError);
+        int held = days.Count(day => Math.Abs(Error(day.Score)) <= CellScore.Limit95 * day.ExtentError);
         return new(
             methods[method],
             SeasonNames[season],

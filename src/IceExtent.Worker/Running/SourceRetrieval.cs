@@ -57,7 +57,7 @@ internal sealed class SourceRetrieval
     public CoastBrightness? Coast { get; }
 
     /// <summary>The sensor's own surfaces.</summary>
-    private HemisphereTuning Own => sensor.In(choices.Grid.Hemisphere);
+    private HemisphereTuning Own => sensor.In(choices.Grid.Hemisphere) with { Blend = choices.TiePoints.Rules.Blend };
 
     /// <summary>One retrieval a method, in the run's order.</summary>
     /// <param name="tuned">The surfaces of the day, or null for the sensor's own.</param>

@@ -10,7 +10,7 @@ internal static class PureDays
 
     public static SampleRules Samples { get; } = new(0.15, 0.95, 50_000.0, 50_000.0, 50_000.0, 250_000.0, 4.0);
 
-    public static TuningRules Rules { get; } = new(Samples, 7, 7, 100, 3, 2.0, 0.7, 0.9);
+    public static TuningRules Rules { get; } = new(Samples, 7, 7, 100, 3, 2.0, new(0.7, 0.9));
 
     /// <summary>One surface of the sensor in every channel.</summary>
     public static double Kelvins(Channel channel, Func<TiePoints, TiePoint> point, Func<SurfacePoints, ChannelKelvins> surface) => channel switch

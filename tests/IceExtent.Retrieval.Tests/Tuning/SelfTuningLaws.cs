@@ -36,7 +36,7 @@ public sealed class SelfTuningLaws
         Gen.Select(Gen.Double[150, 280], Gen.Double[150, 280], Gen.Double[100, 270]).Array[1, 40].Sample(pixels =>
         {
             TunedDay tuned = MovingTiePoints.Tune(PureDays.Own, [.. Enumerable.Range(1, 4).Select(seed => PureDays.Day(seed))], PureDays.Rules);
-            SelfTuning method = SelfTuning.From(tuned.Tuning.Surfaces!, tuned.Tuning.Samples);
+            SelfTuning method = SelfTuning.From(tuned.Tuning.Surfaces!, tuned.Tuning.Samples, PureDays.Rules.Blend);
             BrightnessPlanes observed = new(pixels.Length, method.Channels);
             for (int cell = 0; cell < pixels.Length; cell++)
             {
@@ -61,9 +61,9 @@ public sealed class SelfTuningLaws
     public void From_WaterOnTheIceLine_FallsBackToTheFixedPair()
     {
         DaySamples day = PureDays.Day(7);
-        PureSamples samples = new(day.ClosedIce, day.ClosedIce, Line(day), 0.7, 0.9);
+        PureSamples samples = new(day.ClosedIce, day.ClosedIce, Line(day), PureDays.Rules.Blend);
 
-        SelfTuning method = SelfTuning.From(PureDays.Own.Surfaces!, samples);
+        SelfTuning method = SelfTuning.From(PureDays.Own.Surfaces!, samples, PureDays.Rules.Blend);
 
         Assert.Equal(0.0, method.OverWater.At(PureDays.Own.Surfaces!.OpenWater), 1e-9);
         Assert.Equal(1.0, method.OverIce.At(PureDays.Own.Surfaces!.Multiyear), 1e-9);
