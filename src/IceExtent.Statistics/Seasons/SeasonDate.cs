@@ -8,15 +8,16 @@ namespace IceExtent.Statistics.Seasons;
 /// </remarks>
 public readonly record struct SeasonDate
 {
-    private readonly short day;
+    private readonly short day; // Narrow: millions of these are held at a time.
     private readonly short earliest;
     private readonly short latest;
+    private readonly byte stored;
 
     private SeasonDate(SeasonDateState state, int day, int earliest, int latest) =>
-        (State, this.day, this.earliest, this.latest) = (state, checked((short)day), checked((short)earliest), checked((short)latest));
+        (stored, this.day, this.earliest, this.latest) = ((byte)state, checked((short)day), checked((short)earliest), checked((short)latest));
 
     /// <summary>Whether there is a date.</summary>
-    public SeasonDateState State { get; }
+    public SeasonDateState State => (SeasonDateState)stored;
 
     /// <summary>The day, or null where it is not <see cref="SeasonDateState.Found"/>.</summary>
     public int? Day => State == SeasonDateState.Found ? day : null;

@@ -1,7 +1,7 @@
 namespace IceExtent.Statistics.Seasons;
 
 /// <summary>Whether a date of a season is known, and why not where it is not.</summary>
-public enum SeasonDateState : byte
+public enum SeasonDateState
 {
     /// <summary>The day is known.</summary>
     Found,
