@@ -1,0 +1,30 @@
+namespace IceExtent.Statistics.Seasons;
+
+/// <summary>Which days a series of one ice year holds. Unit: days from the year's first day.</summary>
+/// <param name="Year">The ice year.</param>
+/// <param name="Lead">Days of the series before the year's first day.</param>
+/// <param name="Tail">Days of the series after its last day.</param>
+/// <param name="RecordFirst">The record's first day, which may lie far before the year.</param>
+/// <param name="RecordLast">The record's last day, which may lie far after it.</param>
+public readonly record struct IceYearSpan(IceYear Year, int Lead, int Tail, int RecordFirst, int RecordLast)
+{
+    /// <summary>The number of days.</summary>
+    public int Days => Lead + Year.Length + Tail;
+
+    /// <summary>The date of the first of them.</summary>
+    public DateOnly FirstDate => Year.DateOf(-Lead);
+
+    /// <summary>Whether no later day can change what is found.</summary>
+    public bool IsComplete => RecordLast >= Year.Length - 1 + Tail;
+
+    /// <summary>The days that a scheme needs for one ice year of a record.</summary>
+    /// <param name="year">The ice year.</param>
+    /// <param name="scheme">The scheme.</param>
+    /// <param name="recordFirst">The record's first day.</param>
+    /// <param name="recordLast">The record's last day.</param>
+    public static IceYearSpan Of(IceYear year, SeasonScheme scheme, DateOnly recordFirst, DateOnly recordLast)
+    {
+        ArgumentNullException.ThrowIfNull(scheme);
+        return new(year, scheme.LeadDays, scheme.TailDays, year.DayOf(recordFirst), year.DayOf(recordLast));
+    }
+}
