@@ -11,6 +11,8 @@ internal sealed record ConfigFolder(string Path)
 
     public string Grids => System.IO.Path.Combine(Path, "grids");
 
+    public string Seasons => System.IO.Path.Combine(Path, "seasons");
+
     public string Scenes => System.IO.Path.Combine(Path, "scenes");
 
     public string Demo => System.IO.Path.Combine(Path, "demo");

@@ -32,7 +32,9 @@ internal static class RunFileLoader
         List<string> methods = Methods(scope);
         bool? writeGrids = scope.Flag("write_grids", required: false);
         string? notice = scope.Text("notice", required: false);
-        LayeredScope layered = new(scope, new(defaults, string.Empty, faults));
+        ConfigScope shipped = new(defaults, string.Empty, faults);
+        LayeredScope layered = new(scope, shipped);
+        SeasonSettings? season = grid is null ? null : SeasonLoader.Load(scope, shipped, config, grid.Grid.Hemisphere, folder, faults);
         TotalsRules? rules = Rules(layered);
         double? landLimit = layered.Number("land", "limit_fraction", 0.01, 1.0, string.Empty);
         double? errorLength = layered.Number("standard_error", "correlation_length_km", 1.0, 3_000.0, "km");
@@ -80,6 +82,7 @@ internal static class RunFileLoader
             ErrorLengths = new(errorLength!.Value * 1_000.0, footprint!.Value * 1_000.0),
             Smearing = new(smearing!.Value, curvature!.Value),
             Overlap = overlap!,
+            Season = season,
             Notice = notice,
             Sources = [.. loaded.OfType<RunSource>()],
         };

@@ -79,6 +79,9 @@ internal sealed record RunSettings
     /// <summary>How days that two sensors both saw are compared.</summary>
     public required OverlapSettings Overlap { get; init; }
 
+    /// <summary>How season dates are found, or null where the run finds none. It decides no number of the days.</summary>
+    public required SeasonSettings? Season { get; init; }
+
     /// <summary>A line that every output carries, or null.</summary>
     public required string? Notice { get; init; }
 
