@@ -3,6 +3,7 @@ using IceExtent.Storage.Writing;
 using IceExtent.TestKit;
 using IceExtent.Worker;
 using IceExtent.Worker.Running;
+using IceExtent.Worker.Seasons;
 
 namespace IceExtent.EndToEnd.Tests;
 
@@ -250,6 +251,10 @@ public sealed class BadInputTests : IDisposable
         }
 
         public void DayDone(DayResult result)
+        {
+        }
+
+        public void SeasonDone(SeasonYearReport year)
         {
         }
     }

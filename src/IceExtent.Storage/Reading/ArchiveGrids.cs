@@ -13,8 +13,9 @@ namespace IceExtent.Storage.Reading;
 public sealed class ArchiveGrids(ArchiveLayout layout, string method, Grid grid)
 {
     private const string Concentration = "concentration";
+    private const string ConcentrationError = "concentration_se";
 
-    private readonly KelvinRules rules = new(); // The rules of packing are the same for every unit.
+    private readonly GridPlaneReader planes = new(grid);
 
     /// <summary>Lists the days of a period that have a file, in order.</summary>
     /// <param name="from">The first day wanted, or null.</param>
@@ -48,12 +49,19 @@ public sealed class ArchiveGrids(ArchiveLayout layout, string method, Grid grid)
     /// <exception cref="FaultException">IE21xx: the file cannot be read, is on another grid or holds no concentration.</exception>
     public void ReadConcentration(string path, Memory<float> fraction) => HdfFile.Read(path, file =>
     {
-        FileVariable variable = file.Variable(Concentration);
-        GridAxes axes = GridAxes.Find(variable, grid);
-        ulong[]? chunk = ChunkLimits.BytesOf(variable) is null ? null : variable.Dataset.Layout.Chunks;
-        KelvinRule rule = rules.For(default, PackingAttributes.Of(variable));
-        ChannelStructure structure = new(default, Concentration, axes.Shape, new GridAgreement(grid).TurnOf(variable, axes), rule, chunk);
-        CellReader.Read(file, structure, 0, grid, fraction.Span);
+        planes.Read(file, Concentration, fraction.Span);
+        return true;
+    });
+
+    /// <summary>Reads the concentration of one day and its standard error.</summary>
+    /// <param name="path">One of the files listed.</param>
+    /// <param name="fraction">Receives one value a cell. Unit: 1. Missing: NaN.</param>
+    /// <param name="standardError">Receives its standard error, likewise.</param>
+    /// <exception cref="FaultException">IE21xx: the file cannot be read, is on another grid or lacks one of the two.</exception>
+    public void ReadConcentration(string path, Memory<float> fraction, Memory<float> standardError) => HdfFile.Read(path, file =>
+    {
+        planes.Read(file, Concentration, fraction.Span);
+        planes.Read(file, ConcentrationError, standardError.Span);
         return true;
     });
 }

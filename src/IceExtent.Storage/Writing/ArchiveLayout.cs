@@ -41,6 +41,16 @@ public sealed partial class ArchiveLayout
     public string TableFile(string table, string method, Hemisphere hemisphere, int? year = null) =>
         Path.Join(Folder(table, method, hemisphere, year), $"{table}.parquet");
 
+    /// <summary>A table or grid file of one ice year.</summary>
+    /// <param name="table">The table's name: its top folder and its file.</param>
+    /// <param name="method">The method's name.</param>
+    /// <param name="hemisphere">The hemisphere.</param>
+    /// <param name="iceYear">The ice year's name: the calendar year of its first day.</param>
+    /// <param name="extension">With its dot.</param>
+    /// <exception cref="FaultException">IE3110: a name cannot be used.</exception>
+    public string IceYearFile(string table, string method, Hemisphere hemisphere, int iceYear, string extension) => Path.Join(
+        Folder(table, method, hemisphere, null), string.Create(CultureInfo.InvariantCulture, $"ice_year={iceYear:D4}"), table + extension);
+
     /// <summary>The tie points of one year; they belong to no single method.</summary>
     public string TiePointFile(Hemisphere hemisphere, int year) => Path.Join(
         Path.Join(Root, "tie_points"), $"hemisphere={NameOf(hemisphere)}", YearFolder(year), "tie_points.parquet");

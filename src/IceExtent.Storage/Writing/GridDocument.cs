@@ -25,7 +25,8 @@ internal sealed class GridDocument : IDisposable
     /// <param name="grid">The grid.</param>
     /// <param name="day">The day, UTC, or null for what holds on every day: the file then has no time.</param>
     /// <param name="months">Whether each variable has twelve planes, January first, in place of a time.</param>
-    public GridDocument(Grid grid, DateOnly? day, bool months = false)
+    /// <param name="days">How many days the file holds for, from <paramref name="day"/> on.</param>
+    public GridDocument(Grid grid, DateOnly? day, bool months = false, int days = 1)
     {
         this.grid = grid;
         values = grid.CellCount * (months ? MonthsOfTheYear : 1);
@@ -38,7 +39,7 @@ internal sealed class GridDocument : IDisposable
         Describe(x, "projection_x_coordinate", "x of the center of the cell", "m", "X");
         if (day is { } dated)
         {
-            planeDimensions = [AddTime(dated, y, x), y, x];
+            planeDimensions = [AddTime(dated, days, y, x), y, x];
         }
         else if (months)
         {
@@ -175,17 +176,17 @@ internal sealed class GridDocument : IDisposable
         plane.Attributes["add_offset"] = offset;
     }
 
-    private NetcdfDimension AddTime(DateOnly day, NetcdfDimension y, NetcdfDimension x)
+    private NetcdfDimension AddTime(DateOnly day, int days, NetcdfDimension y, NetcdfDimension x)
     {
         double start = day.DayNumber - Epoch.DayNumber;
         NetcdfDimension time = NetcdfDimension.WithCoordinate(text, 0, "time", [start]);
         NetcdfDimension ends = NetcdfDimension.Bare(text, 3, "nv", 2);
         AddScales(time, y, x, ends);
-        Describe(time, "time", "start of the UTC day", "days since 1970-01-01 00:00:00", "T");
+        Describe(time, "time", days == 1 ? "start of the UTC day" : "start of the first UTC day", "days since 1970-01-01 00:00:00", "T");
         time.Scale.Attributes["calendar"] = text.Of("standard");
         time.Scale.Attributes["bounds"] = text.Of(BoundsName);
 
-        H5Dataset bounds = new(new[] { start, start + 1.0 }, fileDims: [1, 2]);
+        H5Dataset bounds = new(new[] { start, start + days }, fileDims: [1, 2]);
         NetcdfDimension.Attach(bounds, [time, ends]);
         file[BoundsName] = bounds;
         return time;

@@ -35,6 +35,23 @@ public static class GridFile
         IReadOnlyList<GridVariable> variables,
         IReadOnlyList<KeyValuePair<string, string>> attributes) => Write(path, grid, day, months: false, variables, attributes);
 
+    /// <summary>Writes one file of what holds for a row of days: the same, and <c>time_bnds</c> spans them.</summary>
+    /// <param name="path">The file; its folder is made when it is missing.</param>
+    /// <param name="grid">The grid of every variable.</param>
+    /// <param name="first">The first day, UTC.</param>
+    /// <param name="days">How many days.</param>
+    /// <param name="variables">The variables.</param>
+    /// <param name="attributes">Global text attributes, none empty, in the order they are written after <c>Conventions</c>.</param>
+    /// <exception cref="FaultException">IE3101 to IE3107: the file cannot be written.</exception>
+    /// <exception cref="ArgumentException">A plane has another size than the grid, or a name is taken or empty.</exception>
+    public static void WriteSpan(
+        string path,
+        Grid grid,
+        DateOnly first,
+        int days,
+        IReadOnlyList<GridVariable> variables,
+        IReadOnlyList<KeyValuePair<string, string>> attributes) => Write(path, grid, first, months: false, variables, attributes, days);
+
     /// <summary>Writes one file of what holds on every day, such as land: the same but for <c>time</c>, which it has not.</summary>
     /// <param name="path">The file; its folder is made when it is missing.</param>
     /// <param name="grid">The grid of every variable.</param>
@@ -67,13 +84,14 @@ public static class GridFile
         DateOnly? day,
         bool months,
         IReadOnlyList<GridVariable> variables,
-        IReadOnlyList<KeyValuePair<string, string>> attributes)
+        IReadOnlyList<KeyValuePair<string, string>> attributes,
+        int days = 1)
     {
         ArgumentNullException.ThrowIfNull(grid);
         ArgumentNullException.ThrowIfNull(variables);
         ArgumentNullException.ThrowIfNull(attributes);
 
-        using GridDocument document = new(grid, day, months);
+        using GridDocument document = new(grid, day, months, days);
         foreach (KeyValuePair<string, string> attribute in attributes)
         {
             document.Describe(attribute.Key, attribute.Value);

@@ -40,12 +40,33 @@ public sealed record RunRecord
     /// <summary>Faults that belong to no single day, such as an archive file that could not be read.</summary>
     public required IReadOnlyList<Fault> Faults { get; init; }
 
+    /// <summary>The ice years whose dates were made, by method and year.</summary>
+    public IReadOnlyList<SeasonRecord> Seasons { get; init; } = [];
+
     /// <summary>The input files that were read, in the order of their paths.</summary>
     public required IReadOnlyList<string> FilesRead { get; init; }
 
     /// <summary>What the process returned.</summary>
     public required int ExitCode { get; init; }
 }
+
+/// <summary>What a run made of one ice year.</summary>
+/// <param name="Method">The method.</param>
+/// <param name="IceYear">The calendar year of its first day.</param>
+/// <param name="Status"><c>final</c>, or <c>provisional</c> while later days may change its dates.</param>
+/// <param name="Cells">Cells that held ice.</param>
+/// <param name="UnreadDays">Days whose grid could not be read, and that count as missing.</param>
+/// <param name="ProvisionalDates">What became of the cells' dates that stood as provisional, by date; empty where none did.</param>
+/// <param name="NamedChanges">Dates of regions and places that moved, were withdrawn or are new in years that stood as provisional, in words.</param>
+public sealed record SeasonRecord(
+    string Method, int IceYear, string Status, int Cells, int UnreadDays, IReadOnlyDictionary<string, DateChangeCounts> ProvisionalDates, IReadOnlyList<string> NamedChanges);
+
+/// <summary>How many provisional dates went which way.</summary>
+/// <param name="Confirmed">Found again on the same day.</param>
+/// <param name="Moved">Found again on another day.</param>
+/// <param name="Withdrawn">No longer found.</param>
+/// <param name="New">Found for the first time.</param>
+public sealed record DateChangeCounts(int Confirmed, int Moved, int Withdrawn, int New);
 
 /// <summary>A file and what it held.</summary>
 /// <param name="Path">Its full path.</param>

@@ -47,9 +47,28 @@ public static class TableFile
     public static StoredTable Read(string path)
     {
         ArgumentException.ThrowIfNullOrEmpty(path);
+        return Decoded(path, async () => await DecodeAsync(path, await File.ReadAllBytesAsync(path)));
+    }
+
+    /// <summary>Reads the metadata of a table and none of its rows.</summary>
+    /// <param name="path">A file that <see cref="Write{TRow}"/> wrote.</param>
+    /// <exception cref="FaultException">IE3120: the file is missing, damaged or no Parquet file.</exception>
+    public static IReadOnlyDictionary<string, string> ReadMetadata(string path)
+    {
+        ArgumentException.ThrowIfNullOrEmpty(path);
+        return Decoded(path, async () =>
+        {
+            await using FileStream content = File.OpenRead(path);
+            await using ParquetReader reader = await ParquetReader.CreateAsync(content);
+            return new ReadOnlyDictionary<string, string>(reader.CustomMetadata);
+        });
+    }
+
+    private static T Decoded<T>(string path, Func<Task<T>> decode)
+    {
         try
         {
-            return DecodeAsync(path, File.ReadAllBytes(path)).GetAwaiter().GetResult();
+            return decode().GetAwaiter().GetResult();
         }
 #pragma warning disable CA1031 // The library throws exceptions of many types on damaged files.
         catch (Exception cause)

@@ -48,6 +48,11 @@ internal static class RunCommand
         }
 
         progress.Series.Print(console);
+        if (progress.SeasonsDone > 0)
+        {
+            console.Print($"Season dates of {Counted.Years(progress.SeasonsDone)} found.");
+        }
+
         console.Print($"Archive: {settings.Output}");
         console.Print($"Record:  {outcome.RecordPath}");
         if (settings.Notice is { } notice)

@@ -1,6 +1,7 @@
 using System.Diagnostics;
 using System.Globalization;
 using IceExtent.Worker.Running;
+using IceExtent.Worker.Seasons;
 using Spectre.Console;
 
 namespace IceExtent.Worker.Commands;
@@ -71,6 +72,23 @@ internal sealed class RunProgress(CommandConsole console) : IRunObserver
             lastLine = watch.Elapsed;
             console.Say(string.Create(
                 CultureInfo.InvariantCulture, $"{result.Date:yyyy-MM-dd}: {done} of {total} days, {perSecond:F0} days/s, {(total - done) / perSecond:F0} s left"));
+        }
+    }
+
+    /// <summary>How many ice years had their dates found.</summary>
+    public int SeasonsDone { get; private set; }
+
+    public void SeasonDone(SeasonYearReport year)
+    {
+        SeasonsDone++;
+        if (bar is not null)
+        {
+            bar.Description = string.Create(CultureInfo.InvariantCulture, $"season dates {year.Method} {year.Year}");
+        }
+        else if (watch.Elapsed - lastLine >= LineEvery)
+        {
+            lastLine = watch.Elapsed;
+            console.Say(string.Create(CultureInfo.InvariantCulture, $"Season dates of {year.Year} ({year.Method})."));
         }
     }
 }

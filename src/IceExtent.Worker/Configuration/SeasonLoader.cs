@@ -32,6 +32,13 @@ internal static class SeasonLoader
             return null;
         }
 
+        if (run.Flag("write_grids", required: false) == false)
+        {
+            faults.Add(new(
+                "IE1011", run.Where("write_grids", run.PositionOf("write_grids")), "write_grids = false with a table [season]",
+                "season dates only with grids: they are found in them", "Set write_grids = true, or remove [season]."));
+        }
+
         int before = faults.Count;
         string side = hemisphere == Hemisphere.North ? "north" : "south";
         string? northern = shipped.Text("north_scheme"), southern = shipped.Text("south_scheme");

@@ -4,6 +4,7 @@ using IceExtent.Statistics;
 using IceExtent.Storage.Faults;
 using IceExtent.Storage.Writing;
 using IceExtent.Worker.Configuration;
+using IceExtent.Worker.Seasons;
 
 namespace IceExtent.Worker.Running;
 
@@ -34,6 +35,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
     private int polarGapFallbacks;
     private int tiePointFallbacks;
     private int emptiedDays;
+    private IReadOnlyList<SeasonYearReport> seasons = [];
 
     /// <summary>Runs.</summary>
     /// <param name="observer">Watches.</param>
@@ -59,7 +61,13 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         series.Remove(lost);
         tiePoints.Remove(lost);
         Array.ForEach(lost, day => RemoveGrids(day, settings.Methods));
-        await ProcessAsync(plan, await preparing, (series, tiePoints), GlobalAttributes(digest), observer, cancellation);
+        DayPreparation preparation = await preparing;
+        await ProcessAsync(plan, preparation, (series, tiePoints), GlobalAttributes(digest), observer, cancellation);
+        if (settings.Season is { } season)
+        {
+            HashSet<DateOnly> touched = [.. lost, .. dayRecords.Select(day => day.Date)];
+            seasons = new SeasonSpan(settings, season, preparation.Regions, digest, options.Workers).Update(touched, observer.SeasonDone, cancellation);
+        }
 
         int done = dayRecords.Count(day => day.Outcome == DayOutcome.Done);
         int filled = dayRecords.Count(day => day.Outcome == DayOutcome.Filled);
@@ -247,6 +255,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             Counts = new(done, rejected + plan.DatesWithoutInput.Count(day => !filled.Contains(day)), rejected, polarGapFallbacks, tiePointFallbacks, emptiedDays, filled.Count),
             Days = days,
             Faults = [.. gaps.Where(gap => gap.Date is null).Select(gap => gap.Fault)],
+            Seasons = [.. seasons.Select(year => year.ToRecord())],
             FilesRead = [.. filesRead],
             ExitCode = exitCode,
         });

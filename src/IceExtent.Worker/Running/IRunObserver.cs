@@ -1,3 +1,5 @@
+using IceExtent.Worker.Seasons;
+
 namespace IceExtent.Worker.Running;
 
 /// <summary>Watches a run.</summary>
@@ -8,4 +10,7 @@ internal interface IRunObserver
 
     /// <summary>A day is done. Called in date order, on one thread at a time.</summary>
     void DayDone(DayResult result);
+
+    /// <summary>The dates of an ice year are found.</summary>
+    void SeasonDone(SeasonYearReport year);
 }

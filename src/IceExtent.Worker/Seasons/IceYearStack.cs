@@ -1,0 +1,108 @@
+using IceExtent.Statistics.Seasons;
+using IceExtent.Storage.Faults;
+using IceExtent.Storage.Reading;
+using IceExtent.Storage.Writing;
+
+namespace IceExtent.Worker.Seasons;
+
+/// <summary>Concentration and its standard error for every ocean cell on every day of one ice year, used again from year to year.</summary>
+/// <remarks>Held as the grid files hold it, in 16 bits: a year of one hemisphere at 25 km takes some 120 MB.</remarks>
+internal sealed class IceYearStack(int[] cells, int gridCells)
+{
+    private const float StepsPerUnit = 10_000f; // As Packing.Fraction.
+
+    private short[] fractions = [];
+    private short[] errors = [];
+
+    /// <summary>Indices of the ocean cells on the grid, rising.</summary>
+    public int[] Cells => cells;
+
+    /// <summary>Days that could not be read.</summary>
+    public IReadOnlyList<Fault> Faults { get; private set; } = [];
+
+    /// <summary>Reads the days of a span; a day without a file, or with one that cannot be read, is missing.</summary>
+    /// <param name="grids">The archive.</param>
+    /// <param name="span">The days.</param>
+    /// <param name="pathOf">The file of a day, or null.</param>
+    /// <param name="workers">How many files are read at a time.</param>
+    /// <param name="cancellation">Stops at the next day.</param>
+    public void Load(ArchiveGrids grids, IceYearSpan span, Func<DateOnly, string?> pathOf, int workers, CancellationToken cancellation)
+    {
+        int size = span.Days * cells.Length;
+        if (fractions.Length < size)
+        {
+            (fractions, errors) = (new short[size], new short[size]);
+        }
+
+        Fault?[] faults = new Fault?[span.Days];
+        Parallel.For(
+            0,
+            span.Days,
+            new ParallelOptions { MaxDegreeOfParallelism = workers, CancellationToken = cancellation },
+            () => new Planes(new float[gridCells], new float[gridCells]),
+            (day, _, planes) =>
+            {
+                faults[day] = LoadDay(grids, pathOf(span.FirstDate.AddDays(day)), day, planes);
+                return planes;
+            },
+            _ => { });
+        Faults = [.. faults.OfType<Fault>()];
+    }
+
+    /// <summary>Copies the series of neighbouring cells out.</summary>
+    /// <param name="days">The days of the span that was loaded.</param>
+    /// <param name="first">The first cell's place among the ocean cells.</param>
+    /// <param name="count">How many cells.</param>
+    /// <param name="fraction">Receives one series after another, <paramref name="days"/> values each. Unit: 1. Missing: NaN.</param>
+    /// <param name="standardError">Receives their standard errors, likewise.</param>
+    public void CopySeries(int days, int first, int count, Span<float> fraction, Span<float> standardError)
+    {
+        for (int day = 0; day < days; day++)
+        {
+            ReadOnlySpan<short> storedFraction = fractions.AsSpan((day * cells.Length) + first, count);
+            ReadOnlySpan<short> storedError = errors.AsSpan((day * cells.Length) + first, count);
+            for (int cell = 0; cell < count; cell++)
+            {
+                fraction[(cell * days) + day] = Unpacked(storedFraction[cell]);
+                standardError[(cell * days) + day] = Unpacked(storedError[cell]);
+            }
+        }
+    }
+
+    private Fault? LoadDay(ArchiveGrids grids, string? path, int day, Planes planes)
+    {
+        Span<short> storedFraction = fractions.AsSpan(day * cells.Length, cells.Length);
+        Span<short> storedError = errors.AsSpan(day * cells.Length, cells.Length);
+        if (path is null)
+        {
+            storedFraction.Fill(Packing.Fill);
+            storedError.Fill(Packing.Fill);
+            return null;
+        }
+
+        try
+        {
+            grids.ReadConcentration(path, planes.Fraction, planes.Error);
+        }
+        catch (FaultException unreadable)
+        {
+            storedFraction.Fill(Packing.Fill); // A bad file costs its day.
+            storedError.Fill(Packing.Fill);
+            return unreadable.Fault;
+        }
+
+        for (int index = 0; index < cells.Length; index++)
+        {
+            storedFraction[index] = Packed(planes.Fraction[cells[index]]);
+            storedError[index] = Packed(planes.Error[cells[index]]);
+        }
+
+        return null;
+    }
+
+    private static short Packed(float value) => float.IsNaN(value) ? Packing.Fill : (short)((value * StepsPerUnit) + 0.5f);
+
+    private static float Unpacked(short stored) => stored == Packing.Fill ? float.NaN : stored / StepsPerUnit;
+
+    private sealed record Planes(float[] Fraction, float[] Error);
+}

@@ -1,0 +1,151 @@
+using System.Globalization;
+using System.Security.Cryptography;
+using System.Text;
+using IceExtent.Statistics.Seasons;
+using IceExtent.Storage.Writing;
+using IceExtent.Worker.Configuration;
+using IceExtent.Worker.Running;
+
+namespace IceExtent.Worker.Seasons;
+
+/// <summary>Writes the season tables and grids of one method, and knows of what they were made.</summary>
+/// <param name="settings">The run.</param>
+/// <param name="season">How its dates are found.</param>
+/// <param name="layout">Where the files stand.</param>
+/// <param name="method">One of its methods.</param>
+/// <param name="configuration">The digest of the days' configuration.</param>
+internal sealed class SeasonArchive(RunSettings settings, SeasonSettings season, ArchiveLayout layout, string method, string configuration)
+{
+    private const string CellTable = "season_cells";
+    private const string RegionTable = "season_regions";
+    private const string PlaceTable = "season_places";
+    private const string GridTable = "season_grids";
+    private const string RecordKey = "record";
+    private const string StatusKey = "status";
+    private const string Provisional = "provisional";
+
+    private readonly string digest = DigestOf(configuration, season);
+
+    /// <summary>The table of every region and year.</summary>
+    public string RegionPath => layout.TableFile(RegionTable, method, settings.Grid.Hemisphere);
+
+    /// <summary>The table of every place and year.</summary>
+    public string PlacePath => layout.TableFile(PlaceTable, method, settings.Grid.Hemisphere);
+
+    /// <summary>The maps of one year.</summary>
+    public string GridPathOf(IceYear year) => layout.IceYearFile(GridTable, method, settings.Grid.Hemisphere, year.Year, ".nc");
+
+    /// <summary>Whether the tables of a year were made by the same rules of as long a record.</summary>
+    public bool Has(IceYearSpan span)
+    {
+        string path = CellPathOf(span.Year);
+        if (!File.Exists(path) || !File.Exists(GridPathOf(span.Year)))
+        {
+            return false;
+        }
+
+        IReadOnlyDictionary<string, string> metadata = TableFile.ReadMetadata(path);
+        return metadata.GetValueOrDefault(SeasonMetadata.DigestKey) == digest && metadata.GetValueOrDefault(RecordKey) == RecordOf(span);
+    }
+
+    /// <summary>Writes the cells of one year: the table of those that held ice, and the maps of all.</summary>
+    public void WriteCells(IceYearSpan span, CellSeasons cells)
+    {
+        IceYear year = span.Year;
+        CellSeasonRow[] rows = [.. Enumerable.Range(0, cells.Cells.Count).Where(cells.HadIce).Select(RowAt)];
+        SeasonGridFile.Write(GridPathOf(year), settings.Grid, year, season.Scheme.Begins, cells, Text(span));
+        TableFile.Write(CellPathOf(year), SeasonTables.CellColumns, rows, Text(span)); // Last: its metadata tell that the year is done.
+
+        CellSeasonRow RowAt(int index)
+        {
+            int cell = cells.Cells[index];
+            int row = cell / settings.Grid.Columns, column = cell % settings.Grid.Columns;
+            Grids.GeoPosition center = settings.Grid.PositionOf(cell);
+            return new()
+            {
+                Year = year,
+                Begins = season.Scheme.Begins,
+                Dates = cells.Dates[index],
+                KnownDays = cells.Dates[index].Ice.KnownDays,
+                OpenWaterDays = cells.Dates[index].Ice.OpenWaterDays,
+                IsFinal = span.IsComplete,
+                GridRow = row,
+                GridColumn = column,
+                LatitudeDegrees = center.LatitudeDegrees,
+                LongitudeDegrees = center.LongitudeDegrees,
+                AreaSquareKilometers = settings.Grid.CellAreasSquareMeters[cell] / 1e6,
+            };
+        }
+    }
+
+    /// <summary>Writes the table of regions.</summary>
+    public void WriteRegions(IEnumerable<RegionSeasonRow> rows) => TableFile.Write(
+        RegionPath, SeasonTables.RegionColumns, [.. rows.OrderBy(row => row.Year.Year).ThenBy(row => row.Region, StringComparer.Ordinal)], Text(null));
+
+    /// <summary>Writes the table of places.</summary>
+    public void WritePlaces(IEnumerable<PlaceSeasonRow> rows) => TableFile.Write(
+        PlacePath, SeasonTables.PlaceColumns, [.. rows.OrderBy(row => row.Year.Year).ThenBy(row => row.Place, StringComparer.Ordinal)], Text(null));
+
+    /// <summary>Whether the archive has a year as one that was not over.</summary>
+    public bool IsRunning(IceYear year) =>
+        File.Exists(CellPathOf(year)) && TableFile.ReadMetadata(CellPathOf(year)).GetValueOrDefault(StatusKey) == Provisional;
+
+    /// <summary>Takes years out of the archive whose days it no longer has.</summary>
+    public void RemoveYearsOutside(IReadOnlyList<IceYearSpan> spans)
+    {
+        HashSet<string> kept = [.. spans.SelectMany(span => new[] { CellPathOf(span.Year), GridPathOf(span.Year) })];
+        foreach (string table in (string[])[CellTable, GridTable])
+        {
+            string folder = Path.GetDirectoryName(layout.TableFile(table, method, settings.Grid.Hemisphere))!;
+            foreach (string file in Directory.Exists(folder) ? Directory.EnumerateFiles(folder, $"{table}.*", SearchOption.AllDirectories) : [])
+            {
+                if (!kept.Contains(file))
+                {
+                    PublishedFile.Delete(file);
+                }
+            }
+        }
+    }
+
+    private string CellPathOf(IceYear year) => layout.IceYearFile(CellTable, method, settings.Grid.Hemisphere, year.Year, ".parquet");
+
+    private List<KeyValuePair<string, string>> Text(IceYearSpan? span)
+    {
+        List<KeyValuePair<string, string>> text =
+        [
+            new("method", method),
+            new("scheme", season.Scheme.Name),
+            new("scheme_source", season.Scheme.Source),
+            new(SeasonMetadata.BeginsKey, season.Scheme.Begins == YearBeginning.Ice ? SeasonMetadata.Ice : SeasonMetadata.Water),
+            new("limits", FormattableString.Invariant($"95 %, from the series {season.Scheme.LimitDeviations:R} standard errors lower and higher, and from gaps")),
+            new("grid", settings.Grid.Name),
+            new("program_version", ProgramVersion.Text),
+            new(DailySeries.DigestKey, configuration),
+            new(SeasonMetadata.DigestKey, digest),
+            new("caution", Cautions.Text),
+        ];
+        if (span is { } year)
+        {
+            text.Insert(0, new("title", $"Season dates of the ice year {year.Year.Year} on the grid {settings.Grid.Name}"));
+            text.Add(new(RecordKey, RecordOf(year)));
+            text.Add(new(StatusKey, year.IsComplete ? "final" : Provisional));
+        }
+
+        if (settings.Notice is { } notice)
+        {
+            text.Insert(0, new("notice", notice));
+        }
+
+        return text;
+    }
+
+    // What of the record's length a year depends on.
+    private static string RecordOf(IceYearSpan span)
+    {
+        int first = Math.Max(span.RecordFirst, -span.Lead), last = Math.Min(span.RecordLast, span.Year.Length - 1 + span.Tail);
+        return string.Create(CultureInfo.InvariantCulture, $"{span.Year.DateOf(first):yyyy-MM-dd} to {span.Year.DateOf(last):yyyy-MM-dd}");
+    }
+
+    private static string DigestOf(string configuration, SeasonSettings season) =>
+        Convert.ToHexStringLower(SHA256.HashData(Encoding.UTF8.GetBytes($"{configuration}\n{season.Scheme}\n{season.Regions}")));
+}
