@@ -36,6 +36,7 @@ internal static class SceneCommand
         Option<string?> successor = new("--successor") { Description = "With --score: the scene file of a radiometer that follows the first, with other offsets or drifts.", HelpName = "SCENE" };
         Option<DateOnly?> changeOver = CommonOptions.Day("--change-over", "With --successor: its first day.");
         Option<int> every = CommonOptions.Count("--every", "With --score: take one day of so many.", _ => 5, 366);
+        Option<bool> seasons = new("--seasons") { Description = "With --score: hold season dates against the true ones, in every ice year that begins in the period." };
         Option<bool> json = CommonOptions.Json();
         Option<int> workers = CommonOptions.Workers();
         (from.Required, to.Required) = (true, true);
@@ -43,7 +44,7 @@ internal static class SceneCommand
             "scene",
             "Write invented brightness temperatures with a known truth, and a run file for them.\n\nExample:\n  iceextent scene --grid north-25km --sensor ssmi-f13 --from 2000-01-01 --to 2000-01-31 --out scene\n  iceextent scene --score --methods nasa-team bristol --from 2000-01-01 --to 2000-12-31 --sensor ssmi-f13")
         {
-            grid, sensor, parameters, from, to, seed, radiometer, noTruth, output, score, methods, coast, settings, successor, changeOver, every, json, workers,
+            grid, sensor, parameters, from, to, seed, radiometer, noTruth, output, score, methods, coast, settings, successor, changeOver, every, seasons, json, workers,
         };
         command.SetAction((parsed, cancellation) =>
         {
@@ -53,6 +54,14 @@ internal static class SceneCommand
                 parsed.GetValue(grid)!, parsed.GetValue(sensor)!, parsed.GetValue(parameters), parsed.GetValue(seed), parsed.GetValue(radiometer));
             if (parsed.GetValue(score))
             {
+                SceneDefaults defaults = SceneDefaults.Load(ConfigFolder.BesideProgram, scene.Grid, parsed.GetValue(coast), parsed.GetValue(settings));
+                if (parsed.GetValue(seasons))
+                {
+                    int[] years = [.. Enumerable.Range(first.Year, last.Year - first.Year + 1).Where(year => defaults.Season.Scheme.YearStart.Beginning(year).FirstDay is var begins && begins >= first && begins <= last)];
+                    return Task.FromResult(SceneScoring.ScoreSeasons(
+                        scene, years, land, parsed.GetValue(methods)!, defaults, parsed.GetValue(workers), parsed.GetValue(json), console, cancellation));
+                }
+
                 DateOnly[] wanted = [.. SceneScoring.Days(first, last, parsed.GetValue(every))];
                 List<(Scene, IReadOnlyList<DateOnly>)> scenes = [(scene, wanted)];
                 if (ChangeOver(parsed.GetValue(successor), parsed.GetValue(changeOver)) is { } change)
@@ -61,7 +70,6 @@ internal static class SceneCommand
                     scenes = [(scene, [.. wanted.Where(day => day < change.Day)]), (next, [.. wanted.Where(day => day >= change.Day)])];
                 }
 
-                SceneDefaults defaults = SceneDefaults.Load(ConfigFolder.BesideProgram, scene.Grid, parsed.GetValue(coast), parsed.GetValue(settings));
                 return Task.FromResult(SceneScoring.Score(
                     scenes, land, parsed.GetValue(methods)!, defaults, parsed.GetValue(workers), parsed.GetValue(json), console, cancellation));
             }
@@ -99,6 +107,8 @@ internal static class SceneCommand
         sensor   = "{{sensor}}"
         files    = "{{SceneFiles.TemperatureFolder}}/*.nc"
         channels = { {{string.Join(", ", channels.Select(channel => $"{ChannelNames.NameOf(channel)} = \"{SceneFiles.VariableOf(channel)}\""))}} }
+
+        [season]
 
         """);
 

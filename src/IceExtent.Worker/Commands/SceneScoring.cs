@@ -2,8 +2,10 @@ using IceExtent.Storage.Faults;
 using IceExtent.Grids;
 using IceExtent.Retrieval;
 using IceExtent.Scenes;
+using IceExtent.Statistics;
 using IceExtent.Worker.Configuration;
 using IceExtent.Worker.Running;
+using IceExtent.Worker.Seasons;
 
 namespace IceExtent.Worker.Commands;
 
@@ -32,7 +34,48 @@ internal static class SceneScoring
     public static int Score(
         IReadOnlyList<(Scene Scene, IReadOnlyList<DateOnly> Days)> scenes, LandShare land, string[] methods, SceneDefaults defaults, int workers, bool json, CommandConsole console, CancellationToken cancellation)
     {
-        Scene scene = scenes[0].Scene;
+        List<string> usable = Usable(scenes[0].Scene, methods, console);
+
+        // Each radiometer is scored by itself: samples of one never tune the other.
+        ScoredDay[] scored = [.. scenes.SelectMany(part => new SceneScore(part.Scene, land, usable, defaults).Run(part.Days, workers, cancellation))];
+        IReadOnlyList<SeasonScore> scores = ScoreSummary.Seasons(usable, scored);
+        ScoreReport.Print(scores, ScoreSummary.Trends(usable, scored), json, console);
+        if (!json)
+        {
+            console.Print(SceneCommand.Notice);
+        }
+
+        return scores.Count == 0 ? ExitCode.NoUsableInput : ExitCode.Done;
+    }
+
+    /// <summary>Scores season dates and prints.</summary>
+    /// <param name="scene">The scene.</param>
+    /// <param name="years">The calendar years of the ice years' first days.</param>
+    /// <param name="land">The land of its grid.</param>
+    /// <param name="methods">The methods asked for.</param>
+    /// <param name="defaults">Everything else.</param>
+    /// <param name="workers">How many days are processed at a time.</param>
+    /// <param name="json">Whether the result is printed as JSON.</param>
+    /// <param name="console">Where to.</param>
+    /// <param name="cancellation">Stops.</param>
+    /// <exception cref="ConfigurationException">A method does not exist.</exception>
+    public static int ScoreSeasons(
+        Scene scene, IReadOnlyList<int> years, LandShare land, string[] methods, SceneDefaults defaults, int workers, bool json, CommandConsole console, CancellationToken cancellation)
+    {
+        List<string> usable = Usable(scene, methods, console);
+        TotalsRegion[] regions = [TotalsRegion.Hemisphere(scene.Grid, land.OceanBelow(defaults.LandLimitFraction))];
+        IReadOnlyList<ScoredSeasons> scores = new SceneSeasonScore(scene, land, usable, defaults, defaults.Season, regions).Run(years, workers, cancellation);
+        SeasonScoreReport.Print(scores, json, console);
+        if (!json)
+        {
+            console.Print(SceneCommand.Notice);
+        }
+
+        return scores.Count == 0 || years.Count == 0 ? ExitCode.NoUsableInput : ExitCode.Done;
+    }
+
+    private static List<string> Usable(Scene scene, string[] methods, CommandConsole console)
+    {
         HemisphereTuning tuning = scene.Sensor.In(scene.Grid.Hemisphere);
         List<string> usable = [];
         foreach (string name in methods)
@@ -54,15 +97,6 @@ internal static class SceneScoring
             }
         }
 
-        // Each radiometer is scored by itself: samples of one never tune the other.
-        ScoredDay[] scored = [.. scenes.SelectMany(part => new SceneScore(part.Scene, land, usable, defaults).Run(part.Days, workers, cancellation))];
-        IReadOnlyList<SeasonScore> scores = ScoreSummary.Seasons(usable, scored);
-        ScoreReport.Print(scores, ScoreSummary.Trends(usable, scored), json, console);
-        if (!json)
-        {
-            console.Print(SceneCommand.Notice);
-        }
-
-        return scores.Count == 0 ? ExitCode.NoUsableInput : ExitCode.Done;
+        return usable;
     }
 }

@@ -186,6 +186,9 @@ internal sealed class ConfigScope(ConfigTable table, string path, ICollection<Fa
         return null;
     }
 
+    /// <summary>A table without keys, standing for one that the file lacks.</summary>
+    public ConfigScope Empty(string key) => new(new ConfigTable(table.At), FullKey(key), faults);
+
     public IReadOnlyList<ConfigScope> Tables(string key, bool required = true)
     {
         string allowed = $"one or more [[{FullKey(key)}]] tables";

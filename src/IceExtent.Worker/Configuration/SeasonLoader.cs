@@ -25,9 +25,7 @@ internal static class SeasonLoader
     /// <returns>The settings, or null where the run file asks for none or there were faults.</returns>
     public static SeasonSettings? Load(ConfigScope run, ConfigScope defaults, ConfigFolder config, Hemisphere hemisphere, string runFolder, List<Fault> faults)
     {
-        ConfigScope? own = run.Table("season", required: false);
-        ConfigScope? shipped = defaults.Table("season");
-        if (own is null || shipped is null)
+        if (run.Table("season", required: false) is null)
         {
             return null;
         }
@@ -37,6 +35,26 @@ internal static class SeasonLoader
             faults.Add(new(
                 "IE1011", run.Where("write_grids", run.PositionOf("write_grids")), "write_grids = false with a table [season]",
                 "season dates only with grids: they are found in them", "Set write_grids = true, or remove [season]."));
+        }
+
+        return LoadAnyway(run, defaults, config, hemisphere, runFolder, faults);
+    }
+
+    /// <summary>The same, whether or not the run file asks for dates.</summary>
+    /// <param name="run">The run file.</param>
+    /// <param name="defaults">config/defaults.toml.</param>
+    /// <param name="config">Where the schemes stand.</param>
+    /// <param name="hemisphere">The hemisphere of the grid.</param>
+    /// <param name="runFolder">Where the run file stands.</param>
+    /// <param name="faults">Receives faults.</param>
+    /// <returns>The settings, or null after adding faults.</returns>
+    public static SeasonSettings? LoadAnyway(ConfigScope run, ConfigScope defaults, ConfigFolder config, Hemisphere hemisphere, string runFolder, List<Fault> faults)
+    {
+        ConfigScope? shipped = defaults.Table("season");
+        ConfigScope? own = run.Table("season", required: false) ?? run.Empty("season");
+        if (shipped is null)
+        {
+            return null;
         }
 
         int before = faults.Count;

@@ -41,15 +41,23 @@ internal sealed class SceneScore
         correlation = new(scene.Grid, defaults.ErrorLengths.FarMeters, defaults.ErrorLengths.FootprintMeters);
     }
 
+    /// <summary>The ocean cells that are summed.</summary>
+    public TotalsRegion Region => region;
+
     /// <summary>Scores days, several at a time; the result does not depend on how many.</summary>
-    public IReadOnlyList<ScoredDay> Run(IEnumerable<DateOnly> days, int workers, CancellationToken cancellation)
+    /// <param name="days">The days; missing ones are left out.</param>
+    /// <param name="workers">How many at a time.</param>
+    /// <param name="cancellation">Stops.</param>
+    /// <param name="look">Shown each day by each method, on the thread that made it; keeps nothing of what it is shown.</param>
+    public IReadOnlyList<ScoredDay> Run(
+        IEnumerable<DateOnly> days, int workers, CancellationToken cancellation, Action<DateOnly, int, ConcentrationPlanes>? look = null)
     {
         DateOnly[] seen = [.. days.Where(day => !scene.IsMissing(day))];
         ScoredDay[] scored = new ScoredDay[seen.Length];
         using ThreadLocal<Bench> benches = new(() => new Bench(scene, source, correlation));
         ParallelOptions options = new() { MaxDegreeOfParallelism = workers, CancellationToken = cancellation };
         Dictionary<DateOnly, DaySamples> samples = Samples(seen, benches, options);
-        Parallel.For(0, seen.Length, options, index => scored[index] = Score(seen[index], Tune(seen[index], samples), benches.Value!));
+        Parallel.For(0, seen.Length, options, index => scored[index] = Score(seen[index], Tune(seen[index], samples), benches.Value!, look));
         return scored;
     }
 
@@ -81,7 +89,7 @@ internal sealed class SceneScore
             [.. Enumerable.Range(-tuning.DaysBehind, tuning.DaysBehind + tuning.DaysAhead + 1).Select(day.AddDays).Where(samples.ContainsKey).Select(near => samples[near])]);
     }
 
-    private ScoredDay Score(DateOnly day, TunedDay? tuned, Bench bench)
+    private ScoredDay Score(DateOnly day, TunedDay? tuned, Bench bench, Action<DateOnly, int, ConcentrationPlanes>? look)
     {
         bench.Observe(day);
         scene.Melt(day, bench.Workspace, bench.Melting);
@@ -92,6 +100,7 @@ internal sealed class SceneScore
         {
             retrievals[method].Retrieve(bench.Observed, bench.Conditions, bench.Concentration, choices.Weather.MaskOf(day));
             source.Coast?.WidenErrors(bench.Concentration);
+            look?.Invoke(day, method, bench.Concentration);
             methods[method] = (
                 DayScore.Of(scene.Grid, region, bench.Concentration.Total, bench.Concentration.StandardError, bench.Truth.Concentration, rules, bench.Melting),
                 bench.Uncertainty.StandardErrorsSquareMeters(region, bench.Concentration.Total, bench.Concentration.StandardError, rules.IceFraction, retrievals[method].SurfaceScatter).Extent);

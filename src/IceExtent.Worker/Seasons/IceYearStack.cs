@@ -28,12 +28,7 @@ internal sealed class IceYearStack(int[] cells, int gridCells)
     /// <param name="cancellation">Stops at the next day.</param>
     public void Load(ArchiveGrids grids, IceYearSpan span, Func<DateOnly, string?> pathOf, int workers, CancellationToken cancellation)
     {
-        int size = span.Days * cells.Length;
-        if (fractions.Length < size)
-        {
-            (fractions, errors) = (new short[size], new short[size]);
-        }
-
+        MakeRoom(span);
         Fault?[] faults = new Fault?[span.Days];
         Parallel.For(
             0,
@@ -47,6 +42,29 @@ internal sealed class IceYearStack(int[] cells, int gridCells)
             },
             _ => { });
         Faults = [.. faults.OfType<Fault>()];
+    }
+
+    /// <summary>Makes room for the days of a span, all missing until they are set.</summary>
+    public void Clear(IceYearSpan span)
+    {
+        MakeRoom(span);
+        Array.Fill(fractions, Packing.Fill);
+        Array.Fill(errors, Packing.Fill);
+    }
+
+    /// <summary>Sets one day. Different days may be set by several threads at a time.</summary>
+    /// <param name="day">The day's place in the span.</param>
+    /// <param name="fraction">One value a cell of the grid. Unit: 1. Missing: NaN.</param>
+    /// <param name="standardError">Its standard error, likewise.</param>
+    public void Set(int day, ReadOnlySpan<float> fraction, ReadOnlySpan<float> standardError)
+    {
+        Span<short> storedFraction = fractions.AsSpan(day * cells.Length, cells.Length);
+        Span<short> storedError = errors.AsSpan(day * cells.Length, cells.Length);
+        for (int index = 0; index < cells.Length; index++)
+        {
+            storedFraction[index] = Packed(fraction[cells[index]]);
+            storedError[index] = Packed(standardError[cells[index]]);
+        }
     }
 
     /// <summary>Copies the series of neighbouring cells out.</summary>
@@ -91,13 +109,17 @@ internal sealed class IceYearStack(int[] cells, int gridCells)
             return unreadable.Fault;
         }
 
-        for (int index = 0; index < cells.Length; index++)
-        {
-            storedFraction[index] = Packed(planes.Fraction[cells[index]]);
-            storedError[index] = Packed(planes.Error[cells[index]]);
-        }
-
+        Set(day, planes.Fraction, planes.Error);
         return null;
+    }
+
+    private void MakeRoom(IceYearSpan span)
+    {
+        int size = span.Days * cells.Length;
+        if (fractions.Length < size)
+        {
+            (fractions, errors) = (new short[size], new short[size]);
+        }
     }
 
     private static short Packed(float value) => float.IsNaN(value) ? Packing.Fill : (short)((value * StepsPerUnit) + 0.5f);
