@@ -12,13 +12,15 @@ internal readonly record struct SearchedHalf(SeasonWindow Window, int BeginSettl
 /// <param name="series">Bridged and smoothed.</param>
 /// <param name="lower">The same some standard errors lower.</param>
 /// <param name="upper">The same some standard errors higher.</param>
+/// <param name="pondless">The same with the ice that melt may hide.</param>
 internal readonly ref struct DateSearch(
-    IceYearSpan span, ReadOnlySpan<float> raw, ReadOnlySpan<float> series, ReadOnlySpan<float> lower, ReadOnlySpan<float> upper)
+    IceYearSpan span, ReadOnlySpan<float> raw, ReadOnlySpan<float> series, ReadOnlySpan<float> lower, ReadOnlySpan<float> upper, ReadOnlySpan<float> pondless)
 {
     private readonly ReadOnlySpan<float> raw = raw;
     private readonly ReadOnlySpan<float> series = series;
     private readonly ReadOnlySpan<float> lower = lower;
     private readonly ReadOnlySpan<float> upper = upper;
+    private readonly ReadOnlySpan<float> pondless = pondless;
 
     /// <summary>A date of the melting half.</summary>
     public SeasonDate Fall(FallRule rule, float level, SearchedHalf half)
@@ -41,7 +43,7 @@ internal readonly ref struct DateSearch(
             return SeasonDate.Without(SeasonDateState.NotYetReached);
         }
 
-        Bracket early = FallIn(lower, rule, level, first, last), late = FallIn(upper, rule, level, first, last);
+        Bracket early = FallIn(lower, rule, level, first, last), late = FallIn(pondless, rule, level, first, last);
         int latest = late.IsNone || late.After == Crossings.None || late.Before == last ? last : late.After;
         return Dated(found, isIceBefore: true, level, half, (early.Before == Crossings.None ? first : early.Before + 1, latest), rule.Named);
     }

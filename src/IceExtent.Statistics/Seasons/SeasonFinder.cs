@@ -18,6 +18,7 @@ public sealed class SeasonFinder
     private readonly float[] error;
     private readonly float[] lower;
     private readonly float[] upper;
+    private readonly float[] pondless;
 
     /// <summary>Sets a finder up for one ice year.</summary>
     /// <param name="scheme">The rules.</param>
@@ -31,7 +32,7 @@ public sealed class SeasonFinder
         lowest = scheme.LowestIn is { } window ? SeasonWindow.Of(window, span.Year) : null;
         own = scheme.OwnLevels is { } rules ? new(rules, scheme, span) : null;
         (bridged, smooth, error) = (new float[span.Days], new float[span.Days], new float[span.Days]);
-        (lower, upper) = (new float[span.Days], new float[span.Days]);
+        (lower, upper, pondless) = (new float[span.Days], new float[span.Days], new float[span.Days]);
     }
 
     /// <summary>Finds the dates of one series.</summary>
@@ -49,7 +50,7 @@ public sealed class SeasonFinder
         SeasonLevels levels = own?.Of(bridged)
             ?? new((float)scheme.Opening.Level, (float)scheme.Retreat.Level, (float)scheme.Advance.Level, (float)scheme.Closing.Level);
         (SearchedHalf melt, SearchedHalf freeze) = HalvesOf();
-        DateSearch search = new(span, fraction, smooth, lower, upper);
+        DateSearch search = new(span, fraction, smooth, lower, upper, pondless);
         SeasonDateState? winterLacks = own?.WinterLacks, summerLacks = own?.SummerLacks;
         (int known, int open) = Count(levels.Retreat);
         return new(
@@ -69,11 +70,12 @@ public sealed class SeasonFinder
         standardError.CopyTo(lower); // For the moment.
         SeriesSmoothing.Bridge(lower, scheme.BridgedDays);
         Smooth(lower, scheme.Smoothing == SeasonSmoothing.None ? SeasonSmoothing.None : SeasonSmoothing.Mean, error);
-        float deviations = (float)scheme.LimitDeviations;
+        float deviations = (float)scheme.LimitDeviations, seen = 1f - (float)scheme.HiddenByMelt;
         for (int day = 0; day < smooth.Length; day++)
         {
             float width = float.IsNaN(error[day]) ? 0f : deviations * error[day];
             (lower[day], upper[day]) = (smooth[day] - width, smooth[day] + width);
+            pondless[day] = upper[day] / seen;
         }
     }
 

@@ -129,6 +129,12 @@ public sealed record SeasonScheme
     /// <summary>The limits of a date are those of the series so many standard errors lower and higher.</summary>
     public required double LimitDeviations { get; init; }
 
+    /// <summary>
+    /// How much of melting ice may look like open water: the last day that a date of the melting half may have been is that of a
+    /// series with so much more ice. Unit: 1.
+    /// </summary>
+    public required double HiddenByMelt { get; init; }
+
     /// <summary>How many days before an ice year its dates depend on.</summary>
     public int LeadDays => OwnLevels is null ? AroundDays : OwnWinterDays + AroundDays;
 

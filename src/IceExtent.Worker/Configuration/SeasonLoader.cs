@@ -116,6 +116,7 @@ internal static class SeasonLoader
             Smoothing = scope.OneOf("smoothing", Smoothings),
             SmoothingDays = scope.WholeNumber("smoothing_days", 1, 31),
             BridgedDays = scope.WholeNumber("bridged_days", 0, MostDays),
+            HiddenByMelt = scope.Number("hidden_by_melt_fraction", 0.0, 0.5),
             LimitDeviations = scope.Number("limit_deviations", 0.0, 10.0),
         };
         Check(scope, scheme);

@@ -24,6 +24,7 @@ internal static class Schemes
         SmoothingDays = 1,
         BridgedDays = 0,
         LimitDeviations = 2.0,
+        HiddenByMelt = 0.0,
     };
 
     /// <summary>From 15 February, advance in the first part and retreat in the last: no parting day.</summary>
