@@ -66,6 +66,15 @@ public sealed class SeasonFinder
     {
         fraction.CopyTo(bridged);
         SeriesSmoothing.Bridge(bridged, scheme.BridgedDays);
+        if (IsOpenThroughout())
+        {
+            bridged.CopyTo(smooth, 0); // Smoothing takes no series over a level that it never reaches, and limits belong to dates.
+            bridged.CopyTo(lower, 0);
+            bridged.CopyTo(upper, 0);
+            bridged.CopyTo(pondless, 0);
+            return;
+        }
+
         Smooth(bridged, scheme.Smoothing, smooth);
         standardError.CopyTo(lower); // For the moment.
         SeriesSmoothing.Bridge(lower, scheme.BridgedDays);
@@ -77,6 +86,19 @@ public sealed class SeasonFinder
             (lower[day], upper[day]) = (smooth[day] - width, smooth[day] + width);
             pondless[day] = upper[day] / seen;
         }
+    }
+
+    // Half of the ocean of a hemisphere has no ice in a year.
+    private bool IsOpenThroughout()
+    {
+        float least = (float)Math.Min(scheme.Retreat.Level, scheme.Advance.Level); // Own levels are never below.
+        bool open = true;
+        foreach (float value in bridged)
+        {
+            open &= !(value >= least);
+        }
+
+        return open;
     }
 
     private void Smooth(ReadOnlySpan<float> series, SeasonSmoothing how, Span<float> into)

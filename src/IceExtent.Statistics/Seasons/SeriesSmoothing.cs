@@ -73,35 +73,65 @@ internal static class SeriesSmoothing
     public static void Median(ReadOnlySpan<float> series, int half, Span<float> smooth)
     {
         Span<float> sorted = stackalloc float[MostDays];
+        int known = 0;
+        for (int day = 0; day < Math.Min(half, series.Length); day++)
+        {
+            known = Insert(sorted, known, series[day]);
+        }
+
         for (int day = 0; day < series.Length; day++)
         {
-            if (float.IsNaN(series[day]))
+            // The window moves on by a day: one value goes, one comes.
+            float gone = day > half ? series[day - half - 1] : float.NaN;
+            float come = day + half < series.Length ? series[day + half] : float.NaN;
+            if (gone != come) // Also where either is missing.
             {
-                smooth[day] = float.NaN;
-                continue;
-            }
-
-            int known = 0;
-            int last = Math.Min(day + half, series.Length - 1);
-            for (int near = Math.Max(day - half, 0); near <= last; near++)
-            {
-                float value = series[near];
-                if (float.IsNaN(value))
-                {
-                    continue;
-                }
-
-                int at = known++;
-                for (; at > 0 && sorted[at - 1] > value; at--)
-                {
-                    sorted[at] = sorted[at - 1];
-                }
-
-                sorted[at] = value;
+                known = Remove(sorted, known, gone);
+                known = Insert(sorted, known, come);
             }
 
             int middle = known / 2;
-            smooth[day] = (known & 1) == 1 ? sorted[middle] : 0.5f * (sorted[middle - 1] + sorted[middle]);
+            smooth[day] = float.IsNaN(series[day]) ? float.NaN
+                : (known & 1) == 1 ? sorted[middle]
+                : 0.5f * (sorted[middle - 1] + sorted[middle]);
         }
+    }
+
+    private static int Insert(Span<float> sorted, int known, float value)
+    {
+        if (float.IsNaN(value))
+        {
+            return known;
+        }
+
+        int at = known;
+        for (; at > 0 && sorted[at - 1] > value; at--)
+        {
+            sorted[at] = sorted[at - 1];
+        }
+
+        sorted[at] = value;
+        return known + 1;
+    }
+
+    private static int Remove(Span<float> sorted, int known, float value)
+    {
+        if (float.IsNaN(value))
+        {
+            return known;
+        }
+
+        int at = 0;
+        while (sorted[at] != value)
+        {
+            at++;
+        }
+
+        for (; at < known - 1; at++)
+        {
+            sorted[at] = sorted[at + 1];
+        }
+
+        return known - 1;
     }
 }

@@ -1,3 +1,4 @@
+using System.Runtime.CompilerServices;
 using IceExtent.Statistics.Seasons;
 using IceExtent.Storage.Faults;
 using IceExtent.Storage.Reading;
@@ -122,8 +123,10 @@ internal sealed class IceYearStack(int[] cells, int gridCells)
         }
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
     private static short Packed(float value) => float.IsNaN(value) ? Packing.Fill : (short)((value * StepsPerUnit) + 0.5f);
 
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
     private static float Unpacked(short stored) => stored == Packing.Fill ? float.NaN : stored / StepsPerUnit;
 
     private sealed record Planes(float[] Fraction, float[] Error);
