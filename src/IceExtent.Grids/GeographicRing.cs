@@ -1,4 +1,5 @@
 using System.Globalization;
+using IceExtent.Grids.Outlines;
 using NetTopologySuite.Geometries;
 
 namespace IceExtent.Grids;
@@ -47,7 +48,7 @@ internal sealed class GeographicRing
         bool roundTheEarth = Math.Abs(vertices[^1].LongitudeDegrees - vertices[0].LongitudeDegrees) > 180.0;
         if (wholeTurns && !roundTheEarth && PlanarArea(vertices) < 1e-12 && !vertices.TrueForAll(IsPole))
         {
-            throw Refusal(vertices[0], "has edges that span a whole turn and come back on themselves");
+            throw new RingRefusedException(new(OutlineFaultKind.UnclearEdge, "edges that span a whole turn and come back on themselves", vertices[0]));
         }
 
         return new(vertices, roundTheEarth ? PoleInside(vertices) : null);
@@ -59,7 +60,8 @@ internal sealed class GeographicRing
         double step = Math.IEEERemainder(to.LongitudeDegrees - from.LongitudeDegrees, 360.0);
         return Math.Abs(step) <= MostEdgeDegrees + 1e-9 || (IsPole(from) && IsPole(to))
             ? step
-            : throw Refusal(from, string.Create(CultureInfo.InvariantCulture, $"has an edge of {Math.Abs(step)} degrees of longitude after it"));
+            : throw new RingRefusedException(new(
+                OutlineFaultKind.UnclearEdge, string.Create(CultureInfo.InvariantCulture, $"an edge of {Math.Abs(step)} degrees of longitude after it"), from));
     }
 
     private static Hemisphere PoleInside(List<GeoPosition> vertices)
@@ -69,7 +71,8 @@ internal sealed class GeographicRing
         return latitude >= 0.0 ? Hemisphere.North : Hemisphere.South;
     }
 
-    private static bool IsPole(GeoPosition vertex) => Math.Abs(vertex.LatitudeDegrees) >= PoleDegrees;
+    /// <summary>Whether a vertex is at a pole.</summary>
+    public static bool IsPole(GeoPosition vertex) => Math.Abs(vertex.LatitudeDegrees) >= PoleDegrees;
 
     private static List<GeoPosition> WithoutRepeats(CoordinateSequence points)
     {
@@ -79,7 +82,7 @@ internal sealed class GeographicRing
             GeoPosition vertex = new(points.GetY(point), points.GetX(point));
             if (!double.IsFinite(vertex.LongitudeDegrees) || !(Math.Abs(vertex.LatitudeDegrees) <= 90.0))
             {
-                throw Refusal(vertex, "is no position on the Earth");
+                throw NoPosition(vertex);
             }
 
             if (vertices.Count == 0 || vertices[^1] != vertex)
@@ -143,8 +146,7 @@ internal sealed class GeographicRing
         return 0.5 * Math.Abs(twice);
     }
 
-    private static ArgumentException Refusal(GeoPosition vertex, string fault) =>
-        new(string.Create(
-            CultureInfo.InvariantCulture,
-            $"The ring {fault} (at longitude {vertex.LongitudeDegrees}, latitude {vertex.LatitudeDegrees}). Put its vertices at most 90 degrees of longitude apart."));
+    private static ArgumentException NoPosition(GeoPosition vertex) => new(string.Create(
+        CultureInfo.InvariantCulture,
+        $"The ring is no ring on the Earth (at longitude {vertex.LongitudeDegrees}, latitude {vertex.LatitudeDegrees})."));
 }

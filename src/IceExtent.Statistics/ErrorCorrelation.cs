@@ -19,6 +19,7 @@ public sealed class ErrorCorrelation
     private const double ReachInLengths = 3.5; // exp(−3.5²/2) = 0.2 %: what lies farther off is nothing.
     private const double BlocksPerLength = 3.0;
 
+    private readonly int cellsPerBlock;
     private readonly int[] blockOfCell;
     private readonly double[][] taps = new double[MostPowers + 1][];
 
@@ -32,7 +33,7 @@ public sealed class ErrorCorrelation
         ArgumentOutOfRangeException.ThrowIfLessThanOrEqual(footprintMeters, 0.0);
         ArgumentNullException.ThrowIfNull(grid);
         ArgumentOutOfRangeException.ThrowIfLessThanOrEqual(lengthMeters, 0.0);
-        int cellsPerBlock = Math.Max(1, (int)(lengthMeters / (BlocksPerLength * grid.Frame.CellMeters)));
+        cellsPerBlock = Math.Max(1, (int)(lengthMeters / (BlocksPerLength * grid.Frame.CellMeters)));
         BlockColumns = ((grid.Columns - 1) / cellsPerBlock) + 1;
         BlockRows = ((grid.Rows - 1) / cellsPerBlock) + 1;
         blockOfCell = new int[grid.CellCount];
@@ -71,28 +72,41 @@ public sealed class ErrorCorrelation
     /// <summary>The block of each cell.</summary>
     public ReadOnlySpan<int> BlockOfCell => blockOfCell;
 
+    /// <summary>The blocks round a region.</summary>
+    internal BlockWindow WindowOf(TotalsRegion region) => region.Cells.Length == 0
+        ? new(0, -1, 0, -1)
+        : new(
+            region.Cells[0] / Columns / cellsPerBlock,
+            region.Cells[^1] / Columns / cellsPerBlock,
+            region.FirstColumn / cellsPerBlock,
+            region.LastColumn / cellsPerBlock);
+
     /// <summary>Σ over all pairs of blocks of wᵢ·wⱼ·ρᵢⱼ^power.</summary>
     /// <param name="weights">One weight a block.</param>
     /// <param name="power">1 to <see cref="MostPowers"/>.</param>
     /// <param name="scratch">At least <see cref="BlockCount"/> long; overwritten.</param>
+    public double PairSum(ReadOnlySpan<double> weights, int power, Span<double> scratch) =>
+        PairSum(weights, power, scratch, new(0, BlockRows - 1, 0, BlockColumns - 1));
+
+    /// <summary>The same where all weights outside a window are zero.</summary>
     [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
-    public double PairSum(ReadOnlySpan<double> weights, int power, Span<double> scratch)
+    internal double PairSum(ReadOnlySpan<double> weights, int power, Span<double> scratch, in BlockWindow window)
     {
         ReadOnlySpan<double> kernel = taps[power];
-        Span<double> across = scratch[..BlockCount];
-        across.Clear();
         double sum = 0.0;
-        for (int row = 0; row < BlockRows; row++)
+        for (int row = window.FirstRow; row <= window.LastRow; row++)
         {
-            ReadOnlySpan<double> from = weights.Slice(row * BlockColumns, BlockColumns);
+            int start = (row * BlockColumns) + window.FirstColumn;
+            ReadOnlySpan<double> from = weights.Slice(start, window.Columns);
+            Span<double> blurred = scratch.Slice(start, window.Columns);
+            blurred.Clear();
             if (from.IndexOfAnyExcept(0.0) < 0)
             {
                 continue;
             }
 
-            Span<double> blurred = across.Slice(row * BlockColumns, BlockColumns);
             Accumulate(from, kernel[0], blurred);
-            for (int shift = 1; shift < kernel.Length && shift < BlockColumns; shift++)
+            for (int shift = 1; shift < kernel.Length && shift < window.Columns; shift++)
             {
                 Accumulate(from[shift..], kernel[shift], blurred[..^shift]);
                 Accumulate(from[..^shift], kernel[shift], blurred[shift..]);
@@ -100,9 +114,9 @@ public sealed class ErrorCorrelation
 
             // The blur is symmetric, so a pair of rows counts twice from one side.
             sum += kernel[0] * OrderedSum.OfProducts(from, blurred);
-            for (int apart = 1; apart < kernel.Length && apart <= row; apart++)
+            for (int apart = 1; apart < kernel.Length && apart <= row - window.FirstRow; apart++)
             {
-                sum += 2.0 * kernel[apart] * OrderedSum.OfProducts(from, across.Slice((row - apart) * BlockColumns, BlockColumns));
+                sum += 2.0 * kernel[apart] * OrderedSum.OfProducts(from, scratch.Slice(start - (apart * BlockColumns), window.Columns));
             }
         }
 

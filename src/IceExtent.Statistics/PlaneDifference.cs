@@ -6,12 +6,13 @@ namespace IceExtent.Statistics;
 /// <param name="RootMeanSquareFraction">Root mean square difference, NaN without a cell. Unit: 1.</param>
 public readonly record struct PlaneDifference(int Cells, double MeanFraction, double RootMeanSquareFraction)
 {
-    /// <summary>Compares two planes.</summary>
+    /// <summary>Compares two planes over some cells.</summary>
     /// <param name="fraction">Concentrations of one method; NaN is missing.</param>
     /// <param name="reference">Concentrations of the other; as long.</param>
     /// <param name="iceFraction">From here on a cell is ice. Unit: 1.</param>
+    /// <param name="cells">The cells, each counted once and wholly.</param>
     /// <exception cref="ArgumentException">The planes differ in length.</exception>
-    public static PlaneDifference Of(ReadOnlySpan<float> fraction, ReadOnlySpan<float> reference, double iceFraction)
+    public static PlaneDifference Of(ReadOnlySpan<float> fraction, ReadOnlySpan<float> reference, double iceFraction, ReadOnlySpan<int> cells)
     {
         if (fraction.Length != reference.Length)
         {
@@ -19,18 +20,18 @@ public readonly record struct PlaneDifference(int Cells, double MeanFraction, do
         }
 
         float limit = (float)iceFraction;
-        (int cells, double sum, double squares) = (0, 0.0, 0.0);
-        for (int cell = 0; cell < fraction.Length; cell++)
+        (int count, double sum, double squares) = (0, 0.0, 0.0);
+        foreach (int cell in cells)
         {
             double difference = (double)fraction[cell] - reference[cell];
             if (!double.IsNaN(difference) && (fraction[cell] >= limit || reference[cell] >= limit))
             {
-                cells++;
+                count++;
                 sum += difference;
                 squares += difference * difference;
             }
         }
 
-        return new(cells, sum / cells, Math.Sqrt(squares / cells));
+        return new(count, sum / count, Math.Sqrt(squares / count));
     }
 }

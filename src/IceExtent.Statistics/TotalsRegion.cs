@@ -11,7 +11,15 @@ public sealed class TotalsRegion
     private readonly int[] cells;
     private readonly double[] areas;
 
-    private TotalsRegion(string name, int[] cells, double[] areas) => (Name, this.cells, this.areas) = (name, cells, areas);
+    private TotalsRegion(string name, Grid grid, int[] cells, double[] areas)
+    {
+        (Name, this.cells, this.areas) = (name, cells, areas);
+        (FirstColumn, LastColumn) = (int.MaxValue, 0);
+        foreach (int cell in cells)
+        {
+            (FirstColumn, LastColumn) = (Math.Min(FirstColumn, cell % grid.Columns), Math.Max(LastColumn, cell % grid.Columns));
+        }
+    }
 
     /// <summary>The name in the <c>region</c> column.</summary>
     public string Name { get; }
@@ -21,6 +29,12 @@ public sealed class TotalsRegion
 
     /// <summary>The area each cell brings, in m², in the order of <see cref="Cells"/>.</summary>
     public ReadOnlySpan<double> AreasSquareMeters => areas;
+
+    /// <summary>The columns between which all cells lie, both included.</summary>
+    internal int FirstColumn { get; }
+
+    /// <inheritdoc cref="FirstColumn"/>
+    internal int LastColumn { get; }
 
     /// <summary>Every ocean cell of a grid, with its whole area on the ellipsoid.</summary>
     /// <param name="grid">The grid.</param>
@@ -50,6 +64,29 @@ public sealed class TotalsRegion
             areas[index] = gridAreas[cells[index]];
         }
 
-        return new(WholeHemisphere, [.. cells], areas);
+        return new(WholeHemisphere, grid, [.. cells], areas);
+    }
+
+    /// <summary>A part of the ocean: of each cell it brings the share that lies in the region.</summary>
+    /// <param name="grid">The grid.</param>
+    /// <param name="region">The ocean cells of the region, laid over the same grid.</param>
+    /// <exception cref="ArgumentException">A cell is not of the grid.</exception>
+    public static TotalsRegion Part(Grid grid, GridRegion region)
+    {
+        ArgumentNullException.ThrowIfNull(grid);
+        ArgumentNullException.ThrowIfNull(region);
+        if (region.Cells.Count > 0 && (region.Cells[0] < 0 || region.Cells[^1] >= grid.CellCount))
+        {
+            throw new ArgumentException($"The region {region.Name} has cells outside the grid {grid.Name}.", nameof(region));
+        }
+
+        ReadOnlySpan<double> gridAreas = grid.CellAreasSquareMeters;
+        double[] areas = new double[region.Cells.Count];
+        for (int index = 0; index < areas.Length; index++)
+        {
+            areas[index] = gridAreas[region.Cells[index]] * region.Shares[index];
+        }
+
+        return new(region.Name, grid, [.. region.Cells], areas);
     }
 }

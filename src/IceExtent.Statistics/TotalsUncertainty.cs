@@ -28,6 +28,7 @@ public sealed class TotalsUncertainty
     private readonly double[] terms = new double[ErrorCorrelation.MostPowers];
     private readonly LocalErrors local;
     private double shared = 1.0; // λ of the cell in hand.
+    private bool anyNearLimit;
 
     /// <summary>Makes the working memory.</summary>
     /// <param name="correlation">The correlation of cell errors on the grid.</param>
@@ -62,14 +63,32 @@ public sealed class TotalsUncertainty
     {
         ArgumentNullException.ThrowIfNull(region);
         Gather(region, totalFraction, standardErrorFraction, iceFraction, scatter);
-        double areaVariance = local.TakeVariance() + correlation.PairSum(areaWeights, 1, scratch);
+        BlockWindow window = correlation.WindowOf(region);
+        double areaVariance = local.TakeVariance() + correlation.PairSum(areaWeights, 1, scratch, window);
         double extentVariance = 0.0;
-        for (int term = 0; term < extentWeights.Length; term++)
+        for (int term = 0; anyNearLimit && term < extentWeights.Length; term++)
         {
-            extentVariance += correlation.PairSum(extentWeights[term], term + 1, scratch);
+            extentVariance += correlation.PairSum(extentWeights[term], term + 1, scratch, window);
         }
 
+        Forget(window);
         return (Math.Sqrt(extentVariance), Math.Sqrt(areaVariance));
+    }
+
+    // Between two calls all weights are zero.
+    private void Forget(in BlockWindow window)
+    {
+        for (int row = window.FirstRow; row <= window.LastRow; row++)
+        {
+            int start = (row * correlation.BlockColumns) + window.FirstColumn;
+            areaWeights.AsSpan(start, window.Columns).Clear();
+            for (int term = 0; anyNearLimit && term < extentWeights.Length; term++)
+            {
+                extentWeights[term].AsSpan(start, window.Columns).Clear();
+            }
+        }
+
+        anyNearLimit = false;
     }
 
     [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
@@ -77,12 +96,6 @@ public sealed class TotalsUncertainty
         TotalsRegion region, ReadOnlySpan<float> totalFraction, ReadOnlySpan<float> standardErrorFraction, double iceFraction, RetrievalScatter? scatter)
     {
         shared = 1.0;
-        areaWeights.AsSpan().Clear();
-        foreach (double[] weights in extentWeights)
-        {
-            weights.AsSpan().Clear();
-        }
-
         float limit = (float)iceFraction;
         // Neighbours in a block are often plain water or full ice alike: their areas are added up before they are spread.
         (float knownFraction, float knownError, bool nearLimit) = (float.NaN, float.NaN, false);
@@ -128,6 +141,7 @@ public sealed class TotalsUncertainty
     private void Spread(int block, double area, double iceError, bool nearLimit)
     {
         areaWeights[block] += area * iceError * shared;
+        anyNearLimit |= nearLimit;
         for (int term = 0; nearLimit && term < terms.Length; term++)
         {
             extentWeights[term][block] += area * terms[term];

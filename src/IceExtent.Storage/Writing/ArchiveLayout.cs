@@ -55,6 +55,9 @@ public sealed partial class ArchiveLayout
     public string TiePointFile(Hemisphere hemisphere, int year) => Path.Join(
         Path.Join(Root, "tie_points"), $"hemisphere={NameOf(hemisphere)}", YearFolder(year), "tie_points.parquet");
 
+    /// <summary>The cells of regions; they belong to no method and no year.</summary>
+    public string RegionCellFile(Hemisphere hemisphere) => CellFile("region_cells", hemisphere);
+
     /// <summary>The grid file of one day.</summary>
     /// <exception cref="FaultException">IE3110: the method's name cannot be used.</exception>
     public string GridFile(string method, Hemisphere hemisphere, DateOnly day) => Path.Join(
@@ -64,6 +67,9 @@ public sealed partial class ArchiveLayout
     /// <param name="name">The run's name.</param>
     /// <exception cref="FaultException">IE3110: the name cannot be used.</exception>
     public string RunFile(string name) => Path.Join(RunFolder, Checked(name) + ".json");
+
+    private string CellFile(string table, Hemisphere hemisphere) => Path.Join(
+        Path.Join(Root, table), $"hemisphere={NameOf(hemisphere)}", $"{table}.parquet");
 
     private string Folder(string table, string method, Hemisphere hemisphere, int? year)
     {

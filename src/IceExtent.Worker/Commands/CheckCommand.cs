@@ -29,7 +29,7 @@ internal static class CheckCommand
             }
 
             int readable = ReadAll(settings, plan, faults, cancellation);
-            Write(readable, faults, parsed.GetValue(json), console);
+            Write(settings, readable, faults, parsed.GetValue(json), console);
             return Task.FromResult(readable == 0 ? ExitCode.NoUsableInput : faults.Count > 0 ? ExitCode.DoneWithGaps : ExitCode.Done);
         });
         return command;
@@ -55,16 +55,21 @@ internal static class CheckCommand
         return readable;
     }
 
-    private static void Write(int readable, List<Fault> faults, bool json, CommandConsole console)
+    private static void Write(RunSettings settings, int readable, List<Fault> faults, bool json, CommandConsole console)
     {
         if (json)
         {
-            console.Print(JsonText.Of(
-                new { DaysReadable = readable, Faults = faults.Select(fault => new { fault.Code, Text = fault.ToString() }) }));
+            console.Print(JsonText.Of(new
+            {
+                DaysReadable = readable,
+                Regions = CellReport.RegionsOf(settings),
+                Faults = faults.Select(fault => new { fault.Code, Text = fault.ToString() }),
+            }));
             return;
         }
 
         console.Tell(faults);
+        CellReport.Print(settings, console);
         console.Print(string.Create(CultureInfo.InvariantCulture, $"The run file can be understood. {Counted.Days(readable)} can be read, {Counted.Of(faults.Count, "fault")}."));
     }
 }

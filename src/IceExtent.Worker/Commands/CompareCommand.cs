@@ -83,7 +83,7 @@ internal static class CompareCommand
 
     private static void Print(RunSettings settings, List<MethodComparisonRow> rows, string folder, bool json, CommandConsole console)
     {
-        var means = rows.GroupBy(row => row.Method).Select(method => new
+        var means = rows.Where(row => row.Region == TotalsRegion.WholeHemisphere).GroupBy(row => row.Method).Select(method => new
         {
             Method = method.Key,
             Days = method.Count(),

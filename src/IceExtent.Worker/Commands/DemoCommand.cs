@@ -97,13 +97,13 @@ internal static class DemoCommand
         console.Print("year  largest                    smallest                   days used");
         for (int year = FirstDay.Year; year <= LastDay.Year; year++)
         {
-            IReadOnlyList<DailyRow> rows = DailyTable.Read(layout.DailyFile("nasa-team", Grids.Hemisphere.North, year)).Rows;
+            DailyRow[] rows = [.. DailyTable.Read(layout.DailyFile("nasa-team", Grids.Hemisphere.North, year)).Rows.Where(row => row.Region == TotalsRegion.WholeHemisphere)];
             DailyRow[] covered = [.. rows.Where(row => row.ObservedShare >= LeastObservedShare)];
             console.Print(covered.Length == 0
                 ? string.Create(CultureInfo.InvariantCulture, $"{year}  no day observed well enough")
                 : string.Create(
                     CultureInfo.InvariantCulture,
-                    $"{year}  {Extreme(covered.MaxBy(row => row.ExtentSquareKilometers)!)}   {Extreme(covered.MinBy(row => row.ExtentSquareKilometers)!)}   {covered.Length} of {rows.Count}"));
+                    $"{year}  {Extreme(covered.MaxBy(row => row.ExtentSquareKilometers)!)}   {Extreme(covered.MinBy(row => row.ExtentSquareKilometers)!)}   {covered.Length} of {rows.Length}"));
         }
     }
 

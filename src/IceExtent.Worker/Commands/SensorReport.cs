@@ -1,5 +1,6 @@
 using System.Globalization;
 using IceExtent.Retrieval;
+using IceExtent.Statistics;
 using IceExtent.Statistics.Overlaps;
 using IceExtent.Storage.Faults;
 using IceExtent.Storage.Writing;
@@ -141,7 +142,7 @@ internal static class SensorReport
     {
         console.Print($"{pair.LaterSensor} (source {pair.Later}) less {pair.EarlierSensor} (source {pair.Earlier}), km²; common: cells that both saw; own: as each sensor's daily rows");
         console.Print("method         quantity cells  month  days  effective       mean    st.dev.  95 % limits of the mean");
-        foreach (SensorDifferenceRow row in differences)
+        foreach (SensorDifferenceRow row in differences.Where(row => row.Region == TotalsRegion.WholeHemisphere))
         {
             MeanOfDays mean = row.Difference;
             string limits = mean.Limits == MeanLimits.Given

@@ -13,6 +13,8 @@ internal sealed record ConfigFolder(string Path)
 
     public string Seasons => System.IO.Path.Combine(Path, "seasons");
 
+    public string Regions => System.IO.Path.Combine(Path, "regions");
+
     public string Scenes => System.IO.Path.Combine(Path, "scenes");
 
     public string Demo => System.IO.Path.Combine(Path, "demo");
@@ -20,8 +22,8 @@ internal sealed record ConfigFolder(string Path)
     public string Sensors => System.IO.Path.Combine(Path, "sensors");
 
     /// <summary>The names that files of one kind have, in ordinal order.</summary>
-    public static IReadOnlyList<string> NamesIn(string folder) => Directory.Exists(folder)
-        ? [.. Directory.EnumerateFiles(folder, "*.toml").Select(System.IO.Path.GetFileNameWithoutExtension).OfType<string>().Order(StringComparer.Ordinal)]
+    public static IReadOnlyList<string> NamesIn(string folder, string ending = ".toml") => Directory.Exists(folder)
+        ? [.. Directory.EnumerateFiles(folder, "*" + ending).Select(System.IO.Path.GetFileNameWithoutExtension).OfType<string>().Order(StringComparer.Ordinal)]
         : [];
 
     /// <summary>The file a run file means: a name in a folder of config/, or a path ending in .toml relative to the run file.</summary>

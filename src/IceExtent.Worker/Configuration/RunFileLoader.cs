@@ -32,6 +32,7 @@ internal static class RunFileLoader
         List<string> methods = Methods(scope);
         bool? writeGrids = scope.Flag("write_grids", required: false);
         string? notice = scope.Text("notice", required: false);
+        RegionLoader regions = new(scope, config, folder);
         ConfigScope shipped = new(defaults, string.Empty, faults);
         LayeredScope layered = new(scope, shipped);
         SeasonSettings? season = grid is null ? null : SeasonLoader.Load(scope, shipped, config, grid.Grid.Hemisphere, folder, faults);
@@ -54,6 +55,9 @@ internal static class RunFileLoader
         List<RunSource?> loaded = [.. scope.Tables("source").Select(source => sources.Load(source, grid?.Grid))];
         scope.RefuseUnknown();
         LandShare? land = grid is null ? null : Land(grid, faults);
+        bool[]? ocean = landLimit is { } limit ? land?.OceanBelow(limit) : null;
+        GridLand? under = ocean is null || output is null ? null : new(grid!, ocean, landLimit!.Value, Path.GetFullPath(output, folder));
+        RegionSettings laid = under is null ? RegionSettings.None : regions.LayOver(under, faults);
         if (faults.Count > 0)
         {
             throw new ConfigurationException(faults);
@@ -64,9 +68,10 @@ internal static class RunFileLoader
             RunFile = path,
             Output = Path.GetFullPath(output!, folder),
             Grid = grid!.Grid,
-            ConfigPaths = [config.Defaults, grid.ConfigPath, grid.LandPath, .. coast!.MinimumPath is { } minimum ? [minimum] : Array.Empty<string>(), .. weather!.Paths],
-            Ocean = land!.OceanBelow(landLimit!.Value),
-            Land = land,
+            ConfigPaths = [config.Defaults, grid.ConfigPath, grid.LandPath, .. coast!.MinimumPath is { } minimum ? [minimum] : Array.Empty<string>(), .. weather!.Paths, .. laid.Paths],
+            Regions = laid,
+            Ocean = ocean!,
+            Land = land!,
             Coast = coast,
             TiePoints = tiePoints!,
             Weather = weather,
@@ -78,7 +83,7 @@ internal static class RunFileLoader
             DayFilling = overDays!.Rules,
             FillMissingDays = overDays.MissingDays,
             LeastRimShare = rimShare!.Value,
-            LandLimitFraction = landLimit.Value,
+            LandLimitFraction = landLimit!.Value,
             ErrorLengths = new(errorLength!.Value * 1_000.0, footprint!.Value * 1_000.0),
             Smearing = new(smearing!.Value, curvature!.Value),
             Overlap = overlap!,

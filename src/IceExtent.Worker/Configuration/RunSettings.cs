@@ -33,6 +33,9 @@ internal sealed record RunSettings
     /// <summary>The files beside the run file that decide numbers: defaults, grid, land.</summary>
     public required IReadOnlyList<string> ConfigPaths { get; init; }
 
+    /// <summary>The parts of the ocean that get totals of their own.</summary>
+    public required RegionSettings Regions { get; init; }
+
     /// <summary>Whether each cell counts as ocean.</summary>
     public required bool[] Ocean { get; init; }
 

@@ -56,6 +56,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         series.CheckSameConfiguration(
             plan.Days.Select(day => day.Date).Concat(plan.DaysToFill).Concat(plan.Gaps.Select(gap => gap.Date).OfType<DateOnly>()).Select(day => day.Year).Distinct(), digest);
 
+        WriteCells();
         gaps.AddRange(plan.Gaps);
         DateOnly[] lost = [.. plan.Gaps.Select(gap => gap.Date).OfType<DateOnly>().Except(plan.Days.Select(day => day.Date)).Except(plan.DaysToFill)];
         series.Remove(lost);
@@ -74,6 +75,20 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         int exitCode = done + filled == 0 ? ExitCode.NoUsableInput : gaps.Count > 0 ? ExitCode.DoneWithGaps : ExitCode.Done;
         string recordPath = WriteRecord(plan, started, digest, done, exitCode);
         return new(exitCode, plan, done, filled, gaps, series.DaysRemoved, recordPath);
+    }
+
+    // After the archive is known to be of this configuration: its cells are then either these or missing.
+    private void WriteCells()
+    {
+        string path = layout.RegionCellFile(settings.Grid.Hemisphere);
+        if (settings.Regions.Regions.Count == 0)
+        {
+            PublishedFile.Delete(path);
+        }
+        else if (!settings.Regions.Stored)
+        {
+            RegionCellTable.Write(path, settings.Grid, settings.Regions.Regions, settings.Regions.Digest, CellMetadata);
+        }
     }
 
     private async Task ProcessAsync(
@@ -221,6 +236,14 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
 
         return metadata;
     }
+
+    // Nothing of what does not decide the cells.
+    private KeyValuePair<string, string>[] CellMetadata =>
+    [
+        new("grid", settings.Grid.Name),
+        new("program_version", ProgramVersion.Text),
+        new("notice", settings.Notice ?? "none"),
+    ];
 
     private KeyValuePair<string, string>[] TiePointMetadata(string digest) =>
     [

@@ -15,7 +15,7 @@ internal sealed class DayPreparation
     public DayPreparation(RunSettings settings)
     {
         Settings = settings;
-        Regions = [TotalsRegion.Hemisphere(settings.Grid, settings.Ocean)];
+        Regions = [TotalsRegion.Hemisphere(settings.Grid, settings.Ocean), .. settings.Regions.Regions.Select(region => TotalsRegion.Part(settings.Grid, region))];
         Correlation = new(settings.Grid, settings.ErrorLengths.FarMeters, settings.ErrorLengths.FootprintMeters);
         Neighbours = settings.LeastNeighbours > 0 ? new(settings.Grid, settings.LeastNeighbours) : null;
         Days = settings.DayFilling is { } rules ? new(rules) : null;
@@ -29,6 +29,7 @@ internal sealed class DayPreparation
 
     public RunSettings Settings { get; }
 
+    /// <summary>The whole hemisphere, then the regions of the run.</summary>
     public IReadOnlyList<TotalsRegion> Regions { get; }
 
     public ErrorCorrelation Correlation { get; }

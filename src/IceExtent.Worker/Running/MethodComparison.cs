@@ -38,7 +38,7 @@ internal sealed class MethodComparison(RunSettings settings, DayPreparation prep
         {
             DailyTotals totals = Totals(method);
             bool observed = totals.Observed > 0.0 && first.Observed > 0.0;
-            PlaneDifference difference = PlaneDifference.Of(planes[method].Total, planes[0].Total, settings.Rules.IceFraction);
+            PlaneDifference difference = PlaneDifference.Of(planes[method].Total, planes[0].Total, settings.Rules.IceFraction, region.Cells);
             yield return new()
             {
                 Date = date,
