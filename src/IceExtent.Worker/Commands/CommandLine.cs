@@ -26,6 +26,7 @@ internal static class CommandLine
             PlanCommand.Make(console),
             CheckCommand.Make(console),
             CompareCommand.Make(console),
+            SeasonCommand.Make(console),
             IceMaskCommand.Make(console),
             SceneCommand.Make(console),
             CoastMinimumCommand.Make(console),

@@ -79,6 +79,7 @@ internal static class SeasonLoader
         SchemeScope scope = new(own, here, file, shipped);
         SeasonScheme scheme = Scheme(scope, Path.GetFileNameWithoutExtension(path), source);
         RegionSeasonRules regions = Regions(scope, side);
+        int trendYears = scope.WholeNumber("least_trend_years", 3, 100);
         if (other is not null)
         {
             Scheme(new(own, other, file, shipped), string.Empty, source); // So that its keys are checked too.
@@ -89,7 +90,7 @@ internal static class SeasonLoader
             layer?.RefuseUnknown();
         }
 
-        return faults.Count > before ? null : new(scheme, regions, [path]);
+        return faults.Count > before ? null : new(scheme, regions, trendYears, [path]);
     }
 
     private static SeasonScheme Scheme(SchemeScope scope, string name, string source)

@@ -5,5 +5,6 @@ namespace IceExtent.Worker.Configuration;
 /// <summary>How a run finds season dates.</summary>
 /// <param name="Scheme">The rules of cells and places.</param>
 /// <param name="Regions">The rules of a region's area.</param>
+/// <param name="LeastTrendYears">A trend needs so many years.</param>
 /// <param name="Paths">The files that decide dates: the scheme's.</param>
-internal sealed record SeasonSettings(SeasonScheme Scheme, RegionSeasonRules Regions, IReadOnlyList<string> Paths);
+internal sealed record SeasonSettings(SeasonScheme Scheme, RegionSeasonRules Regions, int LeastTrendYears, IReadOnlyList<string> Paths);
