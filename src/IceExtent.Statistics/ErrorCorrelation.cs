@@ -27,10 +27,12 @@ public sealed class ErrorCorrelation
     /// <param name="grid">The grid.</param>
     /// <param name="lengthMeters">The correlation length L, in m.</param>
     /// <param name="footprintMeters">The side of the squares inside which local errors are alike, in m.</param>
+    /// <param name="missedIceMeters">The side of the squares inside which cells alike hide ice that was not retrieved, in m.</param>
     /// <exception cref="ArgumentOutOfRangeException">A length is not positive.</exception>
-    public ErrorCorrelation(Grid grid, double lengthMeters, double footprintMeters)
+    public ErrorCorrelation(Grid grid, double lengthMeters, double footprintMeters, double missedIceMeters)
     {
         ArgumentOutOfRangeException.ThrowIfLessThanOrEqual(footprintMeters, 0.0);
+        ArgumentOutOfRangeException.ThrowIfLessThanOrEqual(missedIceMeters, 0.0);
         ArgumentNullException.ThrowIfNull(grid);
         ArgumentOutOfRangeException.ThrowIfLessThanOrEqual(lengthMeters, 0.0);
         cellsPerBlock = Math.Max(1, (int)(lengthMeters / (BlocksPerLength * grid.Frame.CellMeters)));
@@ -44,6 +46,7 @@ public sealed class ErrorCorrelation
 
         (Columns, Rows) = (grid.Columns, grid.Rows);
         CellsPerFootprint = Math.Max(1, (int)Math.Round(footprintMeters / grid.Frame.CellMeters));
+        CellsPerMissedIce = Math.Max(1, (int)Math.Round(missedIceMeters / grid.Frame.CellMeters));
         double lengthInBlocks = lengthMeters / (cellsPerBlock * grid.Frame.CellMeters);
         for (int power = 1; power <= MostPowers; power++)
         {
@@ -59,6 +62,9 @@ public sealed class ErrorCorrelation
 
     /// <summary>The side of a footprint, in cells.</summary>
     public int CellsPerFootprint { get; }
+
+    /// <summary>The side of a square of missed ice, in cells.</summary>
+    public int CellsPerMissedIce { get; }
 
     /// <summary>The number of blocks in a row of blocks.</summary>
     public int BlockColumns { get; }

@@ -1,5 +1,6 @@
 using System.Runtime.CompilerServices;
 using IceExtent.Retrieval;
+using MathNet.Numerics.Distributions;
 
 namespace IceExtent.Statistics;
 
@@ -12,7 +13,8 @@ namespace IceExtent.Statistics;
 /// Source of the series: [Kendall1941], value from memory. Where the scatter of the pure surfaces is given, the area takes that
 /// part of a cell's error alone as alike over the correlation length, and the rest (noise, smearing, coasts, filling) as alike inside one
 /// footprint (<see cref="LocalErrors"/>): what a footprint takes from one cell it gives to the next. Extent does not: along an edge
-/// smearing has one sign, over hundreds of kilometres. Our own. Empty cells and an unfilled polar gap add nothing here.
+/// smearing has one sign, over hundreds of kilometres. But cells where no ice was retrieved, most of them screened, hide
+/// ice of their own: alike inside squares (<see cref="LocalCounts"/>) and no farther. Our own. Empty cells and an unfilled polar gap add nothing here.
 /// </remarks>
 public sealed class TotalsUncertainty
 {
@@ -27,8 +29,10 @@ public sealed class TotalsUncertainty
     private readonly double[] scratch;
     private readonly double[] terms = new double[ErrorCorrelation.MostPowers];
     private readonly LocalErrors local;
+    private readonly LocalCounts missed;
     private double shared = 1.0; // λ of the cell in hand.
     private bool anyNearLimit;
+    private double countsWith; // The probability that it counts as ice, where none was retrieved.
 
     /// <summary>Makes the working memory.</summary>
     /// <param name="correlation">The correlation of cell errors on the grid.</param>
@@ -45,6 +49,7 @@ public sealed class TotalsUncertainty
 
         scratch = new double[correlation.BlockCount];
         local = new(correlation.Columns, correlation.Rows, correlation.CellsPerFootprint);
+        missed = new(correlation.Columns, correlation.Rows, correlation.CellsPerMissedIce);
     }
 
     /// <summary>Computes both standard errors.</summary>
@@ -53,19 +58,21 @@ public sealed class TotalsUncertainty
     /// <param name="standardErrorFraction">Their standard errors. Unit: 1.</param>
     /// <param name="iceFraction">The limit from which a cell counts as ice. Unit: 1.</param>
     /// <param name="scatter">The part of the errors that is alike over the correlation length, or null where all of it is.</param>
+    /// <param name="edgeShiftSquareMeters">The standard error of extent that all of the edge has in common, in m²: see <see cref="EdgeShift"/>.</param>
     /// <returns>In m².</returns>
     public (double Extent, double IceArea) StandardErrorsSquareMeters(
         TotalsRegion region,
         ReadOnlySpan<float> totalFraction,
         ReadOnlySpan<float> standardErrorFraction,
         double iceFraction,
-        RetrievalScatter? scatter = null)
+        RetrievalScatter? scatter = null,
+        double edgeShiftSquareMeters = 0.0)
     {
         ArgumentNullException.ThrowIfNull(region);
         Gather(region, totalFraction, standardErrorFraction, iceFraction, scatter);
         BlockWindow window = correlation.WindowOf(region);
         double areaVariance = local.TakeVariance() + correlation.PairSum(areaWeights, 1, scratch, window);
-        double extentVariance = 0.0;
+        double extentVariance = missed.TakeVariance() + (edgeShiftSquareMeters * edgeShiftSquareMeters);
         for (int term = 0; anyNearLimit && term < extentWeights.Length; term++)
         {
             extentVariance += correlation.PairSum(extentWeights[term], term + 1, scratch, window);
@@ -117,25 +124,32 @@ public sealed class TotalsUncertainty
             bool alike = fraction == knownFraction && error == knownError;
             if (!alike || block != runBlock)
             {
-                Spread(runBlock, runArea, knownFraction >= limit ? knownError : 0.0, nearLimit);
+                Spread(runBlock, runArea, knownFraction >= limit ? knownError : 0.0, nearLimit && knownFraction > 0f);
                 (runBlock, runArea) = (block, 0.0);
             }
 
             if (!alike)
             {
                 (knownFraction, knownError) = (fraction, error);
-                nearLimit = ComputeTerms((fraction - iceFraction) / error);
+                double fromLimit = (fraction - iceFraction) / error;
+                nearLimit = ComputeTerms(fromLimit);
+                countsWith = nearLimit && fraction <= 0f ? Normal.CDF(0.0, 1.0, fromLimit) : 0.0;
                 shared = scatter is not null && fraction >= limit ? Math.Min(scatter.At(fraction) / error, 1.0) : 1.0;
             }
 
             runArea += areas[index];
+            if (nearLimit && fraction <= 0f)
+            {
+                missed.Add(cell, areas[index], countsWith);
+            }
+
             if (shared < 1.0)
             {
                 local.Add(cell, areas[index] * error, shared);
             }
         }
 
-        Spread(runBlock, runArea, knownFraction >= limit ? knownError : 0.0, nearLimit);
+        Spread(runBlock, runArea, knownFraction >= limit ? knownError : 0.0, nearLimit && knownFraction > 0f);
     }
 
     private void Spread(int block, double area, double iceError, bool nearLimit)

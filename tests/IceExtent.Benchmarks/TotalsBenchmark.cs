@@ -35,7 +35,7 @@ public class TotalsBenchmark
         }
 
         region = TotalsRegion.Hemisphere(grid, ocean);
-        uncertainty = new(new ErrorCorrelation(grid, 300_000.0, 50_000.0));
+        uncertainty = new(new ErrorCorrelation(grid, 300_000.0, 54_500.0, 100_000.0));
     }
 
     [Benchmark]

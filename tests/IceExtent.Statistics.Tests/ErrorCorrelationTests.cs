@@ -17,7 +17,7 @@ public sealed class ErrorCorrelationTests
     {
         const double length = 300_000.0;
         Grid grid = SmallGrid.EqualArea(40, 50);
-        ErrorCorrelation correlation = new(grid, length, 50_000.0);
+        ErrorCorrelation correlation = new(grid, length, 50_000.0, 50_000.0);
         Random random = new(Seed: 7);
         double[] weights = [.. Enumerable.Range(0, grid.CellCount).Select(_ => random.NextDouble() < 0.3 ? random.NextDouble() : 0.0)];
         double[] blocks = new double[correlation.BlockCount];
@@ -46,7 +46,7 @@ public sealed class ErrorCorrelationTests
     [Fact]
     public void PairSum_OneBlock_IsTheSquareOfItsWeight()
     {
-        ErrorCorrelation correlation = new(SmallGrid.EqualArea(12, 12), 100_000.0, 50_000.0);
+        ErrorCorrelation correlation = new(SmallGrid.EqualArea(12, 12), 100_000.0, 50_000.0, 50_000.0);
         double[] blocks = new double[correlation.BlockCount];
         blocks[17] = 3.0;
 
@@ -55,5 +55,5 @@ public sealed class ErrorCorrelationTests
 
     [Fact]
     public void Constructor_LengthOfZero_IsRefused() =>
-        Assert.Throws<ArgumentOutOfRangeException>(() => new ErrorCorrelation(SmallGrid.EqualArea(2, 2), 0.0, 50_000.0));
+        Assert.Throws<ArgumentOutOfRangeException>(() => new ErrorCorrelation(SmallGrid.EqualArea(2, 2), 0.0, 50_000.0, 50_000.0));
 }

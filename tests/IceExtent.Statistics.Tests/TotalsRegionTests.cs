@@ -33,7 +33,7 @@ public sealed class TotalsRegionTests
     public void StandardErrors_AnyRegion_AreThoseOfAHemisphereWithNothingElse()
     {
         Grid grid = SmallGrid.EqualArea(24, 30);
-        ErrorCorrelation correlation = new(grid, 150_000.0, 50_000.0);
+        ErrorCorrelation correlation = new(grid, 150_000.0, 50_000.0, 100_000.0);
         TotalsUncertainty reused = new(correlation);
         TotalsRegion whole = TotalsRegion.Hemisphere(grid, SmallGrid.AllOcean(grid));
         RetrievalScatter scatter = new(0.02, 0.04);

@@ -12,7 +12,8 @@ public sealed class TotalsUncertaintyTests
     /// <summary>
     /// Origin: independent, 3,000 draws of correlated Gaussian errors (white noise through the square root of the
     /// correlation, a Gaussian of half the variance) added to a scene with an ice edge; seed 20260101. The draws' own
-    /// standard deviations are known to 1.3 %, so 5 % is a test of the formula.
+    /// standard deviations are known to 1.3 %, so 5 % is a test of the formula. In extent, cells of no ice have errors of their own,
+    /// one a square of two by two.
     /// </summary>
     [Theory]
     [InlineData(0.05)]
@@ -24,7 +25,7 @@ public sealed class TotalsUncertaintyTests
         float[] total = Edge(grid);
         float[] errors = Enumerable.Repeat((float)cellError, grid.CellCount).ToArray();
 
-        (double extent, double area) = new TotalsUncertainty(new ErrorCorrelation(grid, Length, 50_000.0))
+        (double extent, double area) = new TotalsUncertainty(new ErrorCorrelation(grid, Length, 50_000.0, 50_000.0))
             .StandardErrorsSquareMeters(region, total, errors, 0.15);
 
         (double drawnExtent, double drawnArea) = MonteCarlo(grid, total, cellError);
@@ -45,14 +46,47 @@ public sealed class TotalsUncertaintyTests
         float[] errors = Enumerable.Repeat(0.12f, grid.CellCount).ToArray();
         RetrievalScatter scatter = new(0.06, 0.06); // Of cells between, less: as much as the mixture leaves.
 
-        (double extent, double area) = new TotalsUncertainty(new ErrorCorrelation(grid, Length, 50_000.0))
+        (double extent, double area) = new TotalsUncertainty(new ErrorCorrelation(grid, Length, 50_000.0, 50_000.0))
             .StandardErrorsSquareMeters(region, total, errors, 0.15, scatter);
 
         (_, double drawnArea) = MonteCarlo(grid, total, 0.12, cell => scatter.At(total[cell]));
-        (double whole, double wholeArea) = new TotalsUncertainty(new ErrorCorrelation(grid, Length, 50_000.0)).StandardErrorsSquareMeters(region, total, errors, 0.15);
+        (double whole, double wholeArea) = new TotalsUncertainty(new ErrorCorrelation(grid, Length, 50_000.0, 50_000.0)).StandardErrorsSquareMeters(region, total, errors, 0.15);
         Assert.InRange(area / drawnArea, 0.95, 1.05);
         Assert.True(area < 0.9 * wholeArea);
         Assert.Equal(whole, extent);
+    }
+
+    /// <summary>Origin: worked by hand: what all of the edge has in common is independent of the rest, so squares add.</summary>
+    [Fact]
+    public void StandardErrors_EdgeShift_AddsInSquaresToExtentAlone()
+    {
+        Grid grid = SmallGrid.EqualArea(36, 40);
+        TotalsRegion region = TotalsRegion.Hemisphere(grid, SmallGrid.AllOcean(grid));
+        float[] errors = Enumerable.Repeat(0.05f, grid.CellCount).ToArray();
+        TotalsUncertainty uncertainty = new(new ErrorCorrelation(grid, Length, 50_000.0, 50_000.0));
+
+        (double without, double area) = uncertainty.StandardErrorsSquareMeters(region, Edge(grid), errors, 0.15);
+        (double with, double sameArea) = uncertainty.StandardErrorsSquareMeters(region, Edge(grid), errors, 0.15, edgeShiftSquareMeters: 2e10);
+
+        Assert.Equal(Math.Sqrt((without * without) + 4e20), with, 1e-9 * with);
+        Assert.Equal(area, sameArea);
+    }
+
+    /// <summary>
+    /// Origin: worked by hand: one square of four cells of 625 km² without ice. Two cells whose limit lies one standard error away count
+    /// with p = 0.158655, two at two standard errors with q = 0.022750, and only when the others do. In cells squared:
+    /// 4 p(1 − p) + 4 q(1 − q) + 8 (q − pq) = 0.533936 + 0.088930 + 0.153125 = 0.775991; its root times 625 km² is 550.6 km².
+    /// </summary>
+    [Fact]
+    public void StandardErrors_OneSquareWithoutIce_IsThatOfOneDraw()
+    {
+        Grid grid = SmallGrid.EqualArea(2, 2);
+        TotalsRegion region = TotalsRegion.Hemisphere(grid, SmallGrid.AllOcean(grid));
+
+        (double extent, _) = new TotalsUncertainty(new ErrorCorrelation(grid, Length, 25_000.0, 50_000.0))
+            .StandardErrorsSquareMeters(region, new float[4], [0.15f, 0.075f, 0.075f, 0.15f], 0.15);
+
+        Assert.Equal(550.6e6, extent, 0.1e6);
     }
 
     [Fact]
@@ -62,7 +96,7 @@ public sealed class TotalsUncertaintyTests
         TotalsRegion region = TotalsRegion.Hemisphere(grid, SmallGrid.AllOcean(grid));
         float[] nothing = Enumerable.Repeat(float.NaN, 9).ToArray();
 
-        (double extent, double area) = new TotalsUncertainty(new ErrorCorrelation(grid, Length, 50_000.0))
+        (double extent, double area) = new TotalsUncertainty(new ErrorCorrelation(grid, Length, 50_000.0, 50_000.0))
             .StandardErrorsSquareMeters(region, nothing, nothing, 0.15);
 
         Assert.Equal(0.0, extent);
@@ -88,7 +122,7 @@ public sealed class TotalsUncertaintyTests
         for (int draw = 0; draw < draws; draw++)
         {
             double[] error = Correlated(grid, kernel, random);
-            double[] squares = far is null ? [] : Squares(grid, random);
+            double[] squares = Squares(grid, random);
             double extent = 0.0;
             double area = 0.0;
             for (int cell = 0; cell < total.Length; cell++)
@@ -96,7 +130,8 @@ public sealed class TotalsUncertaintyTests
                 double alike = far?.Invoke(cell) ?? cellError;
                 double value = total[cell] + (alike * error[cell])
                     + (far is null ? 0.0 : Math.Sqrt((cellError * cellError) - (alike * alike)) * squares[cell]);
-                extent += value >= 0.15 ? cellArea : 0.0;
+                double counted = total[cell] > 0f ? value : cellError * squares[cell];
+                extent += counted >= 0.15 ? cellArea : 0.0;
                 area += total[cell] >= 0.15f ? value * cellArea : 0.0;
             }
 

@@ -40,6 +40,8 @@ internal static class RunFileLoader
         double? landLimit = layered.Number("land", "limit_fraction", 0.01, 1.0, string.Empty);
         double? errorLength = layered.Number("standard_error", "correlation_length_km", 1.0, 3_000.0, "km");
         double? footprint = layered.Number("standard_error", "footprint_km", 1.0, 500.0, "km");
+        double? missedIce = layered.Number("standard_error", "missed_ice_km", 1.0, 1_000.0, "km");
+        double? edge = layered.Number("standard_error", "edge_factor", 0.0, 10.0, string.Empty);
         double? smearing = layered.Number("standard_error", "smearing_factor", 0.0, 1.0, string.Empty);
         double? curvature = layered.Number("standard_error", "curvature_factor", 0.0, 10.0, string.Empty);
         int? neighbours = layered.WholeNumber("filling", "neighbours", 0, NeighbourFilling.MostNeighbours);
@@ -84,7 +86,7 @@ internal static class RunFileLoader
             FillMissingDays = overDays.MissingDays,
             LeastRimShare = rimShare!.Value,
             LandLimitFraction = landLimit!.Value,
-            ErrorLengths = new(errorLength!.Value * 1_000.0, footprint!.Value * 1_000.0),
+            ErrorLengths = new(errorLength!.Value * 1_000.0, footprint!.Value * 1_000.0, missedIce!.Value * 1_000.0, edge!.Value),
             Smearing = new(smearing!.Value, curvature!.Value),
             Overlap = overlap!,
             Season = season,

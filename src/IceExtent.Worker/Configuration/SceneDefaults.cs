@@ -35,6 +35,8 @@ internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction
         double? land = layered.Number("land", "limit_fraction", 0.01, 1.0, string.Empty);
         double? length = layered.Number("standard_error", "correlation_length_km", 1.0, 3_000.0, "km");
         double? footprint = layered.Number("standard_error", "footprint_km", 1.0, 500.0, "km");
+        double? missedIce = layered.Number("standard_error", "missed_ice_km", 1.0, 1_000.0, "km");
+        double? edge = layered.Number("standard_error", "edge_factor", 0.0, 10.0, string.Empty);
         double? smearing = layered.Number("standard_error", "smearing_factor", 0.0, 1.0, string.Empty);
         double? curvature = layered.Number("standard_error", "curvature_factor", 0.0, 10.0, string.Empty);
         CoastSettings? correction = CoastLoader.Load(coastal, grid, folder, faults);
@@ -44,7 +46,7 @@ internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction
         layered.RefuseUnknown();
         own.RefuseUnknown();
         return faults.Count == 0
-            ? new(new TotalsRules(ice!.Value, pack!.Value), land!.Value, new(length!.Value * 1_000.0, footprint!.Value * 1_000.0), new(smearing!.Value, curvature!.Value), correction!, tiePoints!, weather!, season!)
+            ? new(new TotalsRules(ice!.Value, pack!.Value), land!.Value, new(length!.Value * 1_000.0, footprint!.Value * 1_000.0, missedIce!.Value * 1_000.0, edge!.Value), new(smearing!.Value, curvature!.Value), correction!, tiePoints!, weather!, season!)
             : throw new ConfigurationException(faults);
     }
 }

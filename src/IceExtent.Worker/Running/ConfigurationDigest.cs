@@ -27,7 +27,7 @@ internal static class ConfigurationDigest
         yield return settings.Grid.Name;
         yield return settings.Notice ?? string.Empty;
         yield return FormattableString.Invariant(
-            $"{settings.Rules.IceFraction:R} {settings.Rules.PackFraction:R} {settings.LandLimitFraction:R} {settings.ErrorLengths.FarMeters:R} {settings.ErrorLengths.FootprintMeters:R} {settings.Smearing.Range:R} {settings.Smearing.Curvature:R}");
+            $"{settings.Rules.IceFraction:R} {settings.Rules.PackFraction:R} {settings.LandLimitFraction:R} {settings.ErrorLengths.FarMeters:R} {settings.ErrorLengths.FootprintMeters:R} {settings.ErrorLengths.MissedIceMeters:R} {settings.ErrorLengths.EdgeFactor:R} {settings.Smearing.Range:R} {settings.Smearing.Curvature:R}");
         yield return FormattableString.Invariant($"{settings.LeastNeighbours} {settings.Rules.PolarGap} {settings.LeastRimShare:R}");
         yield return settings.DayFilling is { } rules ? FormattableString.Invariant($"{rules} {settings.FillMissingDays}") : string.Empty;
         yield return CoastText(settings.Coast);

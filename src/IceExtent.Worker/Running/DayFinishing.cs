@@ -9,6 +9,7 @@ internal sealed class DayFinishing(DayPreparation preparation, GridArchive? grid
 {
     private readonly Dictionary<PolarGapSystem, PolarGapFilling> gapFillings = [];
     private readonly TotalsUncertainty uncertainty = new(preparation.Correlation);
+    private readonly EdgeShift edge = new(preparation.Settings.Grid, preparation.Settings.ErrorLengths.FootprintMeters);
     private readonly SourceDays? sourceDays = preparation.Days is null ? null : new(preparation.Settings.Grid.CellCount);
 
     /// <summary>Fills one day of one method, and takes away what was filled where the month has no ice.</summary>
@@ -37,6 +38,7 @@ internal sealed class DayFinishing(DayPreparation preparation, GridArchive? grid
     {
         TiePointState tiePoints = preparation.Settings.TiePoints.Moves(retrieval.Method.Name) ? day.TiePoints : TiePointState.Fixed;
         grids?.Write(day, retrieval, tiePoints, planes, sourceDays);
+        edge.Smear(planes.Total, planes.Unscreened, preparation.Settings.Rules.IceFraction);
         DailyRow[] rows = [.. preparation.Regions.Select(region => Row(day, tiePoints, region, retrieval.SurfaceScatter, planes))];
         return new(retrieval.Method.Name, counts, filled, rows, IsEmptied(rows, planes));
     }
@@ -70,8 +72,9 @@ internal sealed class DayFinishing(DayPreparation preparation, GridArchive? grid
         TotalsRules rules = preparation.Settings.Rules;
         DailyTotals totals = DailyTotals.Sum(region, planes.Total, planes.Conditions, rules);
         bool known = totals.Observed > 0.0 || totals.Filled > 0.0;
+        double shift = preparation.Settings.ErrorLengths.EdgeFactor * edge.ExtentSquareMeters(region);
         (double extentError, double areaError) = known
-            ? uncertainty.StandardErrorsSquareMeters(region, planes.Total, planes.StandardError, rules.IceFraction, scatter)
+            ? uncertainty.StandardErrorsSquareMeters(region, planes.Total, planes.StandardError, rules.IceFraction, scatter, shift)
             : default;
         return new()
         {

@@ -16,7 +16,7 @@ internal sealed class DayPreparation
     {
         Settings = settings;
         Regions = [TotalsRegion.Hemisphere(settings.Grid, settings.Ocean), .. settings.Regions.Regions.Select(region => TotalsRegion.Part(settings.Grid, region))];
-        Correlation = new(settings.Grid, settings.ErrorLengths.FarMeters, settings.ErrorLengths.FootprintMeters);
+        Correlation = new(settings.Grid, settings.ErrorLengths.FarMeters, settings.ErrorLengths.FootprintMeters, settings.ErrorLengths.MissedIceMeters);
         Neighbours = settings.LeastNeighbours > 0 ? new(settings.Grid, settings.LeastNeighbours) : null;
         Days = settings.DayFilling is { } rules ? new(rules) : null;
         ICoastStep? coast = settings.Coast.InConcentrations ? ConcentrationStep() : null;

@@ -21,6 +21,7 @@ internal sealed class SceneScore
     private readonly SourceRetrieval source;
     private readonly TotalsRegion region;
     private readonly ErrorCorrelation correlation;
+    private readonly ErrorLengths lengths;
 
     /// <summary>Prepares the methods.</summary>
     /// <param name="scene">The scene.</param>
@@ -38,7 +39,8 @@ internal sealed class SceneScore
             : null;
         source = new(choices, scene.Sensor, [.. scene.Channels], mask, step);
         region = TotalsRegion.Hemisphere(scene.Grid, ocean);
-        correlation = new(scene.Grid, defaults.ErrorLengths.FarMeters, defaults.ErrorLengths.FootprintMeters);
+        lengths = defaults.ErrorLengths;
+        correlation = new(scene.Grid, lengths.FarMeters, lengths.FootprintMeters, lengths.MissedIceMeters);
     }
 
     /// <summary>The ocean cells that are summed.</summary>
@@ -54,7 +56,7 @@ internal sealed class SceneScore
     {
         DateOnly[] seen = [.. days.Where(day => !scene.IsMissing(day))];
         ScoredDay[] scored = new ScoredDay[seen.Length];
-        using ThreadLocal<Bench> benches = new(() => new Bench(scene, source, correlation));
+        using ThreadLocal<Bench> benches = new(() => new Bench(scene, source, correlation, lengths));
         ParallelOptions options = new() { MaxDegreeOfParallelism = workers, CancellationToken = cancellation };
         Dictionary<DateOnly, DaySamples> samples = Samples(seen, benches, options);
         Parallel.For(0, seen.Length, options, index => scored[index] = Score(seen[index], Tune(seen[index], samples), benches.Value!, look));
@@ -101,16 +103,23 @@ internal sealed class SceneScore
             retrievals[method].Retrieve(bench.Observed, bench.Conditions, bench.Concentration, choices.Weather.MaskOf(day));
             source.Coast?.WidenErrors(bench.Concentration);
             look?.Invoke(day, method, bench.Concentration);
+            bench.Edge.Smear(bench.Concentration.Total, bench.Concentration.Unscreened, rules.IceFraction);
             methods[method] = (
                 DayScore.Of(scene.Grid, region, bench.Concentration.Total, bench.Concentration.StandardError, bench.Truth.Concentration, rules, bench.Melting),
-                bench.Uncertainty.StandardErrorsSquareMeters(region, bench.Concentration.Total, bench.Concentration.StandardError, rules.IceFraction, retrievals[method].SurfaceScatter).Extent);
+                bench.Uncertainty.StandardErrorsSquareMeters(
+                    region,
+                    bench.Concentration.Total,
+                    bench.Concentration.StandardError,
+                    rules.IceFraction,
+                    retrievals[method].SurfaceScatter,
+                    lengths.EdgeFactor * bench.Edge.ExtentSquareMeters(region)).Extent);
         }
 
         return new(day, methods);
     }
 
     // What one thread needs for a day.
-    private sealed class Bench(Scene scene, SourceRetrieval source, ErrorCorrelation correlation)
+    private sealed class Bench(Scene scene, SourceRetrieval source, ErrorCorrelation correlation, ErrorLengths lengths)
     {
         private readonly Lazy<SurfaceSampling> sampling = new(source.MakeSampling);
 
@@ -127,6 +136,8 @@ internal sealed class SceneScore
         public ConcentrationPlanes Concentration { get; } = new(scene.Grid.CellCount);
 
         public TotalsUncertainty Uncertainty { get; } = new(correlation);
+
+        public EdgeShift Edge { get; } = new(scene.Grid, lengths.FootprintMeters);
 
         public void Observe(DateOnly day)
         {
