@@ -6,6 +6,7 @@ namespace IceExtent.Statistics.Scoring;
 public sealed class SeasonDateScore
 {
     private readonly List<int> errors = [];
+    private double spreads;
     private int held;
     private int limited;
     private int sameState;
@@ -22,6 +23,9 @@ public sealed class SeasonDateScore
 
     /// <summary>Share of cells with a true date and limits, found or hidden, whose limits hold the true day.</summary>
     public double HeldShare => limited == 0 ? double.NaN : (double)held / limited;
+
+    /// <summary>Mean half width of those limits.</summary>
+    public double MeanSpreadDays => limited == 0 ? double.NaN : spreads / limited;
 
     /// <summary>Share of cells with ice in either that agree whether there is a date.</summary>
     public double SameStateShare => cells == 0 ? double.NaN : (double)sameState / cells;
@@ -49,6 +53,7 @@ public sealed class SeasonDateScore
         if (found.Earliest is { } earliest && found.Latest is { } latest)
         {
             limited++;
+            spreads += 0.5 * (latest - earliest);
             held += earliest <= day && day <= latest ? 1 : 0;
         }
     }

@@ -2,6 +2,7 @@ namespace IceExtent.Statistics.Seasons;
 
 /// <summary>Brings the dates of a region's cells to one date each: medians weighted by area.</summary>
 /// <remarks>
+/// Where cells that the ice leaves make up enough of the area with ice, they alone count, so that all dates are of the same water.
 /// The limits of a median are the medians of its cells' limits: as if all cells erred alike, so rather too wide. Where too few cells have
 /// a date, the commonest reason of the others, by area, stands for the region's. Own choice.
 /// </remarks>
@@ -42,6 +43,10 @@ public sealed class RegionMedians(CellSeasons cells, double leastDatedShare)
             return (WithoutIce, 0.0, 0.0, 0.0);
         }
 
+        List<(int Index, double Area)> left = icy.FindAll(cell => cells.Dates[cell.Index].Ice.Retreat.State != SeasonDateState.NeverReached);
+        double leftArea = left.Sum(cell => cell.Area);
+        (double icyArea, double meanKnown, double meanOpen) = (area, known / area, open / area);
+        (icy, area) = leftArea >= leastDatedShare * area ? (left, leftArea) : (icy, area);
         IceDates ice = new(
             Median(icy, area, SeasonEvent.Opening)!.Value,
             Median(icy, area, SeasonEvent.Retreat)!.Value,
@@ -49,7 +54,7 @@ public sealed class RegionMedians(CellSeasons cells, double leastDatedShare)
             Median(icy, area, SeasonEvent.Closing)!.Value,
             0,
             0);
-        return (new(ice, Median(icy, area, SeasonEvent.MeltOnset), Median(icy, area, SeasonEvent.FreezeUp)), area, known / area, open / area);
+        return (new(ice, Median(icy, area, SeasonEvent.MeltOnset), Median(icy, area, SeasonEvent.FreezeUp)), icyArea, meanKnown, meanOpen);
     }
 
     private static YearDates WithoutIce
@@ -78,7 +83,7 @@ public sealed class RegionMedians(CellSeasons cells, double leastDatedShare)
 
         if (dated < leastDatedShare * area)
         {
-            return Reason(icy, which, reasons);
+            return Reason(icy, which, reasons, (leastDatedShare * area) - dated);
         }
 
         int day = MedianOf(icy, which, date => date.Day);
@@ -86,9 +91,18 @@ public sealed class RegionMedians(CellSeasons cells, double leastDatedShare)
             day, Math.Min(day, MedianOf(icy, which, date => date.Day is null ? null : date.Earliest)), Math.Max(day, MedianOf(icy, which, date => date.Day is null ? null : date.Latest)));
     }
 
-    private SeasonDate Reason(List<(int Index, double Area)> icy, SeasonEvent which, ReadOnlySpan<double> reasons)
+    // A reason that would pass goes first where its cells alone keep the region from a date.
+    private SeasonDate Reason(List<(int Index, double Area)> icy, SeasonEvent which, ReadOnlySpan<double> reasons, double lacking)
     {
         int commonest = 1;
+        foreach (SeasonDateState passing in (SeasonDateState[])[SeasonDateState.NotYetReached, SeasonDateState.BeforeRecord])
+        {
+            if (reasons[(int)passing] >= lacking)
+            {
+                return SeasonDate.Without(passing);
+            }
+        }
+
         for (int state = 1; state < reasons.Length; state++) // 0 is a date.
         {
             commonest = reasons[state] > reasons[commonest] ? state : commonest;

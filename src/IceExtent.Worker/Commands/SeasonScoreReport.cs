@@ -17,19 +17,19 @@ internal static class SeasonScoreReport
                 score.Method,
                 Cells = score.Cells.ToDictionary(
                     pair => SeasonEvents.NameOf(pair.Key),
-                    pair => new { pair.Value.Dated, pair.Value.ExactShare, Within3Days = pair.Value.Within(3), pair.Value.BiasDays, pair.Value.HeldShare, pair.Value.SameStateShare }),
+                    pair => new { pair.Value.Dated, pair.Value.ExactShare, Within3Days = pair.Value.Within(3), pair.Value.BiasDays, pair.Value.HeldShare, pair.Value.MeanSpreadDays, pair.Value.SameStateShare }),
                 Regions = score.Regions.Select(error => new { error.Region, error.Year, Date = SeasonEvents.NameOf(error.Which), error.Days }),
             })));
             return;
         }
 
         console.Print("Cells and ice years: dates found less true dates, how often the limits hold the true day, and how often both agree that there is a date");
-        console.Print("method         date         dated   exact  3 days    bias  in limits  same state");
+        console.Print("method         date         dated   exact  3 days    bias  in limits  mean ±  same state");
         foreach ((ScoredSeasons score, SeasonEvent which, SeasonDateScore cells) in scores.SelectMany(score => score.Cells.Select(pair => (score, pair.Key, pair.Value))))
         {
             console.Print(string.Create(
                 CultureInfo.InvariantCulture,
-                $"{score.Method,-14} {SeasonEvents.NameOf(which),-9} {cells.Dated,8} {cells.ExactShare,7:P0} {cells.Within(3),7:P0} {cells.BiasDays,7:F1} {cells.HeldShare,10:P0} {cells.SameStateShare,11:P0}"));
+                $"{score.Method,-14} {SeasonEvents.NameOf(which),-9} {cells.Dated,8} {cells.ExactShare,7:P0} {cells.Within(3),7:P0} {cells.BiasDays,7:F1} {cells.HeldShare,10:P0} {cells.MeanSpreadDays,7:F1} {cells.SameStateShare,11:P0}"));
         }
 
         console.Print(string.Empty);

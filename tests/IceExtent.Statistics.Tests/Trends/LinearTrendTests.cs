@@ -59,7 +59,7 @@ public sealed class LinearTrendTests
     public void Fit_YearsNearlyOne_SaysSo()
     {
         int[] years = [.. Enumerable.Range(1, 12)];
-        double[] wave = Array.ConvertAll(years, year => Math.Sin(year / 2.2));
+        double[] wave = Array.ConvertAll(years, year => Math.Sin(2.0 * Math.PI * year / 11.0)); // One slow wave: neighbours are alike.
 
         Assert.Contains("alike", Assert.IsType<LinearTrend.Untestable>(LinearTrend.Fit(years, wave, leastYears: 10)).Reason, StringComparison.Ordinal);
     }
