@@ -48,7 +48,7 @@ public sealed class PlaceTotalsTests
     {
         float[] total = [0.05f, 0.4f, 0f, 0.7f, 0.9f, 0f];
         float[] errors = Enumerable.Repeat(0.08f, 6).ToArray();
-        TotalsUncertainty uncertainty = new(new ErrorCorrelation(Grid, 1e9, 25_000.0));
+        TotalsUncertainty uncertainty = new(new ErrorCorrelation(Grid, 1e9, 25_000.0, 25_000.0));
         TotalsRegion single = TotalsRegion.Around(Grid, new("b", "B", [4], [0.0]));
 
         double one = uncertainty.AreaStandardErrorSquareMeters(single, total, errors);
@@ -64,7 +64,7 @@ public sealed class PlaceTotalsTests
     {
         float[] total = [1f, 1f, 1f, 1f, 1f, 1f];
         float[] errors = Enumerable.Repeat(0.05f, 6).ToArray();
-        TotalsUncertainty uncertainty = new(new ErrorCorrelation(Grid, 1e9, 25_000.0));
+        TotalsUncertainty uncertainty = new(new ErrorCorrelation(Grid, 1e9, 25_000.0, 25_000.0));
 
         double four = uncertainty.AreaStandardErrorSquareMeters(Place, total, errors, new RetrievalScatter(0.03, 0.03));
 
