@@ -73,20 +73,35 @@ public sealed class TotalsRegion
     /// <exception cref="ArgumentException">A cell is not of the grid.</exception>
     public static TotalsRegion Part(Grid grid, GridRegion region)
     {
-        ArgumentNullException.ThrowIfNull(grid);
         ArgumentNullException.ThrowIfNull(region);
-        if (region.Cells.Count > 0 && (region.Cells[0] < 0 || region.Cells[^1] >= grid.CellCount))
+        return Of(region.Name, grid, region.Cells, region.Shares);
+    }
+
+    /// <summary>The surroundings of a place: its cells, each with its whole area on the ellipsoid.</summary>
+    /// <param name="grid">The grid.</param>
+    /// <param name="place">The ocean cells in reach of the place, found on the same grid.</param>
+    /// <exception cref="ArgumentException">A cell is not of the grid.</exception>
+    public static TotalsRegion Around(Grid grid, GridPlace place)
+    {
+        ArgumentNullException.ThrowIfNull(place);
+        return Of(place.Name, grid, place.Cells, null);
+    }
+
+    private static TotalsRegion Of(string name, Grid grid, IReadOnlyList<int> cells, IReadOnlyList<double>? shares)
+    {
+        ArgumentNullException.ThrowIfNull(grid);
+        if (cells.Count > 0 && (cells[0] < 0 || cells[^1] >= grid.CellCount))
         {
-            throw new ArgumentException($"The region {region.Name} has cells outside the grid {grid.Name}.", nameof(region));
+            throw new ArgumentException($"{name} has cells outside the grid {grid.Name}.", nameof(cells));
         }
 
         ReadOnlySpan<double> gridAreas = grid.CellAreasSquareMeters;
-        double[] areas = new double[region.Cells.Count];
+        double[] areas = new double[cells.Count];
         for (int index = 0; index < areas.Length; index++)
         {
-            areas[index] = gridAreas[region.Cells[index]] * region.Shares[index];
+            areas[index] = gridAreas[cells[index]] * (shares?[index] ?? 1.0);
         }
 
-        return new(region.Name, grid, [.. region.Cells], areas);
+        return new(name, grid, [.. cells], areas);
     }
 }

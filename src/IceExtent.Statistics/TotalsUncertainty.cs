@@ -82,6 +82,21 @@ public sealed class TotalsUncertainty
         return (Math.Sqrt(extentVariance), Math.Sqrt(areaVariance));
     }
 
+    /// <summary>The standard error of concentration times area over all cells of a region that have one, however little ice they hold.</summary>
+    /// <inheritdoc cref="StandardErrorsSquareMeters" path="/param"/>
+    /// <returns>In m². Over the area of these cells it is the standard error of their mean.</returns>
+    public double AreaStandardErrorSquareMeters(
+        TotalsRegion region, ReadOnlySpan<float> totalFraction, ReadOnlySpan<float> standardErrorFraction, RetrievalScatter? scatter = null)
+    {
+        const double AnyIce = double.NegativeInfinity; // Every cell counts, and none is near the limit.
+        ArgumentNullException.ThrowIfNull(region);
+        Gather(region, totalFraction, standardErrorFraction, AnyIce, scatter);
+        BlockWindow window = correlation.WindowOf(region);
+        double variance = local.TakeVariance() + correlation.PairSum(areaWeights, 1, scratch, window);
+        Forget(window);
+        return Math.Sqrt(variance);
+    }
+
     // Between two calls all weights are zero.
     private void Forget(in BlockWindow window)
     {

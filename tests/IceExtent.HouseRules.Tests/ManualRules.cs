@@ -26,7 +26,7 @@ public sealed partial class ManualRules
     [GeneratedRegex(@"(?:scope|table|layered)\??\.(?:Text|Texts|Name|Number|Numbers|WholeNumber|Flag|Date|Table|Tables)\((?:""[a-z_]+"", )?""([a-z0-9_]+)""")]
     private static partial Regex KeyOfAFile { get; }
 
-    [GeneratedRegex(@"TableColumn\.\w+<DailyRow>\(""([a-z0-9_]+)""")]
+    [GeneratedRegex(@"TableColumn\.\w+<(?:DailyRow|DailyPlaceRow|Row)>\(""([a-z0-9_]+)""")]
     private static partial Regex Column { get; }
 
     [GeneratedRegex(@"\(ushort\)CellConditions\.\w+, ""([a-z0-9_]+)""")]

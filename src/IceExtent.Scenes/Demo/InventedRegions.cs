@@ -6,7 +6,21 @@ namespace IceExtent.Scenes.Demo;
 /// <param name="Key">The name in files, such as <c>drosmer-strait</c>.</param>
 /// <param name="Name">The name for people.</param>
 /// <param name="Ring">The outline on the map of <see cref="InventedSea.Grid"/>, in m; the last corner is not repeated.</param>
-public sealed record InventedRegion(string Key, string Name, IReadOnlyList<MapPosition> Ring);
+public sealed record InventedRegion(string Key, string Name, IReadOnlyList<MapPosition> Ring)
+{
+    private const double EdgeMeters = 2_000_000.0;
+    private const double BeyondMeters = 2_060_000.0;
+
+    /// <summary>The outline in longitude and latitude, with so many positions that lines straight there follow it; the first is not repeated.</summary>
+    /// <remarks>Where it runs along the edge of the grid it is drawn a little outside, so that no cell there is cut.</remarks>
+    public IReadOnlyList<GeoPosition> Outline()
+    {
+        MapPosition[] corners = [.. Ring.Append(Ring[0]).Select(corner => new MapPosition(Beyond(corner.XMeters), Beyond(corner.YMeters)))];
+        return [.. InventedLines.Along(corners)];
+    }
+
+    private static double Beyond(double meters) => Math.Abs(meters) >= EdgeMeters ? Math.CopySign(BeyondMeters, meters) : meters;
+}
 
 /// <summary>The parts of the invented sea. Together they cover it, and no two overlap.</summary>
 public static class InventedRegions

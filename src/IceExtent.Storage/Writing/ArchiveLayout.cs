@@ -55,6 +55,13 @@ public sealed partial class ArchiveLayout
     public string TiePointFile(Hemisphere hemisphere, int year) => Path.Join(
         Path.Join(Root, "tie_points"), $"hemisphere={NameOf(hemisphere)}", YearFolder(year), "tie_points.parquet");
 
+    /// <summary>The <c>daily_places</c> table of one year.</summary>
+    /// <exception cref="FaultException">IE3110: the method's name cannot be used.</exception>
+    public string DailyPlaceFile(string method, Hemisphere hemisphere, int year) => TableFile("daily_places", method, hemisphere, year);
+
+    /// <summary>The cells of places; they belong to no method and no year.</summary>
+    public string PlaceCellFile(Hemisphere hemisphere) => CellFile("place_cells", hemisphere);
+
     /// <summary>The cells of regions; they belong to no method and no year.</summary>
     public string RegionCellFile(Hemisphere hemisphere) => CellFile("region_cells", hemisphere);
 

@@ -9,8 +9,6 @@ namespace IceExtent.Storage.Writing;
 public static class DailyTable
 {
     private const string SquareKilometers = "km2";
-    private const string FinalName = "final";
-    private const string ProvisionalName = "provisional";
 
     /// <summary>The columns, in the order they are written.</summary>
     public static IReadOnlyList<TableColumn<DailyRow>> Columns { get; } =
@@ -28,7 +26,7 @@ public static class DailyTable
         TableColumn.Number<DailyRow>("filled_share", TableColumn.NoUnit, row => row.FilledShare),
         TableColumn.Number<DailyRow>("polar_gap_km2", SquareKilometers, row => row.PolarGapSquareKilometers),
         TableColumn.Text<DailyRow>("sensor", row => row.Sensor),
-        TableColumn.Text<DailyRow>("status", row => NameOf(row.Status)),
+        TableColumn.Text<DailyRow>("status", row => DayStatuses.NameOf(row.Status)),
         TableColumn.Text<DailyRow>("tie_points", row => TiePointStates.NameOf(row.TiePoints)),
     ];
 
@@ -39,19 +37,8 @@ public static class DailyTable
     /// <exception cref="ArgumentException">A day and region comes twice, or a number is not finite.</exception>
     /// <exception cref="FaultException">IE3101 to IE3107: the file cannot be written.</exception>
     public static void Write(
-        string path, IEnumerable<DailyRow> rows, IReadOnlyList<KeyValuePair<string, string>> metadata)
-    {
-        List<DailyRow> ordered = [.. rows.OrderBy(row => row.Date).ThenBy(row => row.Region, StringComparer.Ordinal)];
-        for (int row = 1; row < ordered.Count; row++)
-        {
-            if ((ordered[row].Date, ordered[row].Region) == (ordered[row - 1].Date, ordered[row - 1].Region))
-            {
-                throw new ArgumentException($"The region {ordered[row].Region} has two rows on {ordered[row].Date:O}.", nameof(rows));
-            }
-        }
-
-        TableFile.Write(path, Columns, ordered, metadata);
-    }
+        string path, IEnumerable<DailyRow> rows, IReadOnlyList<KeyValuePair<string, string>> metadata) =>
+        TableFile.Write(path, Columns, DatedRows.InOrder(rows, row => row.Date, row => row.Region), metadata);
 
     /// <summary>Loads what writing needs, so that the first table of a run does not wait a twentieth of a second for it.</summary>
     public static void Rehearse() => TableFile.Rehearse(
@@ -113,7 +100,7 @@ public static class DailyTable
             FilledShare = filled[row],
             PolarGapSquareKilometers = polarGap[row],
             Sensor = sensor[row],
-            Status = StatusOf(path, status[row]),
+            Status = DayStatuses.Of(path, status[row]),
             TiePoints = TiePointsOf(path, tiePoints[row]),
         };
         return new([.. Enumerable.Range(0, table.Rows).Select(RowAt)], table.Metadata);
@@ -122,17 +109,6 @@ public static class DailyTable
     private static TiePointState TiePointsOf(string path, string name) => TiePointStates.Parse(name) ?? throw new FaultException(new(
         "IE3122", path, $"the tie points {name}", string.Join(", ", Enum.GetValues<TiePointState>().Select(TiePointStates.NameOf)),
         "The file is from another program: move it away and run that year anew."));
-
-    private static string NameOf(DayStatus status) => status == DayStatus.Final ? FinalName : ProvisionalName;
-
-    private static DayStatus StatusOf(string path, string name) => name switch
-    {
-        FinalName => DayStatus.Final,
-        ProvisionalName => DayStatus.Provisional,
-        _ => throw new FaultException(new(
-            "IE3122", path, $"the status {name}", $"{FinalName} or {ProvisionalName}",
-            "The file is from another program: move it away and run that year anew.")),
-    };
 }
 
 /// <summary>A <c>daily</c> table as it was read.</summary>

@@ -47,46 +47,21 @@ public static class RegionCellTable
     public static IReadOnlyList<GridRegion>? Read(string path, Grid grid, string digest)
     {
         ArgumentNullException.ThrowIfNull(grid);
-        if (!File.Exists(path))
+        return CellTable.Read<IReadOnlyList<GridRegion>>(path, DigestKey, digest, table =>
         {
-            return null;
-        }
-
-        try
-        {
-            StoredTable table = TableFile.Read(path);
-            return table.Metadata.GetValueOrDefault(DigestKey) == digest ? Regions(table, grid) : null;
-        }
-        catch (FaultException)
-        {
-            return null; // It can be made again.
-        }
-    }
-
-    private static List<GridRegion> Regions(StoredTable table, Grid grid)
-    {
-        IReadOnlyList<string> name = table.Column<string>("region");
-        IReadOnlyList<string> title = table.Column<string>("title");
-        IReadOnlyList<string> set = table.Column<string>("region_set");
-        IReadOnlyList<int> row = table.Column<int>("row");
-        IReadOnlyList<int> column = table.Column<int>("column");
-        IReadOnlyList<double> share = table.Column<double>("share");
-        List<GridRegion> regions = [];
-        for (int first = 0, next; first < table.Rows; first = next)
-        {
-            next = first;
-            List<int> cells = [];
-            List<double> shares = [];
-            for (; next < table.Rows && name[next] == name[first]; next++)
-            {
-                cells.Add((row[next] * grid.Columns) + column[next]);
-                shares.Add(share[next]);
-            }
-
-            regions.Add(new(name[first], title[first], set[first], cells, shares));
-        }
-
-        return regions;
+            IReadOnlyList<string> name = table.Column<string>("region");
+            IReadOnlyList<string> title = table.Column<string>("title");
+            IReadOnlyList<string> set = table.Column<string>("region_set");
+            IReadOnlyList<int> row = table.Column<int>("row");
+            IReadOnlyList<int> column = table.Column<int>("column");
+            IReadOnlyList<double> share = table.Column<double>("share");
+            return [.. CellTable.Groups(name).Select(group => new GridRegion(
+                name[group.First],
+                title[group.First],
+                set[group.First],
+                [.. Enumerable.Range(group.First, group.End - group.First).Select(at => (row[at] * grid.Columns) + column[at])],
+                [.. Enumerable.Range(group.First, group.End - group.First).Select(at => share[at])]))];
+        });
     }
 
     private readonly record struct Row(GridRegion Region, int Cell, double Share);

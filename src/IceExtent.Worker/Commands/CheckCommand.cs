@@ -63,6 +63,7 @@ internal static class CheckCommand
             {
                 DaysReadable = readable,
                 Regions = CellReport.RegionsOf(settings),
+                Places = CellReport.PlacesOf(settings),
                 Faults = faults.Select(fault => new { fault.Code, Text = fault.ToString() }),
             }));
             return;

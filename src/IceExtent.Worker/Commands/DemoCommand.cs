@@ -46,6 +46,7 @@ internal static class DemoCommand
         console.Print(string.Empty);
         console.Print($"Run it again: {CommandLine.ProgramPath} run {runFile}");
         console.Print($"Series:       {Path.Combine(folder, "archive", "daily")}");
+        console.Print($"Places:       {Path.Combine(folder, "archive", "daily_places")}");
         console.Print($"Grids:        {Path.Combine(folder, "archive", "grids")}");
         return exitCode;
     }
@@ -63,6 +64,7 @@ internal static class DemoCommand
     private static int Invent(string folder, string runFile, int workers, CancellationToken cancellation)
     {
         CopyDescriptions(folder);
+        DemoAreas.Write(folder, Notice);
         GridFile.WriteUndated(
             Path.Combine(folder, "land", InventedSea.Grid.Name + ".nc"),
             InventedSea.Grid,
@@ -72,7 +74,7 @@ internal static class DemoCommand
         SceneParameters parameters = SceneLoader.Load(Path.Combine(ConfigFolder.BesideProgram.Scenes, "demo.toml"), faults)
             ?? throw new ConfigurationException(faults);
         Scene scene = new(parameters, InventedSea.Grid, InventedSea.Land, InventedRadiometer.Sensor, Seed);
-        PublishedFile.WriteText(runFile, SceneCommand.RunFileText($"grids/{InventedSea.Grid.Name}.toml", $"sensors/{InventedRadiometer.Sensor.Name}.toml", scene.Channels, Notice)); // First, so that a stopped demonstration is known as one.
+        PublishedFile.WriteText(runFile, SceneCommand.RunFileText($"grids/{InventedSea.Grid.Name}.toml", $"sensors/{InventedRadiometer.Sensor.Name}.toml", scene.Channels, Notice, DemoAreas.RunFileLines)); // First, so that a stopped demonstration is known as one.
         int days = new SceneFiles(scene, folder, Notice).Write(FirstDay, LastDay, withTruth: false, workers, cancellation);
         return days;
     }

@@ -96,13 +96,13 @@ internal static class SceneCommand
     };
 
     /// <summary>The run file for a folder that <see cref="SceneFiles"/> filled.</summary>
-    public static string RunFileText(string grid, string sensor, IEnumerable<Channel> channels, string notice) => string.Create(CultureInfo.InvariantCulture, $$"""
+    public static string RunFileText(string grid, string sensor, IEnumerable<Channel> channels, string notice, string more = "") => string.Create(CultureInfo.InvariantCulture, $$"""
         # {{notice}}
         output  = "archive"
         grid    = "{{grid}}"
         methods = ["nasa-team"]
         notice  = "{{notice}}"
-
+        {{more}}
         [[source]]
         sensor   = "{{sensor}}"
         files    = "{{SceneFiles.TemperatureFolder}}/*.nc"

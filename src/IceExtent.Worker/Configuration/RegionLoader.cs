@@ -41,14 +41,7 @@ internal sealed class RegionLoader
             drawn.AddRange(RegionFile.Read(path, scope.Faults));
         }
 
-        foreach (IGrouping<string, DrawnRegion> same in drawn.GroupBy(region => region.Outline.Name, StringComparer.Ordinal))
-        {
-            foreach (DrawnRegion second in same.Skip(1))
-            {
-                scope.Faults.Add(SecondOfAName(second, same.First()));
-            }
-        }
-
+        RefuseSecondNames(drawn.Select(region => (region.Outline.Name, region.Where)), "each name once over all sets of a run", scope.Faults);
         usable = scope.Faults.Count == before;
     }
 
@@ -82,6 +75,18 @@ internal sealed class RegionLoader
         return new(paths, regions, digest, Stored: false);
     }
 
+    /// <summary>Adds IE1504 for each name that was there before.</summary>
+    public static void RefuseSecondNames(IEnumerable<(string Name, string Where)> named, string allowed, ICollection<Fault> faults)
+    {
+        foreach (IGrouping<string, (string Name, string Where)> same in named.GroupBy(one => one.Name, StringComparer.Ordinal))
+        {
+            foreach ((string name, string where) in same.Skip(1))
+            {
+                faults.Add(new("IE1504", where, $"the name {name} a second time; the first is {same.First().Where}", allowed, "Rename one of the two."));
+            }
+        }
+    }
+
     private static string? Resolve(ConfigScope scope, ConfigFolder config, string written, ConfigPosition at, string runFolder)
     {
         if (Endings.Any(ending => written.EndsWith(ending, StringComparison.OrdinalIgnoreCase)))
@@ -98,9 +103,6 @@ internal sealed class RegionLoader
         scope.UnknownName("regions", at, written, [.. names, "a path that ends in .geojson"]);
         return null;
     }
-
-    private static Fault SecondOfAName(DrawnRegion second, DrawnRegion first) => new(
-        "IE1504", second.Where, $"the name {second.Outline.Name} a second time; the first is {first.Where}", "each name once over all sets of a run", "Rename one of the two.");
 
     private static Fault WithoutOcean(GridLand land, DrawnRegion region)
     {

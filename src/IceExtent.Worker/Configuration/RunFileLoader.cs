@@ -52,6 +52,7 @@ internal static class RunFileLoader
         WeatherSettings? weather = WeatherLoader.Load(layered, grid?.Grid, folder, faults);
         IceMaskRules? iceMask = WeatherLoader.IceMask(layered);
         OverlapSettings? overlap = OverlapLoader.Load(layered, rules);
+        PlaceLoader places = new(scope, layered, folder);
         layered.RefuseUnknown();
         SourceLoader sources = new(folder, config, methods, needsFootprints: coast?.InTemperatures == true, needsSamples: tiePoints?.NeedsSamples(methods) ?? false);
         List<RunSource?> loaded = [.. scope.Tables("source").Select(source => sources.Load(source, grid?.Grid))];
@@ -60,6 +61,7 @@ internal static class RunFileLoader
         bool[]? ocean = landLimit is { } limit ? land?.OceanBelow(limit) : null;
         GridLand? under = ocean is null || output is null ? null : new(grid!, ocean, landLimit!.Value, Path.GetFullPath(output, folder));
         RegionSettings laid = under is null ? RegionSettings.None : regions.LayOver(under, faults);
+        PlaceSettings found = under is null ? PlaceSettings.None : places.FindOn(under, faults);
         if (faults.Count > 0)
         {
             throw new ConfigurationException(faults);
@@ -70,8 +72,9 @@ internal static class RunFileLoader
             RunFile = path,
             Output = Path.GetFullPath(output!, folder),
             Grid = grid!.Grid,
-            ConfigPaths = [config.Defaults, grid.ConfigPath, grid.LandPath, .. coast!.MinimumPath is { } minimum ? [minimum] : Array.Empty<string>(), .. weather!.Paths, .. laid.Paths],
+            ConfigPaths = [config.Defaults, grid.ConfigPath, grid.LandPath, .. coast!.MinimumPath is { } minimum ? [minimum] : Array.Empty<string>(), .. weather!.Paths, .. laid.Paths, .. found.Paths],
             Regions = laid,
+            Places = found,
             Ocean = ocean!,
             Land = land!,
             Coast = coast,

@@ -36,6 +36,9 @@ internal sealed record RunSettings
     /// <summary>The parts of the ocean that get totals of their own.</summary>
     public required RegionSettings Regions { get; init; }
 
+    /// <summary>The harbors, points and routes that get series of their own.</summary>
+    public required PlaceSettings Places { get; init; }
+
     /// <summary>Whether each cell counts as ocean.</summary>
     public required bool[] Ocean { get; init; }
 

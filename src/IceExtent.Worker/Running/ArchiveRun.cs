@@ -48,22 +48,25 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         using ArchiveLock held = ArchiveLock.Take(settings.Output, started);
         PublishedFile.RemoveLeftovers(settings.Output);
         string digest = ConfigurationDigest.Of(settings);
-        DailySeries series = new(layout, settings.Grid.Hemisphere, settings.Methods, method => TableMetadata(method, digest));
+        DailySeries<DailyRow> series = new(DailySeries.Regions(layout, settings.Grid.Hemisphere), settings.Methods, method => TableMetadata(method, digest));
+        DailySeries<DailyPlaceRow> places = new(DailySeries.Places(layout, settings.Grid.Hemisphere), settings.Methods, method => TableMetadata(method, digest));
         TiePointArchive tiePoints = new(layout, settings.Grid.Hemisphere, TiePointMetadata(digest));
         Task<DayPreparation> preparing = Task.Run(() => new DayPreparation(settings), CancellationToken.None); // Needs no file, so it need not wait for them.
         RunPlan plan = RunPlanner.Plan(settings, options.From, options.To, cancellation);
         observer.Planned(plan);
-        series.CheckSameConfiguration(
-            plan.Days.Select(day => day.Date).Concat(plan.DaysToFill).Concat(plan.Gaps.Select(gap => gap.Date).OfType<DateOnly>()).Select(day => day.Year).Distinct(), digest);
+        int[] years = [.. plan.Days.Select(day => day.Date).Concat(plan.DaysToFill).Concat(plan.Gaps.Select(gap => gap.Date).OfType<DateOnly>()).Select(day => day.Year).Distinct()];
+        series.CheckSameConfiguration(years, digest);
+        places.CheckSameConfiguration(years, digest);
 
-        WriteCells();
+        new CellArchive(settings, layout).Update();
         gaps.AddRange(plan.Gaps);
         DateOnly[] lost = [.. plan.Gaps.Select(gap => gap.Date).OfType<DateOnly>().Except(plan.Days.Select(day => day.Date)).Except(plan.DaysToFill)];
         series.Remove(lost);
+        places.Remove(lost);
         tiePoints.Remove(lost);
         Array.ForEach(lost, day => RemoveGrids(day, settings.Methods));
         DayPreparation preparation = await preparing;
-        await ProcessAsync(plan, preparation, (series, tiePoints), GlobalAttributes(digest), observer, cancellation);
+        await ProcessAsync(plan, preparation, (series, places, tiePoints), GlobalAttributes(digest), observer, cancellation);
         if (settings.Season is { } season)
         {
             HashSet<DateOnly> touched = [.. lost, .. dayRecords.Select(day => day.Date)];
@@ -77,24 +80,10 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         return new(exitCode, plan, done, filled, gaps, series.DaysRemoved, recordPath);
     }
 
-    // After the archive is known to be of this configuration: its cells are then either these or missing.
-    private void WriteCells()
-    {
-        string path = layout.RegionCellFile(settings.Grid.Hemisphere);
-        if (settings.Regions.Regions.Count == 0)
-        {
-            PublishedFile.Delete(path);
-        }
-        else if (!settings.Regions.Stored)
-        {
-            RegionCellTable.Write(path, settings.Grid, settings.Regions.Regions, settings.Regions.Digest, CellMetadata);
-        }
-    }
-
     private async Task ProcessAsync(
         RunPlan plan,
         DayPreparation preparation,
-        (DailySeries Daily, TiePointArchive TiePoints) series,
+        (DailySeries<DailyRow> Daily, DailySeries<DailyPlaceRow> Places, TiePointArchive TiePoints) series,
         IReadOnlyList<KeyValuePair<string, string>> attributes,
         IRunObserver observer,
         CancellationToken cancellation)
@@ -120,11 +109,13 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         }
 
         series.Daily.Flush();
+        series.Places.Flush();
         series.TiePoints.Flush();
 
         void Receive(DayResult result)
         {
             series.Daily.Add(result);
+            series.Places.Add(result);
             series.TiePoints.Add(result);
             Remember(result, plan);
             observer.DayDone(result);
@@ -236,14 +227,6 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
 
         return metadata;
     }
-
-    // Nothing of what does not decide the cells.
-    private KeyValuePair<string, string>[] CellMetadata =>
-    [
-        new("grid", settings.Grid.Name),
-        new("program_version", ProgramVersion.Text),
-        new("notice", settings.Notice ?? "none"),
-    ];
 
     private KeyValuePair<string, string>[] TiePointMetadata(string digest) =>
     [

@@ -1,25 +1,20 @@
-using IceExtent.Grids;
-using IceExtent.Statistics;
 using IceExtent.Storage.Faults;
 using IceExtent.Storage.Writing;
 
 namespace IceExtent.Worker.Running;
 
-/// <summary>Keeps the daily tables of an archive: one file a method and year, written when its year is over.</summary>
+/// <summary>Keeps daily tables of an archive: one file a method and year, written when its year is over.</summary>
+/// <typeparam name="TRow">A row of the table.</typeparam>
 /// <remarks>
 /// Days that a year's file already has and that this run did not touch stay as they are; days whose input turned out
 /// to be unusable are taken out of it, so the archive always is what its inputs make. Not shared between threads.
 /// </remarks>
-internal sealed class DailySeries(
-    ArchiveLayout layout,
-    Hemisphere hemisphere,
+internal sealed class DailySeries<TRow>(
+    DailyKind<TRow> kind,
     IReadOnlyList<string> methods,
     Func<string, IReadOnlyList<KeyValuePair<string, string>>> metadataOf)
 {
-    /// <summary>The key of the configuration's digest in a table's metadata.</summary>
-    public const string DigestKey = "configuration_digest";
-
-    private readonly Dictionary<string, List<DailyRow>> rowsByMethod = methods.ToDictionary(method => method, _ => new List<DailyRow>(), StringComparer.Ordinal);
+    private readonly Dictionary<string, List<TRow>> rowsByMethod = methods.ToDictionary(method => method, _ => new List<TRow>(), StringComparer.Ordinal);
     private readonly HashSet<(string Method, DateOnly Day)> lostDays = [];
     private int? year;
 
@@ -32,16 +27,16 @@ internal sealed class DailySeries(
     /// <exception cref="FaultException">IE3001.</exception>
     public void CheckSameConfiguration(IEnumerable<int> years, string digest)
     {
-        foreach (string path in methods.SelectMany(_ => years, (method, touched) => layout.DailyFile(method, hemisphere, touched)).Where(File.Exists))
+        foreach (string path in methods.SelectMany(_ => years, (method, touched) => kind.FileOf(method, touched)).Where(File.Exists))
         {
-            string? found = DailyTable.Read(path).Metadata.GetValueOrDefault(DigestKey);
+            string? found = kind.Read(path).Metadata.GetValueOrDefault(DailySeries.DigestKey);
             if (!string.Equals(found, digest, StringComparison.Ordinal))
             {
                 throw new FaultException(new(
                     "IE3001",
                     path,
                     $"days made with another configuration (digest {found?[..12] ?? "none"})",
-                    $"the digest {digest[..12]} of this run file, sensor files, grid, land and program version",
+                    $"the digest {digest[..12]} of this run file, sensor files, grid, land, regions, places and program version",
                     "Choose another output folder, or move the old archive away and run again."));
             }
         }
@@ -53,7 +48,7 @@ internal sealed class DailySeries(
         Open(result.Date);
         foreach (MethodResult method in result.Methods)
         {
-            rowsByMethod[method.Method].AddRange(method.Rows);
+            rowsByMethod[method.Method].AddRange(kind.RowsOf(method));
         }
 
         lostDays.UnionWith(methods.Except(result.Methods.Select(method => method.Method)).Select(method => (method, result.Date)));
@@ -101,13 +96,12 @@ internal sealed class DailySeries(
 
     private void Write(string method, int open)
     {
-        string path = layout.DailyFile(method, hemisphere, open);
-        List<DailyRow> rows = rowsByMethod[method];
-        IReadOnlyList<KeyValuePair<string, string>> metadata = metadataOf(method);
-        IReadOnlyList<DailyRow> before = File.Exists(path) ? DailyTable.Read(path).Rows : [];
-        HashSet<DateOnly> touched = [.. rows.Select(row => row.Date), .. lostDays.Where(lost => lost.Method == method).Select(lost => lost.Day)];
-        DailyRow[] kept = [.. before.Where(row => !touched.Contains(row.Date))];
-        HashSet<DateOnly> gone = [.. before.Select(row => row.Date).Where(day => lostDays.Contains((method, day)))];
+        string path = kind.FileOf(method, open);
+        List<TRow> rows = rowsByMethod[method];
+        IReadOnlyList<TRow> before = File.Exists(path) ? kind.Read(path).Rows : [];
+        HashSet<DateOnly> touched = [.. rows.Select(kind.DateOf), .. lostDays.Where(lost => lost.Method == method).Select(lost => lost.Day)];
+        TRow[] kept = [.. before.Where(row => !touched.Contains(kind.DateOf(row)))];
+        HashSet<DateOnly> gone = [.. before.Select(kind.DateOf).Where(day => lostDays.Contains((method, day)))];
         DaysRemoved += method == methods[0] ? gone.Count : 0;
         if (rows.Count == 0 && kept.Length == 0)
         {
@@ -115,7 +109,7 @@ internal sealed class DailySeries(
         }
         else if (rows.Count > 0 || kept.Length < before.Count)
         {
-            DailyTable.Write(path, kept.Concat(rows), metadata);
+            kind.Write(path, kept.Concat(rows), metadataOf(method));
         }
     }
 }

@@ -1,3 +1,4 @@
+using IceExtent.Grids;
 using IceExtent.Retrieval;
 using IceExtent.Statistics;
 using IceExtent.Storage.Faults;
@@ -40,7 +41,10 @@ internal sealed class DayFinishing(DayPreparation preparation, GridArchive? grid
         grids?.Write(day, retrieval, tiePoints, planes, sourceDays);
         edge.Smear(planes.Total, planes.Unscreened, preparation.Settings.Rules.IceFraction);
         DailyRow[] rows = [.. preparation.Regions.Select(region => Row(day, tiePoints, region, retrieval.SurfaceScatter, planes))];
-        return new(retrieval.Method.Name, counts, filled, rows, IsEmptied(rows, planes));
+        return new(retrieval.Method.Name, counts, filled, rows, IsEmptied(rows, planes))
+        {
+            PlaceRows = [.. preparation.Places.Select(place => Row(day, place.Place, place.Cells, retrieval.SurfaceScatter, planes))],
+        };
     }
 
     private int? FillPolarGap(int source, ConcentrationPlanes planes)
@@ -96,5 +100,27 @@ internal sealed class DayFinishing(DayPreparation preparation, GridArchive? grid
         };
 
         double? Known(double squareMeters) => known ? squareMeters / SquareMetersPerSquareKilometer : null;
+    }
+
+    private DailyPlaceRow Row(DayLabel day, GridPlace place, TotalsRegion cells, RetrievalScatter scatter, ConcentrationPlanes planes)
+    {
+        PlaceTotals totals = PlaceTotals.Sum(cells, planes.Total, planes.Conditions);
+        double? error = totals.Known > 0.0
+            ? uncertainty.AreaStandardErrorSquareMeters(cells, planes.Total, planes.StandardError, scatter) / totals.Known
+            : null;
+        return new()
+        {
+            Date = day.Date,
+            Place = place.Name,
+            ConcentrationFraction = totals.MeanFraction,
+            ConcentrationStandardErrorFraction = error,
+            ObservedShare = totals.Observed / totals.Whole,
+            FilledShare = totals.Filled / totals.Whole,
+            Cells = place.Cells.Count,
+            NearestKilometers = place.NearestKilometers,
+            FarthestKilometers = place.FarthestKilometers,
+            Sensor = day.Sensor,
+            Status = day.Status,
+        };
     }
 }

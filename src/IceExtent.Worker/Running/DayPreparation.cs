@@ -1,3 +1,4 @@
+using IceExtent.Grids;
 using IceExtent.Retrieval;
 using IceExtent.Statistics;
 using IceExtent.Worker.Configuration;
@@ -16,6 +17,7 @@ internal sealed class DayPreparation
     {
         Settings = settings;
         Regions = [TotalsRegion.Hemisphere(settings.Grid, settings.Ocean), .. settings.Regions.Regions.Select(region => TotalsRegion.Part(settings.Grid, region))];
+        Places = [.. settings.Places.Places.Select(place => (place, TotalsRegion.Around(settings.Grid, place)))];
         Correlation = new(settings.Grid, settings.ErrorLengths.FarMeters, settings.ErrorLengths.FootprintMeters, settings.ErrorLengths.MissedIceMeters);
         Neighbours = settings.LeastNeighbours > 0 ? new(settings.Grid, settings.LeastNeighbours) : null;
         Days = settings.DayFilling is { } rules ? new(rules) : null;
@@ -31,6 +33,9 @@ internal sealed class DayPreparation
 
     /// <summary>The whole hemisphere, then the regions of the run.</summary>
     public IReadOnlyList<TotalsRegion> Regions { get; }
+
+    /// <summary>The places of the run, each with the areas of its cells.</summary>
+    public IReadOnlyList<(GridPlace Place, TotalsRegion Cells)> Places { get; }
 
     public ErrorCorrelation Correlation { get; }
 

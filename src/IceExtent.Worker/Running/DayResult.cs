@@ -26,9 +26,13 @@ internal sealed record DayResult(
 /// <param name="Method">The method.</param>
 /// <param name="Counts">What happened to the cells.</param>
 /// <param name="Filled">What was filled.</param>
-/// <param name="Rows">One a region.</param>
+/// <param name="Rows">One a region, the whole hemisphere first.</param>
 /// <param name="Emptied">Whether screens, masks and coast correction left no cell that counts as ice, though there were such cells before them.</param>
-internal sealed record MethodResult(string Method, RetrievalCounts Counts, FilledCells Filled, IReadOnlyList<DailyRow> Rows, bool Emptied = false);
+internal sealed record MethodResult(string Method, RetrievalCounts Counts, FilledCells Filled, IReadOnlyList<DailyRow> Rows, bool Emptied = false)
+{
+    /// <summary>One a place.</summary>
+    public IReadOnlyList<DailyPlaceRow> PlaceRows { get; init; } = [];
+}
 
 /// <summary>How many cells of one day were filled, and from what.</summary>
 /// <param name="FromNeighbours">From their neighbours.</param>

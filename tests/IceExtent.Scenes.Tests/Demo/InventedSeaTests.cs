@@ -1,5 +1,7 @@
 using IceExtent.Grids;
+using IceExtent.Grids.Outlines;
 using IceExtent.Scenes.Demo;
+using NetTopologySuite.Geometries;
 
 namespace IceExtent.Scenes.Tests.Demo;
 
@@ -82,6 +84,40 @@ public sealed class InventedSeaTests
             {
                 Assert.True(Holds(region.Ring, Map.Projection.Forward(place.Position)), region.Name);
             }
+        }
+    }
+
+    /// <summary>Law: the outlines in longitude and latitude share every cell out among the regions, as the plan on the map does.</summary>
+    [Fact]
+    public void Outlines_LaidOverTheMap_ShareEveryCell()
+    {
+        bool[] everywhere = Enumerable.Repeat(true, Map.CellCount).ToArray();
+        double[] sum = new double[Map.CellCount];
+        foreach (InventedRegion region in InventedRegions.All)
+        {
+            Coordinate[] ring = [.. region.Outline().Append(region.Outline()[0]).Select(at => new Coordinate(at.LongitudeDegrees, at.LatitudeDegrees))];
+            RegionOutline outline = new(region.Key, region.Name, "demo", GeometryFactory.Default.CreatePolygon(ring));
+            Assert.Null(OutlineCheck.FirstFault(outline.LongitudeLatitude));
+            GridRegion laid = GridRegion.Of(Map, outline, everywhere);
+            for (int index = 0; index < laid.Cells.Count; index++)
+            {
+                sum[laid.Cells[index]] += laid.Shares[index];
+            }
+        }
+
+        Assert.All(sum, share => Assert.Equal(1.0, share, 1e-9));
+    }
+
+    [Fact]
+    public void Routes_OverTheMap_RunOverWaterButForACellOrTwo()
+    {
+        bool[] ocean = InventedSea.Land.OceanBelow(0.5);
+        foreach (InventedRoute route in InventedRoutes.All)
+        {
+            RouteOnLand course = RouteOnLand.Of(Map, new(route.Key, route.Name, [route.Course], 40_000.0), ocean);
+
+            Assert.True(course.Share <= 0.05, $"{route.Key}: {course.Share:P1} over land, first at {course.FirstAt}.");
+            Assert.DoesNotContain(InventedPlaces.All, place => place.Key == route.Key);
         }
     }
 
