@@ -6,5 +6,6 @@ namespace IceExtent.Worker.Configuration;
 /// <param name="Scheme">The rules of cells and places.</param>
 /// <param name="Regions">The rules of a region's area.</param>
 /// <param name="LeastTrendYears">A trend needs so many years.</param>
+/// <param name="LeastPlaceShare">A day of a place counts with a value on so much of its cells' area. Unit: 1.</param>
 /// <param name="Paths">The files that decide dates: the scheme's.</param>
-internal sealed record SeasonSettings(SeasonScheme Scheme, RegionSeasonRules Regions, int LeastTrendYears, IReadOnlyList<string> Paths);
+internal sealed record SeasonSettings(SeasonScheme Scheme, RegionSeasonRules Regions, int LeastTrendYears, double LeastPlaceShare, IReadOnlyList<string> Paths);

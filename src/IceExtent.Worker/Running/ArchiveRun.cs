@@ -70,7 +70,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         if (settings.Season is { } season)
         {
             HashSet<DateOnly> touched = [.. lost, .. dayRecords.Select(day => day.Date)];
-            seasons = new SeasonSpan(settings, season, preparation.Regions, digest, options.Workers).Update(touched, observer.SeasonDone, cancellation);
+            seasons = new SeasonSpan(settings, season, preparation, digest, options.Workers).Update(touched, observer.SeasonDone, cancellation);
         }
 
         int done = dayRecords.Count(day => day.Outcome == DayOutcome.Done);

@@ -1,19 +1,19 @@
-using IceExtent.Statistics;
 using IceExtent.Statistics.Seasons;
 using IceExtent.Storage.Reading;
 using IceExtent.Storage.Writing;
 using IceExtent.Worker.Configuration;
+using IceExtent.Worker.Running;
 
 namespace IceExtent.Worker.Seasons;
 
 /// <summary>Brings the season tables of an archive up to date with its days.</summary>
 /// <param name="settings">The run.</param>
 /// <param name="season">How its dates are found.</param>
-/// <param name="regions">Its regions, the hemisphere first.</param>
+/// <param name="preparation">Its regions, the hemisphere first, and its places.</param>
 /// <param name="configuration">The digest of the days' configuration.</param>
 /// <param name="workers">How many days, or blocks of cells, are handled at a time.</param>
 internal sealed class SeasonSpan(
-    RunSettings settings, SeasonSettings season, IReadOnlyList<TotalsRegion> regions, string configuration, int workers)
+    RunSettings settings, SeasonSettings season, DayPreparation preparation, string configuration, int workers)
 {
     private readonly ArchiveLayout layout = new(settings.Output);
     private readonly int[] ocean = [.. Enumerable.Range(0, settings.Grid.CellCount).Where(cell => settings.Ocean[cell])];
@@ -46,7 +46,9 @@ internal sealed class SeasonSpan(
         }
 
         SeasonArchive archive = new(settings, season, layout, method, configuration);
-        NamedSeasons named = new(settings, season, layout, method, archive, (files.Keys.Min(), files.Keys.Max()));
+        (DateOnly First, DateOnly Last) record = (files.Keys.Min(), files.Keys.Max());
+        RegionSeasons named = new(settings, season, layout, method, archive, record);
+        PlaceSeasons places = new(settings, season, layout, method, archive, record);
         List<SeasonYearReport> reports = [];
         foreach (IceYearSpan span in named.Spans)
         {
@@ -58,7 +60,8 @@ internal sealed class SeasonSpan(
             RunningYear? before = RunningYear.Read(archive.GridPathOf(span.Year), settings.Grid, archive.IsRunning(span.Year));
             stack.Load(grids, span, files.GetValueOrDefault, workers, cancellation);
             CellSeasons cells = CellSeasonSearch.Find(stack, season.Scheme, span, workers, cancellation);
-            named.Add(span, cells, regions);
+            named.Add(span, cells, preparation.Regions);
+            places.Add(span, cells, preparation.Places);
             archive.WriteCells(span, cells);
             SeasonYearReport report = new(
                 method, span.Year.Year, span.IsComplete, Enumerable.Range(0, cells.Cells.Count).Count(cells.HadIce), before?.ChangesTo(cells), stack.Faults.Count);
@@ -69,8 +72,7 @@ internal sealed class SeasonSpan(
         archive.RemoveYearsOutside(named.Spans);
         if (reports.Count > 0)
         {
-            IReadOnlyList<string> changed = named.Write();
-            reports[^1] = reports[^1] with { Named = changed };
+            reports[^1] = reports[^1] with { Named = [.. named.Write(), .. places.Write(named.Spans)] };
         }
 
         return reports;

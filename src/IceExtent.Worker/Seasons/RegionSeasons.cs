@@ -11,7 +11,7 @@ namespace IceExtent.Worker.Seasons;
 /// Medians of years that a run does not touch stay as the table has them. The dates of ice areas are found anew for every year,
 /// since their level follows from the whole record.
 /// </remarks>
-internal sealed class NamedSeasons
+internal sealed class RegionSeasons
 {
     private readonly RunSettings settings;
     private readonly SeasonSettings season;
@@ -23,7 +23,7 @@ internal sealed class NamedSeasons
     private readonly IReadOnlyList<RegionSeasonRow> before;
 
     /// <summary>Reads what the archive has.</summary>
-    public NamedSeasons(
+    public RegionSeasons(
         RunSettings settings, SeasonSettings season, ArchiveLayout layout, string method, SeasonArchive archive, (DateOnly First, DateOnly Last) record)
     {
         (this.settings, this.season, this.layout, this.method, this.archive, this.record) = (settings, season, layout, method, archive, record);
@@ -82,7 +82,7 @@ internal sealed class NamedSeasons
         }
 
         archive.WriteRegions(dated);
-        return [.. ChangesIn(dated)];
+        return [.. NamedChanges.Of(before, dated, row => row.Region)];
     }
 
     private ILookup<string, DailyIce> DailyAreas() => Enumerable.Range(record.First.Year, record.Last.Year - record.First.Year + 1)
@@ -94,33 +94,4 @@ internal sealed class NamedSeasons
             row => row.Region,
             row => new DailyIce(row.Date, row.AreaSquareKilometers!.Value, row.AreaStandardErrorSquareKilometers ?? 0.0),
             StringComparer.Ordinal);
-
-    private IEnumerable<string> ChangesIn(IEnumerable<RegionSeasonRow> now)
-    {
-        Dictionary<(int, string), RegionSeasonRow> was = before.Where(row => !row.IsFinal).ToDictionary(row => (row.Year.Year, row.Region));
-        foreach (RegionSeasonRow row in now)
-        {
-            if (!was.TryGetValue((row.Year.Year, row.Region), out RegionSeasonRow? old))
-            {
-                continue;
-            }
-
-            foreach (SeasonEvent which in SeasonEvents.All)
-            {
-                if (ChangeOf(row.Year, old.Dates.Of(which), row.Dates.Of(which)) is { } change)
-                {
-                    yield return $"{row.Region} {row.Year.Year} {SeasonEvents.NameOf(which)}: {change}";
-                }
-            }
-        }
-    }
-
-    private static string? ChangeOf(IceYear year, SeasonDate? before, SeasonDate? now) => (before?.Day, now?.Day) switch
-    {
-        ({ } day, { } again) when day == again => null,
-        ({ } day, { } other) => FormattableString.Invariant($"moved from {year.DateOf(day):yyyy-MM-dd} to {year.DateOf(other):yyyy-MM-dd}"),
-        ({ } day, null) => FormattableString.Invariant($"{year.DateOf(day):yyyy-MM-dd} withdrawn"),
-        (null, { } found) => FormattableString.Invariant($"new, {year.DateOf(found):yyyy-MM-dd}"),
-        _ => null,
-    };
 }
