@@ -8,6 +8,8 @@ namespace IceExtent.Worker.Seasons;
 /// <param name="DaysOf">The day of the year, or the length; null where there is none.</param>
 internal sealed record SeasonQuantity(string Name, Func<SeasonRow, SeasonDate?>? DateOf, Func<SeasonRow, double?> DaysOf)
 {
+    private const double LeastKnownShare = 0.9; // Days that are counted make a year only where nearly all are known.
+
     /// <summary>Every quantity of a row, in the order they are told.</summary>
     public static IReadOnlyList<SeasonQuantity> Of(SeasonRow row) =>
     [
@@ -17,7 +19,7 @@ internal sealed record SeasonQuantity(string Name, Func<SeasonRow, SeasonDate?>?
         .. SeasonEvents.All.Where(which => row.Dates.Of(which) is not null).Select(which => Date(SeasonEvents.NameOf(which), year => year.Dates.Of(which))),
         new("inner_ice_free_days", null, year => year.Dates.Ice.InnerIceFreeDays(year.Year, year.Begins)),
         new("outer_ice_free_days", null, year => year.Dates.Ice.OuterIceFreeDays(year.Year, year.Begins)),
-        new("open_water_days", null, year => year.IsFinal ? year.OpenWaterDays : null),
+        new("open_water_days", null, year => year.IsFinal && year.KnownDays >= LeastKnownShare * year.Year.Length ? year.OpenWaterDays : null),
     ];
 
     private static SeasonQuantity Date(string name, Func<SeasonRow, SeasonDate?> dateOf) => new(name, dateOf, row => dateOf(row)?.Day);
