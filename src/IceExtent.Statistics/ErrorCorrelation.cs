@@ -45,13 +45,15 @@ public sealed class ErrorCorrelation
         }
 
         (Columns, Rows) = (grid.Columns, grid.Rows);
-        CellsPerFootprint = Math.Max(1, (int)Math.Round(footprintMeters / grid.Frame.CellMeters));
-        CellsPerMissedIce = Math.Max(1, (int)Math.Round(missedIceMeters / grid.Frame.CellMeters));
+        Footprints = Squares(footprintMeters);
+        MissedIce = Squares(missedIceMeters);
         double lengthInBlocks = lengthMeters / (cellsPerBlock * grid.Frame.CellMeters);
         for (int power = 1; power <= MostPowers; power++)
         {
             taps[power] = Taps(lengthInBlocks / Math.Sqrt(power));
         }
+
+        CellSquares Squares(double sideMeters) => new(grid.Columns, grid.Rows, Math.Max(1, (int)Math.Round(sideMeters / grid.Frame.CellMeters)));
     }
 
     /// <summary>The number of columns of the grid.</summary>
@@ -60,11 +62,11 @@ public sealed class ErrorCorrelation
     /// <summary>The number of rows of the grid.</summary>
     public int Rows { get; }
 
-    /// <summary>The side of a footprint, in cells.</summary>
-    public int CellsPerFootprint { get; }
+    /// <summary>The squares inside which local errors are alike.</summary>
+    internal CellSquares Footprints { get; }
 
-    /// <summary>The side of a square of missed ice, in cells.</summary>
-    public int CellsPerMissedIce { get; }
+    /// <summary>The squares inside which cells alike hide ice that was not retrieved.</summary>
+    internal CellSquares MissedIce { get; }
 
     /// <summary>The number of blocks in a row of blocks.</summary>
     public int BlockColumns { get; }

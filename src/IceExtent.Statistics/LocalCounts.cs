@@ -8,21 +8,20 @@ namespace IceExtent.Statistics;
 /// </remarks>
 internal sealed class LocalCounts
 {
-    private readonly int columns;
-    private readonly int side;
-    private readonly int squareColumns;
+    private readonly CellSquares cellSquares;
+    private readonly int cellsPerSquare;
     private readonly int[] counts;
     private readonly double[] probabilities; // A square's cells follow each other.
     private readonly double[] areas;
     private readonly List<int> squares = [];
 
     /// <summary>Makes room.</summary>
-    public LocalCounts(int columns, int rows, int cellsPerSquare)
+    public LocalCounts(CellSquares cellSquares)
     {
-        (this.columns, side) = (columns, cellsPerSquare);
-        squareColumns = ((columns - 1) / side) + 1;
-        counts = new int[squareColumns * (((rows - 1) / side) + 1)];
-        probabilities = new double[counts.Length * side * side];
+        this.cellSquares = cellSquares;
+        cellsPerSquare = cellSquares.Side * cellSquares.Side;
+        counts = new int[cellSquares.Count];
+        probabilities = new double[counts.Length * cellsPerSquare];
         areas = new double[probabilities.Length];
     }
 
@@ -32,14 +31,14 @@ internal sealed class LocalCounts
     /// <param name="probability">That it counts as ice. Range: 0 to 1.</param>
     public void Add(int cell, double area, double probability)
     {
-        int square = (cell / columns / side * squareColumns) + (cell % columns / side);
+        int square = cellSquares.OfCell[cell];
         int at = counts[square]++;
         if (at == 0)
         {
             squares.Add(square);
         }
 
-        (probabilities[(square * side * side) + at], areas[(square * side * side) + at]) = (probability, area);
+        (probabilities[(square * cellsPerSquare) + at], areas[(square * cellsPerSquare) + at]) = (probability, area);
     }
 
     /// <summary>The variance that all cells added, in m⁴; forgets the cells.</summary>
@@ -48,7 +47,7 @@ internal sealed class LocalCounts
         double variance = 0.0;
         foreach (int square in squares)
         {
-            variance += VarianceOf(probabilities.AsSpan(square * side * side, counts[square]), areas.AsSpan(square * side * side, counts[square]));
+            variance += VarianceOf(probabilities.AsSpan(square * cellsPerSquare, counts[square]), areas.AsSpan(square * cellsPerSquare, counts[square]));
             counts[square] = 0;
         }
 

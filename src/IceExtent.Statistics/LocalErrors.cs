@@ -8,19 +8,16 @@ namespace IceExtent.Statistics;
 /// </remarks>
 internal sealed class LocalErrors
 {
-    private readonly int columns;
-    private readonly int side;
-    private readonly int squareColumns;
+    private readonly CellSquares footprints;
     private readonly (double All, double Far)[] sums;
     private readonly bool[] touched;
     private readonly List<int> squares = [];
 
     /// <summary>Makes room.</summary>
-    public LocalErrors(int columns, int rows, int cellsPerFootprint)
+    public LocalErrors(CellSquares footprints)
     {
-        (this.columns, side) = (columns, cellsPerFootprint);
-        squareColumns = ((columns - 1) / side) + 1;
-        sums = new (double, double)[squareColumns * (((rows - 1) / side) + 1)];
+        this.footprints = footprints;
+        sums = new (double, double)[footprints.Count];
         touched = new bool[sums.Length];
     }
 
@@ -30,7 +27,7 @@ internal sealed class LocalErrors
     /// <param name="shared">λ.</param>
     public void Add(int cell, double weight, double shared)
     {
-        int square = (cell / columns / side * squareColumns) + (cell % columns / side);
+        int square = footprints.OfCell[cell];
         if (!touched[square])
         {
             touched[square] = true;

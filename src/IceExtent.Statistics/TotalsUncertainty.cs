@@ -48,8 +48,8 @@ public sealed class TotalsUncertainty
         }
 
         scratch = new double[correlation.BlockCount];
-        local = new(correlation.Columns, correlation.Rows, correlation.CellsPerFootprint);
-        missed = new(correlation.Columns, correlation.Rows, correlation.CellsPerMissedIce);
+        local = new(correlation.Footprints);
+        missed = new(correlation.MissedIce);
     }
 
     /// <summary>Computes both standard errors.</summary>
