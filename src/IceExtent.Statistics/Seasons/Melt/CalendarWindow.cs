@@ -13,13 +13,13 @@ public readonly record struct CalendarWindow
     /// <exception cref="ArgumentOutOfRangeException">A day is not of 1 to 365.</exception>
     public CalendarWindow(int firstDayOfYear, int lastDayOfYear) => (first, last) = (Of(firstDayOfYear), Of(lastDayOfYear));
 
-    /// <summary>The stretch whose first day lies in an ice year; its last day may lie after it.</summary>
+    /// <summary>The stretch whose last day lies in an ice year; its first day may lie before it.</summary>
     public DayRange In(IceYear year)
     {
-        DateOnly begin = first.Beginning(year.Year).FirstDay;
-        begin = begin < year.FirstDay ? first.Beginning(year.Year + 1).FirstDay : begin;
-        DateOnly end = last.Beginning(begin.Year).FirstDay;
-        end = end < begin ? last.Beginning(begin.Year + 1).FirstDay : end;
+        DateOnly end = last.Beginning(year.Year).FirstDay;
+        end = end < year.FirstDay ? last.Beginning(year.Year + 1).FirstDay : end;
+        DateOnly begin = first.Beginning(end.Year).FirstDay;
+        begin = begin > end ? first.Beginning(end.Year - 1).FirstDay : begin;
         return new(year.DayOf(begin), year.DayOf(end));
     }
 

@@ -12,39 +12,46 @@ internal ref struct FreezeSearch(ReadOnlySpan<float> ice, SeriesDays days, Searc
 
     public readonly (SeasonDate Early, SeasonDate Continuous) Find()
     {
-        (float limit, float leastIce) = ((float)limits.MeltScore, (float)rules.LeastIceFraction);
-        int lastFrozen = None, frozen = None; // The last frozen day, and the next one after the day in hand.
-        int runEnd = None, openEnd = None;    // The last days of the runs in hand: melt or water, water alone.
+        (double limit, float leastIce) = (Limit(), (float)rules.LeastIceFraction);
+        int lastFrozen = None, frozen = None, runEnd = None; // The last frozen day, the next one after the day in hand, the end of the run in hand.
         (int Thaw, int Frozen) continuous = (None, None), early = (None, None);
         for (int day = search.Last; day >= search.First && early.Thaw == None; day--)
         {
             float score = scores[day];
-            bool open = ice[day] < leastIce;
             if (score < limit)
             {
-                (lastFrozen, frozen, runEnd, openEnd) = (Math.Max(lastFrozen, day), day, None, None);
-                continue;
+                (lastFrozen, frozen, runEnd) = (Math.Max(lastFrozen, day), day, None);
             }
-
-            if (!open && float.IsNaN(score))
+            else if (score >= limit || ice[day] < leastIce)
             {
-                continue;
+                runEnd = runEnd == None ? day : runEnd;
+                int length = runEnd - day + 1;
+                continuous = continuous.Thaw == None && length >= limits.InterruptDays ? (runEnd, frozen) : continuous;
+                early = length >= limits.PersistDays ? (runEnd, frozen) : early;
             }
-
-            runEnd = runEnd == None ? day : runEnd;
-            openEnd = !open ? None : openEnd == None ? day : openEnd;
-            if (continuous.Thaw == None && (!open || openEnd - day + 1 >= limits.PersistDays))
-            {
-                continuous = (open ? openEnd : day, frozen);
-            }
-
-            early = runEnd - day + 1 >= limits.PersistDays ? (runEnd, frozen) : early;
         }
 
-        return (Date(early, lastFrozen, None), Date(continuous, lastFrozen, limits.PersistDays));
+        return (Date(early, lastFrozen, None, limit), Date(continuous, lastFrozen, limits.PersistDays, limit));
     }
 
-    private readonly SeasonDate Date((int Thaw, int Frozen) turn, int lastFrozen, int leastDays)
+    // Half-way from the winter to the summer of the cell, and never less than the limit of melt: ice changes while it ages.
+    private readonly double Limit()
+    {
+        double sum = 0.0;
+        int count = 0;
+        for (int day = search.First; day <= search.Last && day < search.First + limits.SummerDays; day++)
+        {
+            if (!float.IsNaN(scores[day]))
+            {
+                sum += scores[day];
+                count++;
+            }
+        }
+
+        return count == 0 ? limits.MeltScore : Math.Max(limits.MeltScore, 0.5 * sum / count);
+    }
+
+    private readonly SeasonDate Date((int Thaw, int Frozen) turn, int lastFrozen, int leastDays, double limit)
     {
         if (turn.Thaw == None)
         {
@@ -59,7 +66,7 @@ internal ref struct FreezeSearch(ReadOnlySpan<float> ice, SeriesDays days, Searc
         return turn.Frozen - turn.Thaw > rules.GapDays + 1
             ? SeasonDate.Hidden(days.DayOf(turn.Thaw + 1), days.DayOf(turn.Frozen))
             : SeasonDate.Found(
-                days.DayOf(turn.Frozen), days.DayOf(Earliest(turn.Frozen)) - limits.SpreadDays, days.DayOf(Latest(turn.Frozen)) + limits.SpreadDays);
+                days.DayOf(turn.Frozen), days.DayOf(Earliest(turn.Frozen, limit)) - limits.SpreadDays, days.DayOf(Latest(turn.Frozen, limit)) + limits.SpreadDays);
     }
 
     // No day that could be judged: open all through, or never looked at.
@@ -77,9 +84,9 @@ internal ref struct FreezeSearch(ReadOnlySpan<float> ice, SeriesDays days, Searc
     }
 
     // Back to the day after the last that melts beyond doubt or is open.
-    private readonly int Earliest(int day)
+    private readonly int Earliest(int day, double limit)
     {
-        double sure = limits.MeltScore + (Limit95 * limits.ScoreError);
+        double sure = limit + (Limit95 * limits.ScoreError);
         int before = day - 1;
         while (before >= search.First && !(scores[before] >= sure) && !(ice[before] < rules.LeastIceFraction))
         {
@@ -90,9 +97,9 @@ internal ref struct FreezeSearch(ReadOnlySpan<float> ice, SeriesDays days, Searc
     }
 
     // On to the first that is frozen beyond doubt, no farther than a run must last.
-    private readonly int Latest(int day)
+    private readonly int Latest(int day, double limit)
     {
-        double sure = limits.MeltScore - (Limit95 * limits.ScoreError);
+        double sure = limit - (Limit95 * limits.ScoreError);
         int farthest = Math.Min(day + limits.PersistDays, search.Last), latest = day;
         for (int after = day; after <= farthest; after++)
         {

@@ -13,8 +13,8 @@ public static class HorizontalRangeMelt
 {
     private const double Limit95 = 1.96;
 
-    // Positions in the workspace: days before the series are there, and missing.
-    private const int Pad = HorizontalRangeRules.MostTestDays;
+    // Positions in the workspace: days before the series are there, and missing. A test looks back so far at most.
+    private const int Pad = HorizontalRangeRules.MostTestDays + HorizontalRangeRules.MostLeadDays;
 
     /// <summary>Finds the day.</summary>
     /// <param name="series">The cell; the vertical temperatures are not used.</param>
@@ -34,7 +34,7 @@ public static class HorizontalRangeMelt
             return SeasonDate.Without(search.Cut ?? SeasonDateState.NeverReached);
         }
 
-        int begin = Math.Max(0, search.First - rules.HorizontalRange.TestDays);
+        int begin = Math.Max(0, search.First - rules.HorizontalRange.TestDays - rules.HorizontalRange.LeadDays);
         int end = Math.Min(series.Length, search.Last + rules.HorizontalRange.TestDays);
         KeepIce(series, begin, end, (float)rules.LeastIceFraction, room.Usable);
         return new Finder(series.IceFraction, days, search, rules, room, begin, end).Find();
@@ -65,28 +65,36 @@ public static class HorizontalRangeMelt
     private ref struct Finder(ReadOnlySpan<float> ice, SeriesDays days, SearchSpan search, MeltRules rules, MeltWorkspace room, int begin, int end)
     {
         private readonly ReadOnlySpan<float> ice = ice;
+        private readonly ReadOnlySpan<float> ranges = room.Usable.AsSpan(Pad, end);
         private readonly HorizontalRangeRules limits = rules.HorizontalRange;
         private bool spreadsReady;
+        private double drop = double.NaN; // Below it the snow is wet, where the test gave the date and it was moved.
 
         public SeasonDate Find()
         {
             float dryAbove = (float)limits.DryAboveKelvins, wetBelow = (float)limits.WetBelowKelvins, change = (float)limits.LeastChangeKelvins;
-            ReadOnlySpan<float> usable = room.Usable.AsSpan(Pad, end);
             int dry = -1; // The last day that is known to be dry.
             for (int day = begin; day <= search.Last; day++)
             {
-                float range = usable[day];
-                if (float.IsNaN(range) || (day >= search.First && range <= dryAbove && range >= wetBelow && float.IsNaN(ChangeAt(day))))
+                float range = ranges[day];
+                if (day < search.First || range > dryAbove || float.IsNaN(range))
                 {
+                    dry = float.IsNaN(range) ? dry : day;
                     continue;
                 }
 
-                if (day >= search.First && (range < wetBelow || (range <= dryAbove && ChangeAt(day) > change)))
+                if (range < wetBelow)
                 {
                     return Date(day, dry);
                 }
 
-                dry = day;
+                float growth = GrowthAt(day);
+                if (growth > change && (limits.LeadDays > 0 ? DropAt(day) : day) is var wet && wet >= 0)
+                {
+                    return Date(wet, LastUsable(wet - 1, day, dry));
+                }
+
+                dry = float.IsNaN(growth) ? dry : day;
             }
 
             return Without(dry);
@@ -123,11 +131,39 @@ public static class HorizontalRangeMelt
                 : SeasonDate.Without(SeasonDateState.NeverReached);
         }
 
+        // The first day below the middle between the lowest range of either half, where most days from it on are; -1 where there is none.
+        private int DropAt(int day)
+        {
+            int at = Pad + day - limits.LeadDays, before = at - limits.TestDays;
+            int end = Math.Min(day - limits.LeadDays + limits.TestDays, ranges.Length);
+            float middle = 0.5f * (room.Lagged[at] - room.Range[at] + room.Lagged[before] - room.Range[before]);
+            int first = -1, below = 0, above = 0;
+            for (int later = day; later < end; later++)
+            {
+                first = first < 0 && ranges[later] < middle && later <= search.Last ? later : first;
+                below += first >= 0 && ranges[later] < middle ? 1 : 0;
+                above += first >= 0 && ranges[later] >= middle ? 1 : 0;
+            }
+
+            drop = below > above ? middle : double.NaN;
+            return below > above ? first : -1;
+        }
+
+        private readonly int LastUsable(int day, int first, int otherwise)
+        {
+            while (day >= first && float.IsNaN(ranges[day]))
+            {
+                day--;
+            }
+
+            return day >= first ? day : otherwise;
+        }
+
         // Back to the day after the last that is dry beyond doubt.
         private int Earliest(int day)
         {
             int before = day - 1;
-            while (before >= search.First && (float.IsNaN(room.Usable[Pad + before]) || MayBeWet(before, Limit95 * limits.ErrorKelvins, whereUntested: true)))
+            while (before >= search.First && (float.IsNaN(ranges[before]) || MayBeWet(before, Limit95 * limits.ErrorKelvins, whereUntested: true)))
             {
                 before--;
             }
@@ -141,7 +177,7 @@ public static class HorizontalRangeMelt
             int farthest = Math.Min(day + limits.TestDays, end - 1), latest = day;
             for (int after = day; after <= farthest; after++)
             {
-                if (!float.IsNaN(room.Usable[Pad + after]))
+                if (!float.IsNaN(ranges[after]))
                 {
                     latest = after;
                     if (MayBeWet(after, -Limit95 * limits.ErrorKelvins, whereUntested: false))
@@ -156,22 +192,27 @@ public static class HorizontalRangeMelt
 
         private bool MayBeWet(int day, double doubt, bool whereUntested)
         {
-            double range = room.Usable[Pad + day];
-            double change = ChangeAt(day);
+            double range = ranges[day];
+            if (!double.IsNaN(drop))
+            {
+                return range < drop + doubt;
+            }
+
+            double growth = GrowthAt(day);
             return range < limits.WetBelowKelvins + doubt
-                || (range <= limits.DryAboveKelvins + doubt && (double.IsNaN(change) ? whereUntested : change > limits.LeastChangeKelvins - doubt));
+                || (range <= limits.DryAboveKelvins + doubt && (double.IsNaN(growth) ? whereUntested : growth > limits.LeastChangeKelvins - doubt));
         }
 
         // How much more the range spreads from a day on than before it, in K; NaN with too few days on either side.
-        private float ChangeAt(int day)
+        private float GrowthAt(int day)
         {
             if (!spreadsReady)
             {
-                SlidingSpread.Fill(room, Pad + search.First - limits.TestDays, Pad + search.Last + 1 + limits.TestDays, limits.TestDays);
+                SlidingSpread.Fill(room, Pad + search.First - limits.TestDays - limits.LeadDays, Pad + search.Last + 1 + limits.TestDays, limits.TestDays);
                 spreadsReady = true;
             }
 
-            int at = Pad + day, before = at - limits.TestDays;
+            int at = Pad + day - limits.LeadDays, before = at - limits.TestDays;
             return room.Count[at] >= limits.LeastTestDays && room.Count[before] >= limits.LeastTestDays
                 ? room.Range[at] - room.Range[before]
                 : float.NaN;

@@ -36,12 +36,14 @@ public sealed record MeltIndicatorRules
     /// <param name="meltScore">From this sum on a day looks like melt, above 0.</param>
     /// <param name="scoreError">The standard error of the sum on one day, 0 or more.</param>
     /// <param name="persistDays">A run of so many days is lasting, 1 or more.</param>
+    /// <param name="interruptDays">A run of so many days ends a freeze-up that had come, 1 or more and no more than the last.</param>
+    /// <param name="summerDays">The first days of the freeze window, which tell how the melting cell looks; 0 or more.</param>
     /// <param name="leastWinterDays">A winter tells how a cell looks with so many usable days, 3 or more.</param>
     /// <param name="spreadDays">What the limits of a date are widened by on either side, 0 or more days.</param>
     /// <exception cref="ArgumentOutOfRangeException">A number is out of its range.</exception>
     public MeltIndicatorRules(
         MeltIndicator jump, MeltIndicator gradient, MeltIndicator level, MeltIndicator horizontalRange,
-        int jumpDays, double meltScore, double scoreError, int persistDays, int leastWinterDays, int spreadDays)
+        int jumpDays, double meltScore, double scoreError, int persistDays, int interruptDays, int summerDays, int leastWinterDays, int spreadDays)
     {
         ArgumentOutOfRangeException.ThrowIfNegativeOrZero(jump.Weight + gradient.Weight + level.Weight + horizontalRange.Weight);
         ArgumentOutOfRangeException.ThrowIfLessThan(jumpDays, 1);
@@ -49,10 +51,14 @@ public sealed record MeltIndicatorRules
         ArgumentOutOfRangeException.ThrowIfNegativeOrZero(meltScore);
         ArgumentOutOfRangeException.ThrowIfNegative(scoreError);
         ArgumentOutOfRangeException.ThrowIfLessThan(persistDays, 1);
+        ArgumentOutOfRangeException.ThrowIfLessThan(interruptDays, 1);
+        ArgumentOutOfRangeException.ThrowIfGreaterThan(interruptDays, persistDays);
+        ArgumentOutOfRangeException.ThrowIfNegative(summerDays);
         ArgumentOutOfRangeException.ThrowIfLessThan(leastWinterDays, 3);
         ArgumentOutOfRangeException.ThrowIfNegative(spreadDays);
         (Jump, Gradient, Level, HorizontalRange, JumpDays) = (jump, gradient, level, horizontalRange, jumpDays);
-        (MeltScore, ScoreError, PersistDays, LeastWinterDays, SpreadDays) = (meltScore, scoreError, persistDays, leastWinterDays, spreadDays);
+        (MeltScore, ScoreError, PersistDays, InterruptDays) = (meltScore, scoreError, persistDays, interruptDays);
+        (SummerDays, LeastWinterDays, SpreadDays) = (summerDays, leastWinterDays, spreadDays);
     }
 
     /// <summary>37 GHz vertical above its mean over the days before; scatter in K.</summary>
@@ -78,6 +84,12 @@ public sealed record MeltIndicatorRules
 
     /// <summary>A run of so many days is lasting.</summary>
     public int PersistDays { get; }
+
+    /// <summary>A run of so many days ends a freeze-up that had come.</summary>
+    public int InterruptDays { get; }
+
+    /// <summary>The first days of the freeze window, which tell how the melting cell looks.</summary>
+    public int SummerDays { get; }
 
     /// <summary>A winter tells how a cell looks with so many usable days.</summary>
     public int LeastWinterDays { get; }

@@ -40,7 +40,7 @@ public sealed record MeltRules
     /// <remarks>With fewer the dates still come out, from what is there.</remarks>
     public DayRange Needed(MeltWindows windows)
     {
-        int before = Math.Max(HorizontalRange.TestDays, Indicators.JumpDays);
+        int before = Math.Max(HorizontalRange.TestDays + HorizontalRange.LeadDays, Indicators.JumpDays);
         int after = Math.Max(HorizontalRange.TestDays, Indicators.PersistDays);
         return new(
             Math.Min(Math.Min(windows.Winter.First, windows.Melt.First) - before, windows.Freeze.First),

@@ -3,7 +3,7 @@ namespace IceExtent.Statistics.Seasons;
 /// <summary>Room for finding melt dates. One for each thread.</summary>
 public sealed class MeltWorkspace
 {
-    private const int Margin = 64; // Windows reach beyond the last day, and whole vectors beyond them.
+    private const int Margin = 80; // Windows reach beyond the last day, and whole vectors beyond them.
 
     /// <summary>Makes room.</summary>
     /// <param name="mostDays">The longest series, 1 day or more.</param>
