@@ -66,7 +66,7 @@ internal ref struct FreezeSearch(ReadOnlySpan<float> ice, SeriesDays days, Searc
         return turn.Frozen - turn.Thaw > rules.GapDays + 1
             ? SeasonDate.Hidden(days.DayOf(turn.Thaw + 1), days.DayOf(turn.Frozen))
             : SeasonDate.Found(
-                days.DayOf(turn.Frozen), days.DayOf(Earliest(turn.Frozen, limit)) - limits.SpreadDays, days.DayOf(Latest(turn.Frozen, limit)) + limits.SpreadDays);
+                days.DayOf(turn.Frozen), days.DayOf(Earliest(turn.Frozen, limit)) - limits.FreezeSpreadDays, days.DayOf(Latest(turn.Frozen, limit)) + limits.FreezeSpreadDays);
     }
 
     // No day that could be judged: open all through, or never looked at.

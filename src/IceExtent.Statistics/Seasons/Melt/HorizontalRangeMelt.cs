@@ -12,8 +12,10 @@ namespace IceExtent.Statistics.Seasons;
 public static class HorizontalRangeMelt
 {
     private const double Limit95 = 1.96;
+    private const int SpreadsAtOnce = 40; // Days of spreads that are worked out together.
 
     // Positions in the workspace: days before the series are there, and missing. A test looks back so far at most.
+    private const int Reach = SpreadsAtOnce + (2 * HorizontalRangeRules.MostTestDays) + 16; // What is read beyond the last day.
     private const int Pad = HorizontalRangeRules.MostTestDays + HorizontalRangeRules.MostLeadDays;
 
     /// <summary>Finds the day.</summary>
@@ -36,29 +38,36 @@ public static class HorizontalRangeMelt
 
         int begin = Math.Max(0, search.First - rules.HorizontalRange.TestDays - rules.HorizontalRange.LeadDays);
         int end = Math.Min(series.Length, search.Last + rules.HorizontalRange.TestDays);
-        KeepIce(series, begin, end, (float)rules.LeastIceFraction, room.Usable);
+        bool any = KeepIce(series, begin, end, (float)rules.LeastIceFraction, room.Usable);
+        end = any ? end : begin; // Without a usable day there is nothing to look through.
         return new Finder(series.IceFraction, days, search, rules, room, begin, end).Find();
     }
 
-    // The range on days with ice, missing on all others and beyond the days that are asked for.
-    private static void KeepIce(in MeltSeries series, int begin, int end, float leastIce, float[] usable)
+    // The range on days with ice, missing on all others and beyond the days that are asked for. Whether there is any.
+    private static bool KeepIce(in MeltSeries series, int begin, int end, float leastIce, float[] usable)
     {
-        usable.AsSpan(0, Pad + begin).Fill(float.NaN);
+        int past = Math.Min(Pad + end + Reach, usable.Length);
+        usable.AsSpan(begin, Pad).Fill(float.NaN);
         ReadOnlySpan<float> range = series.HorizontalRangeKelvins, ice = series.IceFraction;
         Vector<float> least = new(leastIce), missing = new(float.NaN);
+        Vector<int> any = Vector<int>.Zero;
         int day = begin;
         for (; day <= end - Vector<float>.Count; day += Vector<float>.Count)
         {
             Vector<int> enough = Vector.GreaterThanOrEqual(new Vector<float>(ice[day..]), least);
             Vector.ConditionalSelect(enough, new Vector<float>(range[day..]), missing).CopyTo(usable, Pad + day);
+            any |= enough;
         }
 
+        bool found = any != Vector<int>.Zero;
         for (; day < end; day++)
         {
             usable[Pad + day] = ice[day] >= leastIce ? range[day] : float.NaN;
+            found |= ice[day] >= leastIce;
         }
 
-        usable.AsSpan(Pad + end).Fill(float.NaN);
+        usable.AsSpan(Pad + end, past - Pad - end).Fill(float.NaN);
+        return found;
     }
 
     // One search; positions are those of the series.
@@ -67,14 +76,15 @@ public static class HorizontalRangeMelt
         private readonly ReadOnlySpan<float> ice = ice;
         private readonly ReadOnlySpan<float> ranges = room.Usable.AsSpan(Pad, end);
         private readonly HorizontalRangeRules limits = rules.HorizontalRange;
-        private bool spreadsReady;
+        private int spreadsFrom; // Spreads are known from the first of these positions until before the second.
+        private int spreadsUntil;
         private double drop = double.NaN; // Below it the snow is wet, where the test gave the date and it was moved.
 
         public SeasonDate Find()
         {
             float dryAbove = (float)limits.DryAboveKelvins, wetBelow = (float)limits.WetBelowKelvins, change = (float)limits.LeastChangeKelvins;
             int dry = -1; // The last day that is known to be dry.
-            for (int day = begin; day <= search.Last; day++)
+            for (int day = begin; day <= search.Last && day < end; day++)
             {
                 float range = ranges[day];
                 if (day < search.First || range > dryAbove || float.IsNaN(range))
@@ -206,13 +216,13 @@ public static class HorizontalRangeMelt
         // How much more the range spreads from a day on than before it, in K; NaN with too few days on either side.
         private float GrowthAt(int day)
         {
-            if (!spreadsReady)
+            int at = Pad + day - limits.LeadDays, before = at - limits.TestDays;
+            if (at >= spreadsUntil || before < spreadsFrom)
             {
-                SlidingSpread.Fill(room, Pad + search.First - limits.TestDays - limits.LeadDays, Pad + search.Last + 1 + limits.TestDays, limits.TestDays);
-                spreadsReady = true;
+                (spreadsFrom, spreadsUntil) = (before, at + SpreadsAtOnce);
+                SlidingSpread.Fill(room, spreadsFrom, spreadsUntil, limits.TestDays);
             }
 
-            int at = Pad + day - limits.LeadDays, before = at - limits.TestDays;
             return room.Count[at] >= limits.LeastTestDays && room.Count[before] >= limits.LeastTestDays
                 ? room.Range[at] - room.Range[before]
                 : float.NaN;

@@ -41,8 +41,13 @@ public static class IndicatorMelt
             return (none, none, null);
         }
 
-        MeltIndicators.Fill(series, begin, end, rules, backward: false, room);
-        if (MeltReference.Measure(winter, rules.Indicators, room) is not { } reference)
+        bool measurable = MeltIndicators.HasIce(series, winter, rules);
+        if (measurable)
+        {
+            MeltIndicators.Fill(series, begin, end, rules, backward: false, room);
+        }
+
+        if ((measurable ? MeltReference.Measure(winter, rules.Indicators, room) : null) is not { } reference)
         {
             SeasonDate none = Unmeasured(series.IceFraction, days, winter, search);
             return (none, none, null);
@@ -66,8 +71,13 @@ public static class IndicatorMelt
             return (none, none);
         }
 
-        MeltIndicators.Fill(series, begin, end, rules, backward: true, room);
-        if ((MeltReference.Measure(winter, rules.Indicators, room) ?? winterBefore) is not { } reference)
+        bool measurable = MeltIndicators.HasIce(series, winter, rules);
+        if (measurable || winterBefore is not null)
+        {
+            MeltIndicators.Fill(series, begin, end, rules, backward: true, room);
+        }
+
+        if (((measurable ? MeltReference.Measure(winter, rules.Indicators, room) : null) ?? winterBefore) is not { } reference)
         {
             SeasonDate none = Unmeasured(series.IceFraction, days, winter, search);
             return (none, none);

@@ -39,11 +39,12 @@ public sealed record MeltIndicatorRules
     /// <param name="interruptDays">A run of so many days ends a freeze-up that had come, 1 or more and no more than the last.</param>
     /// <param name="summerDays">The first days of the freeze window, which tell how the melting cell looks; 0 or more.</param>
     /// <param name="leastWinterDays">A winter tells how a cell looks with so many usable days, 3 or more.</param>
-    /// <param name="spreadDays">What the limits of a date are widened by on either side, 0 or more days.</param>
+    /// <param name="spreadDays">What the limits of a date of melt are widened by on either side, 0 or more days.</param>
+    /// <param name="freezeSpreadDays">The same of a date of freeze-up.</param>
     /// <exception cref="ArgumentOutOfRangeException">A number is out of its range.</exception>
     public MeltIndicatorRules(
         MeltIndicator jump, MeltIndicator gradient, MeltIndicator level, MeltIndicator horizontalRange,
-        int jumpDays, double meltScore, double scoreError, int persistDays, int interruptDays, int summerDays, int leastWinterDays, int spreadDays)
+        int jumpDays, double meltScore, double scoreError, int persistDays, int interruptDays, int summerDays, int leastWinterDays, int spreadDays, int freezeSpreadDays)
     {
         ArgumentOutOfRangeException.ThrowIfNegativeOrZero(jump.Weight + gradient.Weight + level.Weight + horizontalRange.Weight);
         ArgumentOutOfRangeException.ThrowIfLessThan(jumpDays, 1);
@@ -56,9 +57,10 @@ public sealed record MeltIndicatorRules
         ArgumentOutOfRangeException.ThrowIfNegative(summerDays);
         ArgumentOutOfRangeException.ThrowIfLessThan(leastWinterDays, 3);
         ArgumentOutOfRangeException.ThrowIfNegative(spreadDays);
+        ArgumentOutOfRangeException.ThrowIfNegative(freezeSpreadDays);
         (Jump, Gradient, Level, HorizontalRange, JumpDays) = (jump, gradient, level, horizontalRange, jumpDays);
         (MeltScore, ScoreError, PersistDays, InterruptDays) = (meltScore, scoreError, persistDays, interruptDays);
-        (SummerDays, LeastWinterDays, SpreadDays) = (summerDays, leastWinterDays, spreadDays);
+        (SummerDays, LeastWinterDays, SpreadDays, FreezeSpreadDays) = (summerDays, leastWinterDays, spreadDays, freezeSpreadDays);
     }
 
     /// <summary>37 GHz vertical above its mean over the days before; scatter in K.</summary>
@@ -94,6 +96,9 @@ public sealed record MeltIndicatorRules
     /// <summary>A winter tells how a cell looks with so many usable days.</summary>
     public int LeastWinterDays { get; }
 
-    /// <summary>What the limits of a date are widened by on either side. Unit: days.</summary>
+    /// <summary>What the limits of a date of melt are widened by on either side. Unit: days.</summary>
     public int SpreadDays { get; }
+
+    /// <summary>The same of a date of freeze-up. Unit: days.</summary>
+    public int FreezeSpreadDays { get; }
 }

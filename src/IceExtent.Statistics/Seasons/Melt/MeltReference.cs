@@ -1,3 +1,6 @@
+using System.Runtime.InteropServices;
+using System.Runtime.Intrinsics;
+
 namespace IceExtent.Statistics.Seasons;
 
 /// <summary>How the frozen cell looks: mean and scatter of its indicators over a winter, ready for the sum of z-scores.</summary>
@@ -12,54 +15,55 @@ internal readonly record struct MeltReference(MeltReference.Scaled Jump, MeltRef
     /// <param name="room">The indicators, as <see cref="MeltIndicators.Fill"/> wrote them.</param>
     public static MeltReference? Measure(SearchSpan winter, MeltIndicatorRules rules, MeltWorkspace room)
     {
-        int count = 0;
-        Moments jump = default, gradient = default, level = default, range = default;
-        for (int at = MeltIndicators.Pad + winter.First; at <= MeltIndicators.Pad + winter.Last; at++)
-        {
-            if (float.IsNaN(room.Usable[at]))
-            {
-                continue;
-            }
+        int from = MeltIndicators.Pad + winter.First, length = winter.Last - winter.First + 1;
+        int count = length > 0 ? (int)Sums(room.Present.AsSpan(from, length)).Sum : 0;
+        return count < rules.LeastWinterDays ? null : new(
+            Scale(room.Count.AsSpan(from, length), count, rules.Jump, 1.0),
+            Scale(room.High.AsSpan(from, length), count, rules.Gradient, 1.0),
+            Scale(room.Low.AsSpan(from, length), count, rules.Level, 1.0),
+            Scale(room.Range.AsSpan(from, length), count, rules.HorizontalRange, -1.0));
+    }
 
-            count++;
-            jump.Add(room.Count[at]);
-            gradient.Add(room.High[at]);
-            level.Add(room.Low[at]);
-            range.Add(room.Range[at]);
+    private static Scaled Scale(ReadOnlySpan<float> values, int count, MeltIndicator indicator, double sign)
+    {
+        if (indicator.Weight == 0.0)
+        {
+            return default;
         }
 
-        return count < rules.LeastWinterDays ? null : new(
-            jump.Scale(count, rules.Jump, 1.0),
-            gradient.Scale(count, rules.Gradient, 1.0),
-            level.Scale(count, rules.Level, 1.0),
-            range.Scale(count, rules.HorizontalRange, -1.0));
+        (double sum, double squares) = Sums(values);
+        double mean = sum / count;
+        double scatter = Math.Sqrt(Math.Max(0.0, (squares - (sum * mean)) / (count - 1)));
+        double factor = sign * indicator.Weight / Math.Max(scatter, indicator.LeastScatter);
+        return new((float)factor, -factor * mean);
+    }
+
+    // Four sums side by side, the same on every machine, of the values that are there.
+    private static (double Sum, double Squares) Sums(ReadOnlySpan<float> values)
+    {
+        Vector256<double> sums = Vector256<double>.Zero, squares = Vector256<double>.Zero;
+        ref float start = ref MemoryMarshal.GetReference(values);
+        int at = 0;
+        for (; at <= values.Length - Vector128<float>.Count; at += Vector128<float>.Count)
+        {
+            Vector128<float> four = Vector128.LoadUnsafe(ref start, (nuint)at);
+            four = Vector128.ConditionalSelect(Vector128.Equals(four, four), four, Vector128<float>.Zero);
+            Vector256<double> wide = Vector256.Create(Vector128.WidenLower(four), Vector128.WidenUpper(four));
+            sums += wide;
+            squares += wide * wide;
+        }
+
+        (double sum, double square) = (Vector256.Sum(sums), Vector256.Sum(squares));
+        for (; at < values.Length; at++)
+        {
+            double value = float.IsNaN(values[at]) ? 0.0 : values[at];
+            sum += value;
+            square += value * value;
+        }
+
+        return (sum, square);
     }
 
     /// <summary>One indicator's part of the sum: value times factor, and shift.</summary>
     internal readonly record struct Scaled(float Factor, double Shift);
-
-    private struct Moments
-    {
-        private double first;
-        private double sum;
-        private double squares;
-        private bool begun;
-
-        // About the first value, so that little is lost.
-        public void Add(double value)
-        {
-            first = begun ? first : value;
-            begun = true;
-            sum += value - first;
-            squares += (value - first) * (value - first);
-        }
-
-        public readonly Scaled Scale(int count, MeltIndicator indicator, double sign)
-        {
-            double mean = sum / count;
-            double scatter = Math.Sqrt(Math.Max(0.0, (squares - (count * mean * mean)) / (count - 1)));
-            double factor = sign * indicator.Weight / Math.Max(scatter, indicator.LeastScatter);
-            return new((float)factor, -factor * (first + mean));
-        }
-    }
 }

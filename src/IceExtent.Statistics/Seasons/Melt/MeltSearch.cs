@@ -13,7 +13,7 @@ internal ref struct MeltSearch(ReadOnlySpan<float> ice, SeriesDays days, SearchS
     {
         (float limit, float leastIce) = ((float)limits.MeltScore, (float)rules.LeastIceFraction);
         int frozen = -1, early = -1, earlyFrozen = -1, start = -1, startFrozen = -1;
-        for (int day = begin; day < end && (day <= search.Last || start >= 0); day++)
+        for (int day = FirstMelt(limit, ref frozen); day < end && (day <= search.Last || start >= 0); day++)
         {
             float score = scores[day];
             if (score < limit)
@@ -36,6 +36,25 @@ internal ref struct MeltSearch(ReadOnlySpan<float> ice, SeriesDays days, SearchS
         }
 
         return (early < 0 ? Without(frozen) : Date(early, earlyFrozen), Without(frozen));
+    }
+
+    // The first day of the window that looks like melt, or the one after the window; and the last frozen day before it.
+    private readonly int FirstMelt(float limit, ref int frozen)
+    {
+        int day = search.First;
+        while (day <= search.Last && !(scores[day] >= limit))
+        {
+            day++;
+        }
+
+        int before = day - 1;
+        while (before >= begin && !(scores[before] < limit))
+        {
+            before--;
+        }
+
+        frozen = before >= begin ? before : frozen;
+        return day;
     }
 
     private readonly SeasonDate Date(int day, int frozen)

@@ -3,7 +3,7 @@ namespace IceExtent.Statistics.Seasons;
 /// <summary>Room for finding melt dates. One for each thread.</summary>
 public sealed class MeltWorkspace
 {
-    private const int Margin = 80; // Windows reach beyond the last day, and whole vectors beyond them.
+    private const int Margin = 192; // Windows reach before the first day and beyond the last, and whole vectors beyond them.
 
     /// <summary>Makes room.</summary>
     /// <param name="mostDays">The longest series, 1 day or more.</param>
@@ -11,7 +11,7 @@ public sealed class MeltWorkspace
     {
         ArgumentOutOfRangeException.ThrowIfLessThan(mostDays, 1);
         MostDays = mostDays;
-        int length = mostDays + (2 * Margin);
+        int length = mostDays + Margin;
         (Usable, Score, Range, Count) = (new float[length], new float[length], new float[length], new float[length]);
         (Low, High, Lagged, Present) = (new float[length], new float[length], new float[length], new float[length]);
     }
