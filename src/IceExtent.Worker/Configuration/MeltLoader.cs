@@ -1,108 +1,100 @@
 using IceExtent.Grids;
 using IceExtent.Statistics.Seasons;
+using IceExtent.Storage.Faults;
 
 namespace IceExtent.Worker.Configuration;
 
-/// <summary>Reads the table [melt] of a run file.</summary>
-internal sealed class MeltLoader(LayeredScope layered)
+/// <summary>Reads the table [melt].</summary>
+internal static class MeltLoader
 {
-    private const string Table = "melt";
+    private const int MostDays = 60;
 
     /// <summary>Checks the table.</summary>
-    /// <param name="layered">The run file over the defaults.</param>
-    /// <param name="grid">The grid of the run, whose hemisphere has its own windows; null where it could not be read.</param>
+    /// <param name="run">The run file.</param>
+    /// <param name="defaults">config/defaults.toml.</param>
+    /// <param name="hemisphere">The hemisphere of the grid.</param>
+    /// <param name="faults">Receives faults.</param>
     /// <returns>The settings, or null after adding faults.</returns>
-    public static MeltSettings? Load(LayeredScope layered, Grid? grid)
+    public static MeltSettings? Load(ConfigScope run, ConfigScope defaults, Hemisphere hemisphere, List<Fault> faults)
     {
-        MeltLoader loader = new(layered);
-        bool? signals = layered.Flag(Table, "signals");
-        double? ice = layered.Number(Table, "least_ice_fraction", 0.15, 1.0, string.Empty);
-        int? gap = layered.WholeNumber(Table, "gap_days", 0, 30);
-        MeltCalendar? north = loader.Calendar("north"), south = loader.Calendar("south");
-        HorizontalRangeRules? range = loader.HorizontalRange();
-        MeltIndicatorRules? indicators = loader.Indicators();
-        return signals is null || ice is null || gap is null || north is null || south is null || range is null || indicators is null || grid is null
+        int before = faults.Count;
+        ConfigScope? own = run.Table("melt", required: false) ?? run.Empty("melt");
+        if (defaults.Table("melt") is not { } shipped)
+        {
+            return null;
+        }
+
+        SchemeScope scope = new(own, shipped);
+        bool signals = scope.Flag("signals");
+        double ice = scope.Number("least_ice_fraction", 0.15, 1.0);
+        int gap = scope.WholeNumber("gap_days", 0, 30);
+        MeltCalendar?[] calendars = [Calendar(scope, "north"), Calendar(scope, "south")];
+        HorizontalRangeRules? range = HorizontalRange(scope, faults);
+        MeltIndicatorRules? indicators = Indicators(scope, faults);
+        own.RefuseUnknown();
+        shipped.RefuseUnknown();
+        return faults.Count > before || calendars[hemisphere == Hemisphere.North ? 0 : 1] is not { } calendar
             ? null
-            : new(signals.Value, new(grid.Hemisphere == Hemisphere.North ? north : south, ice.Value, gap.Value, range, indicators));
+            : new(signals, new(calendar, ice, gap, range!, indicators!));
     }
 
-    private MeltCalendar? Calendar(string hemisphere)
+    private static MeltCalendar? Calendar(SchemeScope scope, string hemisphere)
     {
-        CalendarWindow? melt = Window(hemisphere, "melt"), winter = Window(hemisphere, "winter");
-        CalendarWindow? freeze = Window(hemisphere, "freeze"), next = Window(hemisphere, "next_winter");
+        CalendarWindow? melt = scope.Window($"{hemisphere}_melt"), winter = scope.Window($"{hemisphere}_winter");
+        CalendarWindow? freeze = scope.Window($"{hemisphere}_freeze"), next = scope.Window($"{hemisphere}_next_winter");
         return melt is null || winter is null || freeze is null || next is null ? null : new(melt.Value, winter.Value, freeze.Value, next.Value);
     }
 
-    private CalendarWindow? Window(string hemisphere, string name)
+    private static HorizontalRangeRules? HorizontalRange(SchemeScope scope, List<Fault> faults)
     {
-        int? from = Whole($"{hemisphere}_{name}_from_day", 1, 365), to = Whole($"{hemisphere}_{name}_to_day", 1, 365);
-        return from is null || to is null ? null : new(from.Value, to.Value);
+        int before = faults.Count;
+        double dry = scope.Number("horizontal_range_dry_k", -20.0, 40.0), wet = scope.Number("horizontal_range_wet_k", -60.0, 20.0);
+        int test = scope.WholeNumber("horizontal_range_test_days", 2, HorizontalRangeRules.MostTestDays);
+        int least = scope.WholeNumber("horizontal_range_least_days", 2, HorizontalRangeRules.MostTestDays);
+        double change = scope.Number("horizontal_range_change_k", 0.1, 60.0), error = scope.Number("horizontal_range_error_k", 0.0, 20.0);
+        int lead = scope.WholeNumber("horizontal_range_lead_days", 0, HorizontalRangeRules.MostLeadDays);
+        int spread = scope.WholeNumber("horizontal_range_spread_days", 0, MostDays);
+        if (faults.Count == before && wet >= dry)
+        {
+            scope.Refuse("horizontal_range_wet_k", FormattableString.Invariant($"{wet}, not below horizontal_range_dry_k = {dry}"), "a range below horizontal_range_dry_k");
+        }
+
+        if (faults.Count == before && least > test)
+        {
+            scope.Refuse("horizontal_range_least_days", FormattableString.Invariant($"{least} of horizontal_range_test_days = {test}"), "no more days than are tested");
+        }
+
+        if (faults.Count == before && lead >= test)
+        {
+            scope.Refuse("horizontal_range_lead_days", FormattableString.Invariant($"{lead} of horizontal_range_test_days = {test}"), "fewer days than are tested");
+        }
+
+        return faults.Count > before ? null : new(dry, wet, test, least, change, lead, error, spread);
     }
 
-    private HorizontalRangeRules? HorizontalRange()
+    private static MeltIndicatorRules? Indicators(SchemeScope scope, List<Fault> faults)
     {
-        double? dry = Number("horizontal_range_dry_k", -20.0, 40.0, "K"), wet = Number("horizontal_range_wet_k", -60.0, 20.0, "K");
-        int? test = Whole("horizontal_range_test_days", 2, HorizontalRangeRules.MostTestDays), least = Whole("horizontal_range_least_days", 2, HorizontalRangeRules.MostTestDays);
-        double? change = Number("horizontal_range_change_k", 0.1, 60.0, "K"), error = Number("horizontal_range_error_k", 0.0, 20.0, "K");
-        int? lead = Whole("horizontal_range_lead_days", 0, HorizontalRangeRules.MostLeadDays), spread = Whole("horizontal_range_spread_days", 0, 60);
-        if (dry is null || wet is null || test is null || least is null || change is null || error is null || lead is null || spread is null)
+        int before = faults.Count;
+        double[] weights = [.. ((string[])["jump", "gradient", "level", "range"]).Select(name => scope.Number($"indicator_{name}_weight", 0.0, 100.0))];
+        double[] scatter = [.. ((string[])["jump_scatter_k", "gradient_scatter", "level_scatter_k", "range_scatter_k"]).Select(name => scope.Number($"indicator_{name}", 1e-6, 100.0))];
+        int jumpDays = scope.WholeNumber("indicator_jump_days", 1, MeltIndicatorRules.MostJumpDays);
+        double score = scope.Number("indicator_score", 0.1, 1_000.0), error = scope.Number("indicator_score_error", 0.0, 100.0);
+        int persist = scope.WholeNumber("indicator_persist_days", 1, MostDays), interrupt = scope.WholeNumber("indicator_interrupt_days", 1, MostDays);
+        int summer = scope.WholeNumber("indicator_summer_days", 0, 120), winter = scope.WholeNumber("indicator_winter_days", 3, 180);
+        int spread = scope.WholeNumber("indicator_spread_days", 0, MostDays), freezeSpread = scope.WholeNumber("indicator_freeze_spread_days", 0, MostDays);
+        if (faults.Count == before && interrupt > persist)
         {
-            return null;
+            scope.Refuse("indicator_interrupt_days", FormattableString.Invariant($"{interrupt}, above indicator_persist_days = {persist}"), "no more than indicator_persist_days");
         }
 
-        if (wet >= dry)
+        if (faults.Count == before && weights.Sum() == 0.0)
         {
-            return Refuse<HorizontalRangeRules>("horizontal_range_wet_k", FormattableString.Invariant($"{wet}, not below horizontal_range_dry_k = {dry}"), "a range below horizontal_range_dry_k");
+            scope.Refuse("indicator_jump_weight", "0, as in all four indicators", "a weight above 0 in one of them");
         }
 
-        if (least > test)
-        {
-            return Refuse<HorizontalRangeRules>("horizontal_range_least_days", FormattableString.Invariant($"{least} of horizontal_range_test_days = {test}"), "no more days than are tested");
-        }
-
-        return lead >= test
-            ? Refuse<HorizontalRangeRules>("horizontal_range_lead_days", FormattableString.Invariant($"{lead} of horizontal_range_test_days = {test}"), "fewer days than are tested")
-            : new(dry.Value, wet.Value, test.Value, least.Value, change.Value, lead.Value, error.Value, spread.Value);
-    }
-
-    private MeltIndicatorRules? Indicators()
-    {
-        MeltIndicator? jump = Indicator("jump", "_k"), gradient = Indicator("gradient", string.Empty), level = Indicator("level", "_k"), range = Indicator("range", "_k");
-        int? jumpDays = Whole("indicator_jump_days", 1, MeltIndicatorRules.MostJumpDays), persist = Whole("indicator_persist_days", 1, 60);
-        int? interrupt = Whole("indicator_interrupt_days", 1, 60), summer = Whole("indicator_summer_days", 0, 120), winter = Whole("indicator_winter_days", 3, 180);
-        double? score = Number("indicator_score", 0.1, 1_000.0, string.Empty), error = Number("indicator_score_error", 0.0, 100.0, string.Empty);
-        int? spread = Whole("indicator_spread_days", 0, 60), freezeSpread = Whole("indicator_freeze_spread_days", 0, 60);
-        if (jump is null || gradient is null || level is null || range is null || jumpDays is null || persist is null || interrupt is null || summer is null
-            || winter is null || score is null || error is null || spread is null || freezeSpread is null)
-        {
-            return null;
-        }
-
-        if (interrupt > persist)
-        {
-            return Refuse<MeltIndicatorRules>("indicator_interrupt_days", FormattableString.Invariant($"{interrupt}, above indicator_persist_days = {persist}"), "no more than indicator_persist_days");
-        }
-
-        return jump.Value.Weight + gradient.Value.Weight + level.Value.Weight + range.Value.Weight > 0.0
-            ? new(jump.Value, gradient.Value, level.Value, range.Value, jumpDays.Value, score.Value, error.Value, persist.Value, interrupt.Value, summer.Value, winter.Value, spread.Value, freezeSpread.Value)
-            : Refuse<MeltIndicatorRules>("indicator_jump_weight", "0 in all four indicators", "a weight above 0 in one of them");
-    }
-
-    private MeltIndicator? Indicator(string name, string unit)
-    {
-        double? weight = Number($"indicator_{name}_weight", 0.0, 100.0, string.Empty);
-        double? scatter = Number($"indicator_{name}_scatter{unit}", 1e-6, 100.0, unit.Length == 0 ? string.Empty : "K");
-        return weight is null || scatter is null ? null : new(weight.Value, scatter.Value);
-    }
-
-    private int? Whole(string key, int lowest, int highest) => layered.WholeNumber(Table, key, lowest, highest);
-
-    private double? Number(string key, double lowest, double highest, string unit) => layered.Number(Table, key, lowest, highest, unit);
-
-    private T? Refuse<T>(string key, string found, string allowed)
-        where T : class
-    {
-        layered.Refuse(Table, key, found, allowed);
-        return null;
+        MeltIndicator Indicator(int index) => new(weights[index], scatter[index]);
+        return faults.Count > before
+            ? null
+            : new(Indicator(0), Indicator(1), Indicator(2), Indicator(3), jumpDays, score, error, persist, interrupt, summer, winter, spread, freezeSpread);
     }
 }

@@ -43,7 +43,7 @@ internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction
         TiePointSettings? tiePoints = TiePointLoader.Load(layered, ice ?? double.NaN);
         WeatherSettings? weather = WeatherLoader.Load(layered, grid, folder, faults);
         SeasonSettings? season = SeasonLoader.LoadAnyway(own, shipped, config, grid.Hemisphere, folder, faults);
-        MeltSettings? melt = MeltLoader.Load(layered, grid);
+        MeltSettings? melt = MeltLoader.Load(own, shipped, grid.Hemisphere, faults);
         layered.RefuseUnknown();
         own.RefuseUnknown();
         return faults.Count == 0

@@ -8,7 +8,8 @@ namespace IceExtent.Statistics.Seasons;
 public sealed record MeltCalendar(CalendarWindow Melt, CalendarWindow Winter, CalendarWindow Freeze, CalendarWindow NextWinter)
 {
     /// <summary>The four windows of one ice year.</summary>
-    public MeltWindows In(IceYear year) => new(Melt.In(year), Winter.In(year), Freeze.In(year), NextWinter.In(year));
+    public MeltWindows In(IceYear year) => new(
+        SeasonWindow.Of(Melt, year), SeasonWindow.Of(Winter, year), SeasonWindow.Of(Freeze, year), SeasonWindow.Of(NextWinter, year));
 }
 
 /// <summary>The windows of one ice year, in days from its first day.</summary>
@@ -16,4 +17,4 @@ public sealed record MeltCalendar(CalendarWindow Melt, CalendarWindow Winter, Ca
 /// <param name="Winter">The winter before it.</param>
 /// <param name="Freeze">Where freeze-up may lie.</param>
 /// <param name="NextWinter">The winter after it.</param>
-public readonly record struct MeltWindows(DayRange Melt, DayRange Winter, DayRange Freeze, DayRange NextWinter);
+public readonly record struct MeltWindows(SeasonWindow Melt, SeasonWindow Winter, SeasonWindow Freeze, SeasonWindow NextWinter);

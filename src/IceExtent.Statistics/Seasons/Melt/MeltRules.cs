@@ -38,7 +38,7 @@ public sealed record MeltRules
 
     /// <summary>The days that a series should hold round the windows of an ice year, in days from its first day.</summary>
     /// <remarks>With fewer the dates still come out, from what is there.</remarks>
-    public DayRange Needed(MeltWindows windows)
+    public SeasonWindow Needed(MeltWindows windows)
     {
         int before = Math.Max(HorizontalRange.TestDays + HorizontalRange.LeadDays, Indicators.JumpDays);
         int after = Math.Max(HorizontalRange.TestDays, Indicators.PersistDays);

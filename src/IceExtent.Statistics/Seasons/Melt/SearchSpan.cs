@@ -7,7 +7,7 @@ namespace IceExtent.Statistics.Seasons;
 /// <param name="EndsEarly">Whether it goes on after the record.</param>
 internal readonly record struct SearchSpan(int First, int Last, bool StartsLate, bool EndsEarly)
 {
-    public static SearchSpan Of(DayRange window, SeriesDays days, int length)
+    public static SearchSpan Of(SeasonWindow window, SeriesDays days, int length)
     {
         int begin = days.IndexOf(window.First), end = days.IndexOf(window.Last);
         int first = Math.Max(0, days.RecordFirst), last = Math.Min(length - 1, days.RecordLast);
