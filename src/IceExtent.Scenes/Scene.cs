@@ -22,6 +22,7 @@ public sealed class Scene
 
     private readonly IceCover ice;
     private readonly Weather weather;
+    private readonly MeltSeason? meltSeason;
     private readonly Instrument instrument;
     private readonly Coverage coverage;
     private readonly EmissionKernel[] kernels;
@@ -60,12 +61,16 @@ public sealed class Scene
         SeasonClock clock = new(parameters.Season, Draws.Key(key, 1));
         ice = new(parameters.Ice, clock, grid, land, Draws.Key(key, 2));
         weather = new(parameters.Weather, parameters.Surfaces, grid, Draws.Key(key, 3));
+        meltSeason = parameters.MeltSeason.Imposed
+            ? new(parameters.MeltSeason, parameters.Weather.FreezingKelvins, parameters.Surfaces.AirShareInIce, grid, Draws.Key(key, 7))
+            : null;
         ulong own = radiometer == FirstRadiometer ? key : Draws.Key(Draws.Key(key, 6), radiometer);
         instrument = new(parameters.Instrument, sensor.FirstDay, grid.Frame.CellMeters, Draws.Key(own, 4));
         coverage = new(parameters.Coverage, sensor.FirstDay, sensor.PolarGapLatitudeDegrees, grid, Draws.Key(own, 5));
 
         SurfaceEmission surfaces = new(
-            parameters.Surfaces, parameters.Instrument.IncidenceDegrees, sensor, sensor.In(grid.Hemisphere).TiePoints);
+            parameters.MeltSeason.Imposed ? parameters.Surfaces with { WetIceEmissivity = parameters.MeltSeason.WetIceEmissivity } : parameters.Surfaces,
+            parameters.Instrument.IncidenceDegrees, sensor, sensor.In(grid.Hemisphere).TiePoints);
         Channels = surfaces.Channels;
         kernels = [.. Channels.Select(channel => OceanConstants.BandOf(channel)!).Distinct().Select(band =>
             new EmissionKernel(surfaces, band, parameters.Weather.FreezingKelvins, parameters.Weather.WarmestSeaKelvins))];
@@ -134,6 +139,40 @@ public sealed class Scene
         }
     }
 
+    /// <summary>Whether each cell has a melt season of its own: see <see cref="MeltTurns"/>.</summary>
+    public bool HasMeltSeason => meltSeason is not null;
+
+    /// <summary>Writes when the ice of each cell turns wet and dry in the season that begins in a calendar year.</summary>
+    /// <param name="year">The year in which the ice turns wet.</param>
+    /// <param name="workspace">Room of this scene.</param>
+    /// <param name="wet">
+    /// Receives the first day on which the surface of ice is more wet than dry at noon, on the scale of
+    /// <see cref="DateOnly.DayNumber"/>, for cells without ice too. Shape: one value a cell, row-major; none missing.
+    /// </param>
+    /// <param name="dry">The same of the first day after them on which it is more dry than wet, and stays so.</param>
+    /// <exception cref="InvalidOperationException">The weather decides in this scene.</exception>
+    /// <exception cref="ArgumentException">The workspace belongs to another scene, or a plane has another length.</exception>
+    public void MeltTurns(int year, SceneWorkspace workspace, Span<int> wet, Span<int> dry)
+    {
+        Check(workspace);
+        if (meltSeason is null)
+        {
+            throw new InvalidOperationException("No melt season is imposed: melt comes and goes with the weather in this scene.");
+        }
+
+        if (wet.Length != Grid.CellCount || dry.Length != Grid.CellCount)
+        {
+            throw new ArgumentException($"The planes have {wet.Length} and {dry.Length} cells; the grid has {Grid.CellCount}.", nameof(wet));
+        }
+
+        meltSeason.FillTurns(year, workspace.Scratch, workspace.First, workspace.Second);
+        for (int cell = 0; cell < wet.Length; cell++)
+        {
+            wet[cell] = MeltSeason.DayNumberOf(year, workspace.First[cell]);
+            dry[cell] = MeltSeason.DayNumberOf(year, workspace.Second[cell]);
+        }
+    }
+
     /// <summary>Writes what the radiometer reports for a day.</summary>
     /// <param name="day">The day, UTC.</param>
     /// <param name="workspace">Room of this scene.</param>
@@ -178,6 +217,7 @@ public sealed class Scene
         ice.Fill(time, workspace.Scratch, (workspace.First, workspace.Second), workspace.Cells);
         weather.Fill(
             time, ice.Clock.Summerness(time), workspace.Scratch, (workspace.First, workspace.Second), workspace.Storms, workspace.Cells);
+        meltSeason?.Impose(time, workspace.Scratch, (workspace.First, workspace.Second), workspace.Cells);
     }
 
     private static double TimeOf(DateOnly day) => day.DayNumber + 0.5;

@@ -6,6 +6,8 @@ namespace IceExtent.Scenes.Parameters;
 /// <summary>Range checks on the parameters of a scene.</summary>
 public sealed class SceneCheck
 {
+    private static readonly Channel[] MadeChannels = [Channel.V19, Channel.H19, Channel.V22, Channel.V37, Channel.H37];
+
     private readonly List<SceneProblem> problems = [];
 
     private SceneCheck()
@@ -21,6 +23,7 @@ public sealed class SceneCheck
         check.Ice(parameters.Ice);
         check.Weather(parameters.Weather);
         check.Storms(parameters.Weather.Storms);
+        check.MeltSeason(parameters.MeltSeason);
         check.Surfaces(parameters.Surfaces);
         check.Instrument(parameters.Instrument);
         check.Coverage(parameters.Coverage);
@@ -116,6 +119,23 @@ public sealed class SceneCheck
         InRange("weather.storms.warming_kelvins", storms.WarmingKelvins, 0, 30, "K");
     }
 
+    private void MeltSeason(MeltSeasonParameters season)
+    {
+        InRange("melt_season.onset_day_of_year", season.OnsetDayOfYear, 1, 365, "day");
+        InRange("melt_season.onset_days_per_degree", season.OnsetDaysPerDegree, 0, 5, "days a degree");
+        InRange("melt_season.freeze_day_of_year", season.FreezeDayOfYear, 1, 365, "day");
+        InRange("melt_season.freeze_days_per_degree", season.FreezeDaysPerDegree, -5, 0, "days a degree");
+        InRange("melt_season.spread_days", season.SpreadDays, 0, 20, "days");
+        InRange("melt_season.node_kilometers", season.NodeKilometers, 50, 10_000, "km");
+        InRange("melt_season.turn_days", season.TurnDays, 0.1, 20, "days");
+        InRange("melt_season.early_melt_share", season.EarlyMeltShare, 0, 0.45, "1");
+        InRange("melt_season.refreeze_share", season.RefreezeShare, 0, 0.45, "1");
+        foreach (Channel channel in MadeChannels)
+        {
+            Emissivity("melt_season.wet_ice_emissivity", season.WetIceEmissivity, channel);
+        }
+    }
+
     private void Surfaces(SurfaceParameters surfaces)
     {
         InRange("surfaces.reference.sea_kelvins", surfaces.Reference.SeaKelvins, 271, 300, "K");
@@ -128,7 +148,7 @@ public sealed class SceneCheck
         InRange("surfaces.wet_from_kelvins", surfaces.WetFromKelvins, 250, 280, "K");
         InRange("surfaces.wet_to_kelvins", surfaces.WetToKelvins, surfaces.WetFromKelvins + 0.1, 290, "K");
         Share("surfaces.highest_pond_share", surfaces.HighestPondShare);
-        foreach (Channel channel in (ReadOnlySpan<Channel>)[Channel.V19, Channel.H19, Channel.V22, Channel.V37, Channel.H37])
+        foreach (Channel channel in MadeChannels)
         {
             Emissivity("surfaces.wet_ice_emissivity", surfaces.WetIceEmissivity, channel);
             Emissivity("surfaces.land_emissivity", surfaces.LandEmissivity, channel);

@@ -19,6 +19,9 @@ public sealed record SceneParameters
     /// <summary>Sea, air, wind, vapor and cloud.</summary>
     public required WeatherParameters Weather { get; init; }
 
+    /// <summary>A melt season with a day of its own in every cell.</summary>
+    public required MeltSeasonParameters MeltSeason { get; init; }
+
     /// <summary>How the surfaces emit.</summary>
     public required SurfaceParameters Surfaces { get; init; }
 

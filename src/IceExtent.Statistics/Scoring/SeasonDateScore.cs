@@ -12,6 +12,9 @@ public sealed class SeasonDateScore
     private int sameState;
     private int cells;
 
+    /// <summary>All cells taken.</summary>
+    public int Cells => cells;
+
     /// <summary>Cells whose date is found in both.</summary>
     public int Dated => errors.Count;
 
@@ -32,6 +35,9 @@ public sealed class SeasonDateScore
 
     /// <summary>Share of the dated cells that err by no more than so many days.</summary>
     public double Within(int days) => errors.Count == 0 ? double.NaN : (double)errors.Count(error => Math.Abs(error) <= days) / errors.Count;
+
+    /// <summary>The same as a share of all cells taken: those without a date err.</summary>
+    public double WithinOfAll(int days) => cells == 0 ? double.NaN : (double)errors.Count(error => Math.Abs(error) <= days) / cells;
 
     /// <summary>Takes one cell and year.</summary>
     /// <param name="truth">Its true date.</param>

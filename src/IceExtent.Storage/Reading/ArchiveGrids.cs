@@ -1,4 +1,3 @@
-using System.Globalization;
 using IceExtent.Grids;
 using IceExtent.Storage.Faults;
 using IceExtent.Storage.Reading.NetCdf;
@@ -21,27 +20,8 @@ public sealed class ArchiveGrids(ArchiveLayout layout, string method, Grid grid)
     /// <param name="from">The first day wanted, or null.</param>
     /// <param name="to">The last day wanted, or null.</param>
     /// <exception cref="FaultException">IE3110: the method's name cannot be used.</exception>
-    public IReadOnlyList<(DateOnly Day, string Path)> List(DateOnly? from, DateOnly? to)
-    {
-        string years = Path.GetDirectoryName(Path.GetDirectoryName(layout.GridFile(method, grid.Hemisphere, DateOnly.MinValue)))!;
-        if (!Directory.Exists(years))
-        {
-            return [];
-        }
-
-        List<(DateOnly Day, string Path)> found = [];
-        foreach (string path in Directory.EnumerateFiles(years, "*.nc", SearchOption.AllDirectories))
-        {
-            if (DateOnly.TryParseExact(Path.GetFileNameWithoutExtension(path), "yyyy-MM-dd", CultureInfo.InvariantCulture, DateTimeStyles.None, out DateOnly day)
-                && (from is not { } first || day >= first) && (to is not { } last || day <= last)
-                && path == layout.GridFile(method, grid.Hemisphere, day)) // Anything else is not the archive's.
-            {
-                found.Add((day, path));
-            }
-        }
-
-        return [.. found.OrderBy(file => file.Day)];
-    }
+    public IReadOnlyList<(DateOnly Day, string Path)> List(DateOnly? from, DateOnly? to) =>
+        ArchiveDays.List(day => layout.GridFile(method, grid.Hemisphere, day), from, to);
 
     /// <summary>Reads the concentration of one day.</summary>
     /// <param name="path">One of the files listed.</param>

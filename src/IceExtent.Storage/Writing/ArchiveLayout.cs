@@ -70,6 +70,10 @@ public sealed partial class ArchiveLayout
     public string GridFile(string method, Hemisphere hemisphere, DateOnly day) => Path.Join(
         Folder("grids", method, hemisphere, day.Year), day.ToString("yyyy-MM-dd", CultureInfo.InvariantCulture) + ".nc");
 
+    /// <summary>The melt signals of one day; they belong to no single method.</summary>
+    public string MeltSignalFile(Hemisphere hemisphere, DateOnly day) => Path.Join(
+        Path.Join(Root, "melt_signals"), $"hemisphere={NameOf(hemisphere)}", YearFolder(day.Year), day.ToString("yyyy-MM-dd", CultureInfo.InvariantCulture) + ".nc");
+
     /// <summary>The record of one run.</summary>
     /// <param name="name">The run's name.</param>
     /// <exception cref="FaultException">IE3110: the name cannot be used.</exception>

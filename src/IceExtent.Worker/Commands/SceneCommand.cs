@@ -37,6 +37,7 @@ internal static class SceneCommand
         Option<DateOnly?> changeOver = CommonOptions.Day("--change-over", "With --successor: its first day.");
         Option<int> every = CommonOptions.Count("--every", "With --score: take one day of so many.", _ => 5, 366);
         Option<bool> seasons = new("--seasons") { Description = "With --score: hold season dates against the true ones, in every ice year that begins in the period." };
+        Option<bool> imposed = new("--melt-season") { Description = "Give every cell a day on which its ice turns wet, as [melt_season] of the scene says, in place of melt that comes and goes with the weather; with --score: hold melt onset and freeze-up against it." };
         Option<bool> json = CommonOptions.Json();
         Option<int> workers = CommonOptions.Workers();
         (from.Required, to.Required) = (true, true);
@@ -44,21 +45,23 @@ internal static class SceneCommand
             "scene",
             "Write invented brightness temperatures with a known truth, and a run file for them.\n\nExample:\n  iceextent scene --grid north-25km --sensor ssmi-f13 --from 2000-01-01 --to 2000-01-31 --out scene\n  iceextent scene --score --methods nasa-team bristol --from 2000-01-01 --to 2000-12-31 --sensor ssmi-f13")
         {
-            grid, sensor, parameters, from, to, seed, radiometer, noTruth, output, score, methods, coast, settings, successor, changeOver, every, seasons, json, workers,
+            grid, sensor, parameters, from, to, seed, radiometer, noTruth, output, score, methods, coast, settings, successor, changeOver, every, seasons, imposed, json, workers,
         };
         command.SetAction((parsed, cancellation) =>
         {
             (DateOnly first, DateOnly last) = (parsed.GetValue(from)!.Value, parsed.GetValue(to)!.Value);
             CommonOptions.CheckPeriod(first, last);
             (Scene scene, LandShare land, string gridName, string sensorName) = Load(
-                parsed.GetValue(grid)!, parsed.GetValue(sensor)!, parsed.GetValue(parameters), parsed.GetValue(seed), parsed.GetValue(radiometer));
+                parsed.GetValue(grid)!, parsed.GetValue(sensor)!, parsed.GetValue(parameters), parsed.GetValue(seed), parsed.GetValue(radiometer), parsed.GetValue(imposed));
             if (parsed.GetValue(score))
             {
                 SceneDefaults defaults = SceneDefaults.Load(ConfigFolder.BesideProgram, scene.Grid, parsed.GetValue(coast), parsed.GetValue(settings));
-                if (parsed.GetValue(seasons))
+                if (parsed.GetValue(seasons) || parsed.GetValue(imposed))
                 {
                     int[] years = [.. Enumerable.Range(first.Year, last.Year - first.Year + 1).Where(year => defaults.Season.Scheme.YearStart.Beginning(year).FirstDay is var begins && begins >= first && begins <= last)];
-                    return Task.FromResult(SceneScoring.ScoreSeasons(
+                    return Task.FromResult(parsed.GetValue(imposed)
+                        ? SceneScoring.ScoreMelt(scene, years, land, parsed.GetValue(methods)!, defaults, parsed.GetValue(workers), parsed.GetValue(json), console, cancellation)
+                        : SceneScoring.ScoreSeasons(
                         scene, years, land, parsed.GetValue(methods)!, defaults, parsed.GetValue(workers), parsed.GetValue(json), console, cancellation));
                 }
 
@@ -113,7 +116,7 @@ internal static class SceneCommand
         """);
 
     private static (Scene Scene, LandShare Land, string Grid, string Sensor) Load(
-        string grid, string sensor, string? parameters, long seed, int radiometer)
+        string grid, string sensor, string? parameters, long seed, int radiometer, bool imposedMelt = false)
     {
         List<Fault> faults = [];
         ConfigFolder config = ConfigFolder.BesideProgram;
@@ -129,6 +132,7 @@ internal static class SceneCommand
             throw new ConfigurationException(faults);
         }
 
+        scene = imposedMelt ? scene! with { MeltSeason = scene.MeltSeason with { Imposed = true } } : scene;
         LandShare land = LandShareFile.Read(loaded!.LandPath, loaded.Grid);
         return (new Scene(scene!, loaded.Grid, land, sensed!, seed, radiometer), land, Named(grid, gridPath!), Named(sensor, sensorPath!));
     }

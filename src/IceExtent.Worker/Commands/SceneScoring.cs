@@ -74,6 +74,35 @@ internal static class SceneScoring
         return scores.Count == 0 || years.Count == 0 ? ExitCode.NoUsableInput : ExitCode.Done;
     }
 
+    /// <summary>Scores melt onset and freeze-up and prints.</summary>
+    /// <param name="scene">The scene, its melt season imposed.</param>
+    /// <param name="years">The ice years.</param>
+    /// <param name="land">The land of its grid.</param>
+    /// <param name="methods">The methods asked for; the first that the scene can serve says where ice is.</param>
+    /// <param name="defaults">Everything else.</param>
+    /// <param name="workers">How many days are processed at a time.</param>
+    /// <param name="json">Whether the result is printed as JSON.</param>
+    /// <param name="console">Where to.</param>
+    /// <param name="cancellation">Stops.</param>
+    /// <exception cref="ConfigurationException">A method does not exist.</exception>
+    public static int ScoreMelt(
+        Scene scene, IReadOnlyList<int> years, LandShare land, string[] methods, SceneDefaults defaults, int workers, bool json, CommandConsole console, CancellationToken cancellation)
+    {
+        const int CellStep = 3; // Neighbours tell the same; one in nine is enough.
+        if (Usable(scene, methods, console) is not [string method, ..] || years.Count == 0)
+        {
+            return ExitCode.NoUsableInput;
+        }
+
+        MeltScoreReport.Print(new SceneMeltScore(scene, land, method, defaults, CellStep).Run(years, workers, cancellation), json, console);
+        if (!json)
+        {
+            console.Print(SceneCommand.Notice);
+        }
+
+        return ExitCode.Done;
+    }
+
     private static List<string> Usable(Scene scene, string[] methods, CommandConsole console)
     {
         HemisphereTuning tuning = scene.Sensor.In(scene.Grid.Hemisphere);

@@ -53,8 +53,9 @@ internal static class RunFileLoader
         IceMaskRules? iceMask = WeatherLoader.IceMask(layered);
         OverlapSettings? overlap = OverlapLoader.Load(layered, rules);
         PlaceLoader places = new(scope, layered, folder);
+        MeltSettings? melt = MeltLoader.Load(scope, shipped, grid?.Grid.Hemisphere ?? Hemisphere.North, faults);
         layered.RefuseUnknown();
-        SourceLoader sources = new(folder, config, methods, needsFootprints: coast?.InTemperatures == true, needsSamples: tiePoints?.NeedsSamples(methods) ?? false);
+        SourceLoader sources = new(folder, config, methods, needsFootprints: coast?.InTemperatures == true, needsSamples: tiePoints?.NeedsSamples(methods) ?? false, needsSignals: melt?.Signals ?? false);
         List<RunSource?> loaded = [.. scope.Tables("source").Select(source => sources.Load(source, grid?.Grid))];
         scope.RefuseUnknown();
         LandShare? land = grid is null ? null : Land(grid, faults);
@@ -81,6 +82,7 @@ internal static class RunFileLoader
             TiePoints = tiePoints!,
             Weather = weather,
             IceMask = iceMask!,
+            Melt = melt!,
             Methods = methods,
             WriteGrids = writeGrids ?? true,
             Rules = rules!,

@@ -57,6 +57,9 @@ internal sealed record RunSettings
     /// <summary>How an ice mask is made of the archive; decides no number of the archive itself.</summary>
     public required IceMaskRules IceMask { get; init; }
 
+    /// <summary>Whether melt signals are written, and how melt is found.</summary>
+    public required MeltSettings Melt { get; init; }
+
     public required IReadOnlyList<string> Methods { get; init; }
 
     public required bool WriteGrids { get; init; }

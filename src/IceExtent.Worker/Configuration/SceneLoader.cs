@@ -65,6 +65,11 @@ internal static class SceneLoader
             return scope.Text(key);
         }
 
+        if (type == typeof(bool))
+        {
+            return scope.Flag(key);
+        }
+
         if (type == typeof(DateOnly))
         {
             return scope.Date(key);

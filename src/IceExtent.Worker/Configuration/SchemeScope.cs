@@ -3,10 +3,12 @@ using IceExtent.Statistics.Seasons;
 
 namespace IceExtent.Worker.Configuration;
 
-/// <summary>Takes the keys of a season scheme from the first table that has them: run file, the scheme's hemisphere, the scheme, the defaults.</summary>
+/// <summary>Takes keys from the first of several tables that has them, such as run file, the scheme's hemisphere, the scheme and the defaults.</summary>
 internal sealed class SchemeScope(params ConfigScope[] layers)
 {
     private const string DayText = "a day that every year has, such as \"03-01\"";
+
+    public bool Flag(string key) => Take(key, (scope, required) => scope.Flag(key, required)) ?? false;
 
     public double Number(string key, double lowest, double highest) =>
         Take(key, (scope, required) => scope.Number(key, lowest, highest, string.Empty, required)) ?? double.NaN;

@@ -12,7 +12,8 @@ namespace IceExtent.Worker.Configuration;
 /// <param name="methods">The methods of the run.</param>
 /// <param name="needsFootprints">Whether the footprint of every channel must be known.</param>
 /// <param name="needsSamples">Whether samples of pure surfaces are taken.</param>
-internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadOnlyList<string> methods, bool needsFootprints, bool needsSamples)
+/// <param name="needsSignals">Whether melt signals are written.</param>
+internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadOnlyList<string> methods, bool needsFootprints, bool needsSamples, bool needsSignals)
 {
     private static readonly Dictionary<string, RawNumber> Numbers = new(StringComparer.Ordinal)
     {
@@ -124,6 +125,7 @@ internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadO
                 "Map the channel to its variable, or leave self-tuning and tie_points.moving out."));
         }
 
+        CheckSignals(scope, sensor, channels);
         foreach (string name in methods)
         {
             if (ConcentrationMethods.TryCreate(name, sensor.In(grid.Hemisphere), grid.Hemisphere) is not { } method)
@@ -147,6 +149,21 @@ internal sealed class SourceLoader(string runFolder, ConfigFolder config, IReadO
                     string.Join(", ", method.Channels.Select(ChannelNames.NameOf)),
                     "Map the channel to its variable, or leave the method out."));
             }
+        }
+    }
+
+    private void CheckSignals(ConfigScope scope, Sensor sensor, Dictionary<Channel, string> channels)
+    {
+        foreach (Channel channel in MeltSettings.SignalChannels.Where(channel => needsSignals && !channels.ContainsKey(channel)))
+        {
+            scope.Faults.Add(new(
+                "IE1009",
+                scope.Where("channels", scope.PositionOf("channels")),
+                sensor.FrequenciesGigahertz.ContainsKey(channel)
+                    ? $"no {ChannelNames.NameOf(channel)} of {sensor.Name}, of which melt signals are made"
+                    : $"the sensor {sensor.Name}, which has no {ChannelNames.NameOf(channel)}, of which melt signals are made",
+                string.Join(", ", MeltSettings.SignalChannels.Select(ChannelNames.NameOf)),
+                "Map the channel to its variable, or leave melt.signals out."));
         }
     }
 

@@ -65,6 +65,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         places.Remove(lost);
         tiePoints.Remove(lost);
         Array.ForEach(lost, day => RemoveGrids(day, settings.Methods));
+        Array.ForEach(lost, RemoveSignals);
         DayPreparation preparation = await preparing;
         await ProcessAsync(plan, preparation, (series, places, tiePoints), GlobalAttributes(digest), observer, cancellation);
         if (settings.Season is { } season)
@@ -96,16 +97,17 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         filesRead.UnionWith(plan.Margin.SelectMany(day => day.Input.Files));
         SampleSeries? samples = SampleSeries.For(preparation, plan, (options.From, options.To), options.Workers, cancellation);
         GridArchive? grids = settings.WriteGrids ? new(settings, layout, attributes) : null;
+        MeltSignalArchive? signals = settings.Melt.Signals ? new(settings, layout, attributes) : null;
         if (settings.DayFilling is { } rules)
         {
             DayWindow window = new(plan, rules, () => new(settings.Grid.CellCount, settings.Methods.Count));
             await RunPipeline.RunAsync(
-                window, Math.Min(options.Workers, window.Steps.Count), () => new WindowWorker(preparation, samples, window, grids), Receive, cancellation);
+                window, Math.Min(options.Workers, window.Steps.Count), () => new WindowWorker(preparation, samples, window, grids, signals), Receive, cancellation);
             gaps.AddRange(window.FaultsOf(plan.Margin).Select(fault => new Gap(null, fault)));
         }
         else
         {
-            await RunPipeline.RunAsync(plan.Days, Math.Min(options.Workers, plan.Days.Count), () => new DayWorker(preparation, samples, grids), Receive, cancellation);
+            await RunPipeline.RunAsync(plan.Days, Math.Min(options.Workers, plan.Days.Count), () => new DayWorker(preparation, samples, grids, signals), Receive, cancellation);
         }
 
         series.Daily.Flush();
@@ -131,6 +133,11 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         }
 
         RemoveGrids(result.Date, settings.Methods.Except(result.Methods.Select(method => method.Method)));
+        if (!result.Observed)
+        {
+            RemoveSignals(result.Date);
+        }
+
         IReadOnlyList<Fault> faults = result.Fault is { } own ? [own]
             : result.Observed ? []
             : [.. plan.Gaps.Where(gap => gap.Date == result.Date).Select(gap => gap.Fault)];
@@ -173,6 +180,8 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
             PublishedFile.Delete(layout.GridFile(method, settings.Grid.Hemisphere, day));
         }
     }
+
+    private void RemoveSignals(DateOnly day) => PublishedFile.Delete(layout.MeltSignalFile(settings.Grid.Hemisphere, day));
 
     // What was filled and how the gap counts: in grids and tables alike.
     private KeyValuePair<string, string>[] FillingText =>

@@ -37,6 +37,11 @@ internal static class ConfigurationDigest
             yield return settings.TiePoints.ToString(); // Records print their numbers in full and without culture.
         }
 
+        if (settings.Melt.Signals)
+        {
+            yield return "melt signals";
+        }
+
         foreach (RunSource source in settings.Sources)
         {
             string channels = string.Join(' ', source.Description.Channels.OrderBy(pair => pair.Key).Select(pair => $"{ChannelNames.NameOf(pair.Key)}={pair.Value}"));

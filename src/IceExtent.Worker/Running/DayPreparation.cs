@@ -23,7 +23,10 @@ internal sealed class DayPreparation
         Days = settings.DayFilling is { } rules ? new(rules) : null;
         ICoastStep? coast = settings.Coast.InConcentrations ? ConcentrationStep() : null;
         RetrievalChoices choices = new(
-            settings.Grid, settings.Ocean, settings.Land, settings.Methods, settings.Coast, settings.Smearing, settings.TiePoints, settings.Weather);
+            settings.Grid, settings.Ocean, settings.Land, settings.Methods, settings.Coast, settings.Smearing, settings.TiePoints, settings.Weather)
+        {
+            Further = settings.Melt.Signals ? MeltSettings.SignalChannels : [],
+        };
         sources = [.. settings.Sources.Select(source => new SourceRetrieval(choices, source.Sensor, [.. source.Description.Channels.Keys], MaskOf(source).Mask, coast, source.Offsets))];
         cellMasks = [.. settings.Sources.Select(source => MaskOf(source).Mask)];
         gaps = [.. settings.Sources.Select(source => MaskOf(source).Gap)];

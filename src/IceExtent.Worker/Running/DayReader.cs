@@ -50,7 +50,7 @@ internal sealed class DayReader(DayPreparation preparation)
     public ObservedDay Read(PlannedDay day)
     {
         SourceRetrieval source = preparation.Of(day.Source);
-        BrightnessPlanes planes = PlanesFor(source.Channels);
+        BrightnessPlanes planes = PlanesFor(source.ChannelsRead);
         day.Source.Reader.Read(day.Input, planes);
         int outOfRange = DayRetrieval.CheckRange(planes, day.Source.Settings.Sensor.Range, conditions);
         day.Source.Settings.Offsets?.Subtract(planes);

@@ -5,10 +5,11 @@ namespace IceExtent.Worker.Running;
 
 /// <summary>Carries days from their files to totals and grid files, where days need nothing of each other.</summary>
 /// <remarks>A day stays with one worker from reading to writing, so its planes stay in one core's cache.</remarks>
-internal sealed class DayWorker(DayPreparation preparation, SampleSeries? samples, GridArchive? grids) : IDayWorker
+internal sealed class DayWorker(DayPreparation preparation, SampleSeries? samples, GridArchive? grids, MeltSignalArchive? signals) : IDayWorker
 {
     private readonly DayReader reader = new(preparation);
     private readonly DayFinishing finishing = new(preparation, grids);
+    private readonly MeltSignalPlanes? melt = signals is null ? null : new(signals);
     private readonly ConcentrationPlanes concentration = new(preparation.Settings.Grid.CellCount);
 
     /// <inheritdoc/>
@@ -32,6 +33,11 @@ internal sealed class DayWorker(DayPreparation preparation, SampleSeries? sample
         for (int method = 0; method < results.Length; method++)
         {
             RetrievalCounts counts = observed.RetrieveWith(retrievals[method], month, coast, concentration);
+            if (method == 0)
+            {
+                melt?.Write(label, observed, concentration, retrievals[method].Method.Name);
+            }
+
             FilledCells filled = finishing.Fill(day.Date, day.Source.Index, concentration, []);
             results[method] = finishing.Publish(label, retrievals[method], counts, filled, concentration);
         }

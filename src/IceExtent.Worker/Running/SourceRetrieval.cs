@@ -21,7 +21,11 @@ internal sealed record RetrievalChoices(
     CoastSettings Coast,
     SmearingFactors Smearing,
     TiePointSettings TiePoints,
-    WeatherSettings Weather);
+    WeatherSettings Weather)
+{
+    /// <summary>Channels that are read and corrected beside those of the retrieval.</summary>
+    public IReadOnlyList<Channel> Further { get; init; } = [];
+}
 
 /// <summary>Everything that the days of one sensor share and nobody changes: channels, coast correction, retrievals, sampling.</summary>
 internal sealed class SourceRetrieval
@@ -46,12 +50,16 @@ internal sealed class SourceRetrieval
         (this.choices, this.sensor, this.mask, this.step) = (choices, sensor, mask, step);
         offsetErrors = offsets is { StandardErrorKelvins.Count: > 0 } ? new(offsets.StandardErrorKelvins) : null;
         Channels = Needed(available);
+        ChannelsRead = [.. Channels.Concat(choices.Further.Where(available.Contains)).Distinct().Order()];
         Coast = choices.Coast.InTemperatures ? BrightnessStep() : null;
         withOwnPoints = [.. choices.Methods.Select(name => Make(name, Own, choices.Weather.ScreensFor(Own)))];
     }
 
-    /// <summary>The channels in use, in order: no other one is read.</summary>
+    /// <summary>The channels that the retrieval uses, in order.</summary>
     public IReadOnlyList<Channel> Channels { get; }
+
+    /// <summary>Those and the ones that are only written, in order: no other one is read.</summary>
+    public IReadOnlyList<Channel> ChannelsRead { get; }
 
     /// <summary>The correction of brightness temperatures near land, or null where the run has none.</summary>
     public CoastBrightness? Coast { get; }
@@ -104,7 +112,7 @@ internal sealed class SourceRetrieval
         choices.Grid,
         choices.Land,
         Array.ConvertAll(mask.Conditions.ToArray(), condition => condition == CellConditions.None),
-        Channels.ToDictionary(channel => channel, channel => sensor.FootprintsMeters[channel]),
+        ChannelsRead.ToDictionary(channel => channel, channel => sensor.FootprintsMeters[channel]),
         sensor.Range,
         choices.Coast.Brightness);
 }

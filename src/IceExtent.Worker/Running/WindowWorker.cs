@@ -5,10 +5,12 @@ using IceExtent.Storage.Faults;
 namespace IceExtent.Worker.Running;
 
 /// <summary>Reads days into a window and finishes those whose neighbours in time are all there.</summary>
-internal sealed class WindowWorker(DayPreparation preparation, SampleSeries? samples, DayWindow window, GridArchive? grids) : IDayWorker
+internal sealed class WindowWorker(DayPreparation preparation, SampleSeries? samples, DayWindow window, GridArchive? grids, MeltSignalArchive? signals) : IDayWorker
 {
     private readonly DayReader reader = new(preparation);
     private readonly DayFinishing finishing = new(preparation, grids);
+    private readonly MeltSignalPlanes? melt = signals is null ? null : new(signals);
+    private readonly HashSet<int> written = [.. window.Outputs.Select(day => day.Step).OfType<int>()]; // Days round the period are only read.
     private readonly ConcentrationPlanes own = new(preparation.Settings.Grid.CellCount); // Others still read what was retrieved.
 
     /// <inheritdoc/>
@@ -43,6 +45,11 @@ internal sealed class WindowWorker(DayPreparation preparation, SampleSeries? sam
         for (int method = 0; method < retrievals.Count; method++)
         {
             room.Counts[method] = observed.RetrieveWith(retrievals[method], month, coast, room.Planes[method]);
+        }
+
+        if (written.Contains(day.Order))
+        {
+            melt?.Write(DayLabel.Of(day, tuned), observed, room.Planes[0], retrievals[0].Method.Name);
         }
 
         (room.Retrievals, room.Tuned, room.OutOfRange) = (retrievals, tuned, observed.OutOfRange);

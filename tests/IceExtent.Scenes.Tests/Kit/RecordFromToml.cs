@@ -51,7 +51,7 @@ internal static class RecordFromToml
 
     private static object Convert(Type type, object value, string where)
     {
-        if (type == typeof(double) || type == typeof(int) || type == typeof(string))
+        if (type == typeof(bool) || type == typeof(double) || type == typeof(int) || type == typeof(string))
         {
             return System.Convert.ChangeType(value, type, CultureInfo.InvariantCulture);
         }
