@@ -17,14 +17,21 @@ public readonly record struct IceYearSpan(IceYear Year, int Lead, int Tail, int 
     /// <summary>Whether no later day can change what is found.</summary>
     public bool IsComplete => RecordLast >= Year.Length - 1 + Tail;
 
-    /// <summary>The days that a scheme needs for one ice year of a record.</summary>
+    /// <summary>The days that a scheme, and melt where it is sought, need for one ice year of a record.</summary>
     /// <param name="year">The ice year.</param>
     /// <param name="scheme">The scheme.</param>
+    /// <param name="melt">How melt onset and freeze-up are found, or null where they are not.</param>
     /// <param name="recordFirst">The record's first day.</param>
     /// <param name="recordLast">The record's last day.</param>
-    public static IceYearSpan Of(IceYear year, SeasonScheme scheme, DateOnly recordFirst, DateOnly recordLast)
+    public static IceYearSpan Of(IceYear year, SeasonScheme scheme, MeltRules? melt, DateOnly recordFirst, DateOnly recordLast)
     {
         ArgumentNullException.ThrowIfNull(scheme);
-        return new(year, scheme.LeadDays, scheme.TailDays, year.DayOf(recordFirst), year.DayOf(recordLast));
+        SeasonWindow needed = melt?.Needed(melt.Calendar.In(year)) ?? new(0, 0);
+        return new(
+            year,
+            Math.Max(scheme.LeadDays, -needed.First),
+            Math.Max(scheme.TailDays, needed.Last - year.Length + 1),
+            year.DayOf(recordFirst),
+            year.DayOf(recordLast));
     }
 }

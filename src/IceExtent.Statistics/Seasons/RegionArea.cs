@@ -43,7 +43,7 @@ public sealed class RegionArea
             return (null, null);
         }
 
-        IceYearSpan span = IceYearSpan.Of(year, scheme, recordFirst, recordLast);
+        IceYearSpan span = IceYearSpan.Of(year, scheme, melt: null, recordFirst, recordLast);
         float[] area = new float[span.Days], error = new float[span.Days];
         Array.Fill(area, float.NaN);
         Array.Fill(error, float.NaN);

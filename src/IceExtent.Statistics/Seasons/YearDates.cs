@@ -48,6 +48,9 @@ public static class SeasonEvents
 /// <param name="FreezeUp">From brightness temperatures.</param>
 public readonly record struct YearDates(IceDates Ice, SeasonDate? MeltOnset, SeasonDate? FreezeUp)
 {
+    /// <summary>What both methods of melt found in a cell; null for regions and places, and where melt is not sought.</summary>
+    public CellMelt? Melt { get; init; }
+
     /// <summary>One of the six.</summary>
     public SeasonDate? Of(SeasonEvent which) => which switch
     {

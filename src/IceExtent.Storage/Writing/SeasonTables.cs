@@ -22,6 +22,10 @@ public static class SeasonTables
         TableColumn.Number<CellSeasonRow>("longitude", "degrees_east", row => row.LongitudeDegrees),
         TableColumn.Number<CellSeasonRow>("cell_area_km2", SquareKilometers, row => row.AreaSquareKilometers),
         .. DateColumns<CellSeasonRow>(),
+        .. ColumnsOf<CellSeasonRow>("horizontal_range_melt", row => row.Dates.Melt?.HorizontalRange),
+        .. ColumnsOf<CellSeasonRow>("early_melt", row => row.Dates.Melt?.Indicators.EarlyMelt),
+        .. ColumnsOf<CellSeasonRow>("continuous_melt", row => row.Dates.Melt?.Indicators.ContinuousMelt),
+        .. ColumnsOf<CellSeasonRow>("early_freeze", row => row.Dates.Melt?.Indicators.EarlyFreeze),
     ];
 
     /// <summary>The columns of <c>season_regions</c>.</summary>

@@ -94,7 +94,7 @@ internal static class RunFileLoader
             ErrorLengths = new(errorLength!.Value * 1_000.0, footprint!.Value * 1_000.0, missedIce!.Value * 1_000.0, edge!.Value),
             Smearing = new(smearing!.Value, curvature!.Value),
             Overlap = overlap!,
-            Season = season,
+            Season = season is null ? null : season with { Melt = melt!.Signals ? new(melt.Rules, season.MeltOnset) : null },
             Notice = notice,
             Sources = [.. loaded.OfType<RunSource>()],
         };

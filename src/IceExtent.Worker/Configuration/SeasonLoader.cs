@@ -80,6 +80,7 @@ internal static class SeasonLoader
         SeasonScheme scheme = Scheme(scope, Path.GetFileNameWithoutExtension(path), source);
         RegionSeasonRules regions = Regions(scope, side);
         int trendYears = scope.WholeNumber("least_trend_years", 3, 100);
+        MeltOnsetMethod onset = scope.OneOf("melt_onset", ("horizontal-range", MeltOnsetMethod.HorizontalRange), ("indicators", MeltOnsetMethod.Indicators));
         double placeShare = scope.Number("least_place_share", 0.01, 1.0);
         if (other is not null)
         {
@@ -91,7 +92,7 @@ internal static class SeasonLoader
             layer?.RefuseUnknown();
         }
 
-        return faults.Count > before ? null : new(scheme, regions, trendYears, placeShare, [path]);
+        return faults.Count > before ? null : new(scheme, regions, trendYears, placeShare, [path], onset);
     }
 
     private static SeasonScheme Scheme(SchemeScope scope, string name, string source)

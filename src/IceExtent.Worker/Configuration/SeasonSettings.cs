@@ -1,4 +1,5 @@
 using IceExtent.Statistics.Seasons;
+using IceExtent.Worker.Seasons;
 
 namespace IceExtent.Worker.Configuration;
 
@@ -8,4 +9,12 @@ namespace IceExtent.Worker.Configuration;
 /// <param name="LeastTrendYears">A trend needs so many years.</param>
 /// <param name="LeastPlaceShare">A day of a place counts with a value on so much of its cells' area. Unit: 1.</param>
 /// <param name="Paths">The files that decide dates: the scheme's.</param>
-internal sealed record SeasonSettings(SeasonScheme Scheme, RegionSeasonRules Regions, int LeastTrendYears, double LeastPlaceShare, IReadOnlyList<string> Paths);
+/// <param name="MeltOnset">Which method gives melt onset.</param>
+internal sealed record SeasonSettings(SeasonScheme Scheme, RegionSeasonRules Regions, int LeastTrendYears, double LeastPlaceShare, IReadOnlyList<string> Paths, MeltOnsetMethod MeltOnset)
+{
+    /// <summary>How melt is found, or null where the run keeps no signals of it.</summary>
+    public MeltChoice? Melt { get; init; }
+
+    /// <summary>The days that an ice year of a record needs.</summary>
+    public IceYearSpan SpanOf(IceYear year, DateOnly recordFirst, DateOnly recordLast) => IceYearSpan.Of(year, Scheme, Melt?.Rules, recordFirst, recordLast);
+}

@@ -12,6 +12,7 @@ internal sealed class IceYearStack(int[] cells, int gridCells)
 {
     private const float StepsPerUnit = 10_000f; // As Packing.Fraction.
 
+    private readonly short[][] signals = [[], [], []]; // Horizontal range, 19 GHz and 37 GHz vertical, in tenths of K.
     private short[] fractions = [];
     private short[] errors = [];
 
@@ -24,21 +25,27 @@ internal sealed class IceYearStack(int[] cells, int gridCells)
     /// <summary>Reads the days of a span; a day without a file, or with one that cannot be read, is missing.</summary>
     /// <param name="grids">The archive.</param>
     /// <param name="span">The days.</param>
-    /// <param name="pathOf">The file of a day, or null.</param>
+    /// <param name="melt">The melt signals beside them, or null where melt is not sought.</param>
     /// <param name="workers">How many files are read at a time.</param>
     /// <param name="cancellation">Stops at the next day.</param>
-    public void Load(ArchiveGrids grids, IceYearSpan span, Func<DateOnly, string?> pathOf, int workers, CancellationToken cancellation)
+    public void Load(StoredDays<ArchiveGrids> grids, IceYearSpan span, StoredDays<ArchiveMeltSignals>? melt, int workers, CancellationToken cancellation)
     {
-        MakeRoom(span);
+        MakeRoom(span, melt is not null);
         Fault?[] faults = new Fault?[span.Days];
         Parallel.For(
             0,
             span.Days,
             new ParallelOptions { MaxDegreeOfParallelism = workers, CancellationToken = cancellation },
-            () => new Planes(new float[gridCells], new float[gridCells]),
+            () => new Planes(new float[gridCells], new float[gridCells], [.. signals.Select(_ => new short[melt is null ? 0 : gridCells])]),
             (day, _, planes) =>
             {
-                faults[day] = LoadDay(grids, pathOf(span.FirstDate.AddDays(day)), day, planes);
+                DateOnly date = span.FirstDate.AddDays(day);
+                faults[day] = LoadDay(grids.Reader, grids.Files.GetValueOrDefault(date), day, planes);
+                if (melt is not null)
+                {
+                    faults[day] = LoadSignals(melt.Reader, melt.Files.GetValueOrDefault(date), day, planes) ?? faults[day];
+                }
+
                 return planes;
             },
             _ => { });
@@ -48,7 +55,7 @@ internal sealed class IceYearStack(int[] cells, int gridCells)
     /// <summary>Makes room for the days of a span, all missing until they are set.</summary>
     public void Clear(IceYearSpan span)
     {
-        MakeRoom(span);
+        MakeRoom(span, withSignals: false);
         Array.Fill(fractions, Packing.Fill);
         Array.Fill(errors, Packing.Fill);
     }
@@ -88,6 +95,27 @@ internal sealed class IceYearStack(int[] cells, int gridCells)
         }
     }
 
+    /// <summary>Copies the melt signals of neighbouring cells out.</summary>
+    /// <param name="days">The days of the span that was loaded.</param>
+    /// <param name="first">The first cell's place among the ocean cells.</param>
+    /// <param name="count">How many cells.</param>
+    /// <param name="kelvins">Three spans: horizontal range, 19 GHz and 37 GHz vertical; each receives one series after another. Missing: NaN.</param>
+    public void CopySignals(int days, int first, int count, float[][] kelvins)
+    {
+        const float StepsPerKelvin = 10f; // As MeltSignalVariables packs them.
+        for (int signal = 0; signal < signals.Length; signal++)
+        {
+            for (int day = 0; day < days; day++)
+            {
+                ReadOnlySpan<short> stored = signals[signal].AsSpan((day * cells.Length) + first, count);
+                for (int cell = 0; cell < count; cell++)
+                {
+                    kelvins[signal][(cell * days) + day] = stored[cell] == Packing.Fill ? float.NaN : stored[cell] / StepsPerKelvin;
+                }
+            }
+        }
+    }
+
     private Fault? LoadDay(ArchiveGrids grids, string? path, int day, Planes planes)
     {
         Span<short> storedFraction = fractions.AsSpan(day * cells.Length, cells.Length);
@@ -114,9 +142,43 @@ internal sealed class IceYearStack(int[] cells, int gridCells)
         return null;
     }
 
-    private void MakeRoom(IceYearSpan span)
+    private Fault? LoadSignals(ArchiveMeltSignals reader, string? path, int day, Planes planes)
+    {
+        Fault? fault = null;
+        bool isRead = path is not null;
+        try
+        {
+            if (path is not null)
+            {
+                reader.Read(path, planes.Signals[0], planes.Signals[1], planes.Signals[2]);
+            }
+        }
+        catch (FaultException unreadable)
+        {
+            (isRead, fault) = (false, unreadable.Fault);
+        }
+
+        for (int signal = 0; signal < signals.Length; signal++)
+        {
+            Span<short> stored = signals[signal].AsSpan(day * cells.Length, cells.Length);
+            short[] plane = planes.Signals[signal];
+            for (int index = 0; index < cells.Length; index++)
+            {
+                stored[index] = isRead ? plane[cells[index]] : Packing.Fill;
+            }
+        }
+
+        return fault;
+    }
+
+    private void MakeRoom(IceYearSpan span, bool withSignals)
     {
         int size = span.Days * cells.Length;
+        for (int signal = 0; withSignals && signal < signals.Length; signal++)
+        {
+            signals[signal] = signals[signal].Length < size ? new short[size] : signals[signal];
+        }
+
         if (fractions.Length < size)
         {
             (fractions, errors) = (new short[size], new short[size]);
@@ -129,5 +191,10 @@ internal sealed class IceYearStack(int[] cells, int gridCells)
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     private static float Unpacked(short stored) => stored == Packing.Fill ? float.NaN : stored / StepsPerUnit;
 
-    private sealed record Planes(float[] Fraction, float[] Error);
+    private sealed record Planes(float[] Fraction, float[] Error, short[][] Signals);
 }
+
+/// <summary>The files of an archive by day, with what reads them.</summary>
+/// <param name="Reader">Reads one.</param>
+/// <param name="Files">The file of each day that has one.</param>
+internal sealed record StoredDays<T>(T Reader, IReadOnlyDictionary<DateOnly, string> Files);

@@ -29,7 +29,7 @@ internal sealed class RegionSeasons
         (this.settings, this.season, this.layout, this.method, this.archive, this.record) = (settings, season, layout, method, archive, record);
         IceYearStart start = season.Scheme.YearStart;
         Spans = [.. Enumerable.Range(start.Of(record.First).Year, start.Of(record.Last).Year - start.Of(record.First).Year + 1)
-            .Select(year => IceYearSpan.Of(start.Beginning(year), season.Scheme, record.First, record.Last))];
+            .Select(year => season.SpanOf(start.Beginning(year), record.First, record.Last))];
         before = File.Exists(archive.RegionPath) ? SeasonTableReader.ReadRegions(archive.RegionPath).Rows : [];
         HashSet<int> years = [.. Spans.Select(span => span.Year.Year)];
         foreach (RegionSeasonRow row in before.Where(row => years.Contains(row.Year.Year)))

@@ -49,12 +49,12 @@ internal sealed class SceneSeasonScore
         foreach (int year in years)
         {
             IceYear iceYear = season.Scheme.YearStart.Beginning(year);
-            IceYearSpan span = IceYearSpan.Of(iceYear, season.Scheme, iceYear.FirstDay.AddYears(-1), iceYear.LastDay.AddYears(1));
+            IceYearSpan span = IceYearSpan.Of(iceYear, season.Scheme, melt: null, iceYear.FirstDay.AddYears(-1), iceYear.LastDay.AddYears(1));
             Fill(span, workers, cancellation);
-            CellSeasons real = CellSeasonSearch.Find(truth, season.Scheme, span, workers, cancellation);
+            CellSeasons real = CellSeasonSearch.Find(truth, season.Scheme, melt: null, span, workers, cancellation);
             for (int method = 0; method < methods.Count; method++)
             {
-                CellSeasons found = CellSeasonSearch.Find(observed[method], season.Scheme, span, workers, cancellation);
+                CellSeasons found = CellSeasonSearch.Find(observed[method], season.Scheme, melt: null, span, workers, cancellation);
                 Hold(real, found, cells[method]);
                 medians[method].AddRange(Medians(year, real, found));
             }

@@ -38,8 +38,8 @@ internal sealed class SeasonSpan(
     private List<SeasonYearReport> UpdateMethod(
         string method, IceYearStack stack, IReadOnlySet<DateOnly> touched, Action<SeasonYearReport> yearDone, CancellationToken cancellation)
     {
-        ArchiveGrids grids = new(layout, method, settings.Grid);
-        Dictionary<DateOnly, string> files = grids.List(null, null).ToDictionary(file => file.Day, file => file.Path);
+        ArchiveGrids reader = new(layout, method, settings.Grid);
+        Dictionary<DateOnly, string> files = reader.List(null, null).ToDictionary(file => file.Day, file => file.Path);
         if (files.Count == 0)
         {
             return [];
@@ -49,6 +49,8 @@ internal sealed class SeasonSpan(
         (DateOnly First, DateOnly Last) record = (files.Keys.Min(), files.Keys.Max());
         RegionSeasons named = new(settings, season, layout, method, archive, record);
         PlaceSeasons places = new(settings, season, layout, method, archive, record);
+        StoredDays<ArchiveGrids> grids = new(reader, files);
+        StoredDays<ArchiveMeltSignals>? melt = season.Melt is null ? null : MeltDays();
         List<SeasonYearReport> reports = [];
         foreach (IceYearSpan span in named.Spans)
         {
@@ -58,8 +60,8 @@ internal sealed class SeasonSpan(
             }
 
             RunningYear? before = RunningYear.Read(archive.GridPathOf(span.Year), settings.Grid, archive.IsRunning(span.Year));
-            stack.Load(grids, span, files.GetValueOrDefault, workers, cancellation);
-            CellSeasons cells = CellSeasonSearch.Find(stack, season.Scheme, span, workers, cancellation);
+            stack.Load(grids, span, melt, workers, cancellation);
+            CellSeasons cells = CellSeasonSearch.Find(stack, season.Scheme, season.Melt, span, workers, cancellation);
             named.Add(span, cells, preparation.Regions);
             places.Add(span, cells, preparation.Places);
             archive.WriteCells(span, cells);
@@ -76,6 +78,12 @@ internal sealed class SeasonSpan(
         }
 
         return reports;
+    }
+
+    private StoredDays<ArchiveMeltSignals> MeltDays()
+    {
+        ArchiveMeltSignals reader = new(layout, settings.Grid);
+        return new(reader, reader.List(null, null).ToDictionary(file => file.Day, file => file.Path));
     }
 
     private static bool IsTouched(IceYearSpan span, IReadOnlySet<DateOnly> touched)
