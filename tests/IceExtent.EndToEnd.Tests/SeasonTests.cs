@@ -138,7 +138,7 @@ public sealed class SeasonTests : IDisposable
 
         Assert.Equal(0, text.ExitCode);
         Assert.Contains("19 Jun 1990", text.Results, StringComparison.Ordinal);
-        Assert.Contains("cannot be tested: 1 years", text.Results, StringComparison.Ordinal);
+        Assert.Contains("cannot be tested: 1 year", text.Results, StringComparison.Ordinal);
         Assert.Contains("no basis for navigation", text.Results, StringComparison.Ordinal);
         JsonElement year = JsonDocument.Parse(json.Results).RootElement.GetProperty("years").EnumerateArray().Single(year => year.GetProperty("ice_year").GetInt32() == 1990);
         Assert.Equal("1990-06-19", year.GetProperty("dates").GetProperty("retreat").GetProperty("day").GetString());

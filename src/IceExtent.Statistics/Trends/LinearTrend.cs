@@ -48,7 +48,7 @@ public abstract record LinearTrend
         int count = years.Count;
         if (count < leastYears)
         {
-            return new Untestable(FormattableString.Invariant($"{count} years with a value, {leastYears} are needed"));
+            return new Untestable(FormattableString.Invariant($"{count} {(count == 1 ? "year" : "years")} with a value, {leastYears} are needed"));
         }
 
         double meanYear = years.Average(year => (double)year), meanValue = values.Average();

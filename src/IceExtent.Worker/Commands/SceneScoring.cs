@@ -63,7 +63,8 @@ internal static class SceneScoring
         Scene scene, IReadOnlyList<int> years, LandShare land, string[] methods, SceneDefaults defaults, int workers, bool json, CommandConsole console, CancellationToken cancellation)
     {
         List<string> usable = Usable(scene, methods, console);
-        TotalsRegion[] regions = [TotalsRegion.Hemisphere(scene.Grid, land.OceanBelow(defaults.LandLimitFraction))];
+        bool[] ocean = land.OceanBelow(defaults.LandLimitFraction);
+        TotalsRegion[] regions = [TotalsRegion.Hemisphere(scene.Grid, ocean), .. defaults.Regions.On(scene.Grid, ocean).Select(region => TotalsRegion.Part(scene.Grid, region))];
         IReadOnlyList<ScoredSeasons> scores = new SceneSeasonScore(scene, land, usable, defaults, defaults.Season, regions).Run(years, workers, cancellation);
         SeasonScoreReport.Print(scores, json, console);
         if (!json)

@@ -48,12 +48,12 @@ internal static class SeasonCommand
         IReadOnlyList<PlaceSeasonRow> places = Read(layout.TableFile("season_places", method, settings.Grid.Hemisphere), path => SeasonTableReader.ReadPlaces(path).Rows);
         if (regions.Any(row => row.Region == name))
         {
-            return SeasonAnswer.Of(name, "region", regions.Where(row => row.Region == name), season.LeastTrendYears);
+            return SeasonAnswer.Of(name, "region", regions.Where(row => row.Region == name), season);
         }
 
         if (places.Any(row => row.Place == name))
         {
-            return SeasonAnswer.Of(name, "place", places.Where(row => row.Place == name), season.LeastTrendYears);
+            return SeasonAnswer.Of(name, "place", places.Where(row => row.Place == name), season);
         }
 
         string[] known = [.. regions.Select(row => row.Region).Concat(places.Select(row => row.Place)).Distinct()];

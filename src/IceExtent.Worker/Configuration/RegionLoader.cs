@@ -45,6 +45,10 @@ internal sealed class RegionLoader
         usable = scope.Faults.Count == before;
     }
 
+    /// <summary>Computes the cells, where there is no archive; regions without one are left out.</summary>
+    public IReadOnlyList<GridRegion> On(Grid grid, bool[] ocean) =>
+        [.. drawn.OrderBy(region => region.Outline.Name, StringComparer.Ordinal).Select(region => GridRegion.Of(grid, region.Outline, ocean)).Where(region => region.Cells.Count > 0)];
+
     /// <summary>Takes the cells from the archive where they are those of the same files, grid and land; else computes them.</summary>
     /// <returns>The regions; without those that have no cell, after adding IE1509.</returns>
     public RegionSettings LayOver(GridLand land, ICollection<Fault> faults)

@@ -6,7 +6,7 @@ using IceExtent.Storage.Faults;
 namespace IceExtent.Worker.Configuration;
 
 /// <summary>What config/defaults.toml says of totals, coasts and weather, for commands that have no run file.</summary>
-internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction, ErrorLengths ErrorLengths, SmearingFactors Smearing, CoastSettings Coast, TiePointSettings TiePoints, WeatherSettings Weather, SeasonSettings Season, MeltSettings Melt)
+internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction, ErrorLengths ErrorLengths, SmearingFactors Smearing, CoastSettings Coast, TiePointSettings TiePoints, WeatherSettings Weather, SeasonSettings Season, RegionLoader Regions, MeltSettings Melt)
 {
     /// <summary>Reads them.</summary>
     /// <param name="config">Where they stand.</param>
@@ -44,10 +44,11 @@ internal sealed record SceneDefaults(TotalsRules Rules, double LandLimitFraction
         WeatherSettings? weather = WeatherLoader.Load(layered, grid, folder, faults);
         SeasonSettings? season = SeasonLoader.LoadAnyway(own, shipped, config, grid.Hemisphere, folder, faults);
         MeltSettings? melt = MeltLoader.Load(own, shipped, grid.Hemisphere, faults);
+        RegionLoader regions = new(own, config, folder);
         layered.RefuseUnknown();
         own.RefuseUnknown();
         return faults.Count == 0
-            ? new(new TotalsRules(ice!.Value, pack!.Value), land!.Value, new(length!.Value * 1_000.0, footprint!.Value * 1_000.0, missedIce!.Value * 1_000.0, edge!.Value), new(smearing!.Value, curvature!.Value), correction!, tiePoints!, weather!, season!, melt!)
+            ? new(new TotalsRules(ice!.Value, pack!.Value), land!.Value, new(length!.Value * 1_000.0, footprint!.Value * 1_000.0, missedIce!.Value * 1_000.0, edge!.Value), new(smearing!.Value, curvature!.Value), correction!, tiePoints!, weather!, season!, regions, melt!)
             : throw new ConfigurationException(faults);
     }
 }

@@ -72,6 +72,7 @@ internal sealed class ArchiveRun(RunSettings settings, RunOptions options, TimeP
         {
             HashSet<DateOnly> touched = [.. lost, .. dayRecords.Select(day => day.Date)];
             seasons = new SeasonSpan(settings, season, preparation, digest, options.Workers).Update(touched, observer.SeasonDone, cancellation);
+            gaps.AddRange(seasons.SelectMany(year => year.Unread).Distinct().Select(fault => new Gap(null, fault))); // Two ice years may meet the same day.
         }
 
         int done = dayRecords.Count(day => day.Outcome == DayOutcome.Done);

@@ -1,4 +1,5 @@
 using IceExtent.Statistics.Seasons;
+using IceExtent.Worker.Configuration;
 
 namespace IceExtent.Worker.Seasons;
 
@@ -8,10 +9,10 @@ namespace IceExtent.Worker.Seasons;
 /// <param name="DaysOf">The day of the year, or the length; null where there is none.</param>
 internal sealed record SeasonQuantity(string Name, Func<SeasonRow, SeasonDate?>? DateOf, Func<SeasonRow, double?> DaysOf)
 {
-    private const double LeastKnownShare = 0.9; // Days that are counted make a year only where nearly all are known.
-
     /// <summary>Every quantity of a row, in the order they are told.</summary>
-    public static IReadOnlyList<SeasonQuantity> Of(SeasonRow row) =>
+    /// <param name="row">A row of the region or place.</param>
+    /// <param name="leastKnownShare">Days that are counted make a year only where so much of it is known.</param>
+    public static IReadOnlyList<SeasonQuantity> Of(SeasonRow row, double leastKnownShare) =>
     [
         .. row is RegionSeasonRow
             ? [Date("area_fall", region => ((RegionSeasonRow)region).AreaFall), Date("area_rise", region => ((RegionSeasonRow)region).AreaRise)]
@@ -19,7 +20,7 @@ internal sealed record SeasonQuantity(string Name, Func<SeasonRow, SeasonDate?>?
         .. SeasonEvents.All.Where(which => row.Dates.Of(which) is not null).Select(which => Date(SeasonEvents.NameOf(which), year => year.Dates.Of(which))),
         new("inner_ice_free_days", null, year => year.Dates.Ice.InnerIceFreeDays(year.Year, year.Begins)),
         new("outer_ice_free_days", null, year => year.Dates.Ice.OuterIceFreeDays(year.Year, year.Begins)),
-        new("open_water_days", null, year => year.IsFinal && year.KnownDays >= LeastKnownShare * year.Year.Length ? year.OpenWaterDays : null),
+        new("open_water_days", null, year => year.IsFinal && year.KnownDays >= leastKnownShare * year.Year.Length ? year.OpenWaterDays : null),
     ];
 
     private static SeasonQuantity Date(string name, Func<SeasonRow, SeasonDate?> dateOf) => new(name, dateOf, row => dateOf(row)?.Day);
@@ -33,14 +34,14 @@ internal sealed record SeasonQuantity(string Name, Func<SeasonRow, SeasonDate?>?
 internal sealed record SeasonAnswer(string Name, string Kind, IReadOnlyList<SeasonRow> Rows, IReadOnlyList<(SeasonQuantity Quantity, UsualDays? Usual)> Usual)
 {
     /// <summary>Puts the ice years of a region or place together.</summary>
-    public static SeasonAnswer Of(string name, string kind, IEnumerable<SeasonRow> rows, int leastTrendYears)
+    public static SeasonAnswer Of(string name, string kind, IEnumerable<SeasonRow> rows, SeasonSettings season)
     {
         SeasonRow[] ordered = [.. rows.OrderBy(row => row.Year.Year)];
         return new(
             name,
             kind,
             ordered,
-            [.. SeasonQuantity.Of(ordered[^1]).Select(quantity => (quantity, UsualDays.Of(
-                [.. ordered.Where(row => row.IsFinal && quantity.DaysOf(row) is not null).Select(row => (row.Year.Year, quantity.DaysOf(row)!.Value))], leastTrendYears)))]);
+            [.. SeasonQuantity.Of(ordered[^1], season.LeastKnownShare).Select(quantity => (quantity, UsualDays.Of(
+                [.. ordered.Where(row => row.IsFinal && quantity.DaysOf(row) is not null).Select(row => (row.Year.Year, quantity.DaysOf(row)!.Value))], season.LeastTrendYears)))]);
     }
 }

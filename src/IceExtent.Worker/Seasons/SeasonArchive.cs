@@ -147,5 +147,5 @@ internal sealed class SeasonArchive(RunSettings settings, SeasonSettings season,
     }
 
     private static string DigestOf(string configuration, SeasonSettings season) =>
-        Convert.ToHexStringLower(SHA256.HashData(Encoding.UTF8.GetBytes($"{configuration}\n{season.Scheme}\n{season.Regions}\n{season.Melt}")));
+        Convert.ToHexStringLower(SHA256.HashData(Encoding.UTF8.GetBytes($"{configuration}\n{season.Scheme}\n{season.Regions}\n{season.Melt}\n{season.LeastPlaceShare:R}")));
 }

@@ -1,4 +1,5 @@
 using IceExtent.Statistics.Seasons;
+using IceExtent.Storage.Faults;
 using IceExtent.Storage.Writing;
 
 namespace IceExtent.Worker.Seasons;
@@ -27,9 +28,9 @@ internal readonly record struct DateChanges(int Confirmed, int Moved, int Withdr
 /// <param name="IsFinal">Whether later days can no longer change it.</param>
 /// <param name="Cells">Cells that held ice.</param>
 /// <param name="Changes">What became of the cells' dates that the archive had of the year while it was running; null where it had none.</param>
-/// <param name="UnreadDays">Days whose grid could not be read.</param>
+/// <param name="Unread">Why days could not be read that count as missing.</param>
 internal sealed record SeasonYearReport(
-    string Method, int Year, bool IsFinal, int Cells, IReadOnlyDictionary<SeasonEvent, DateChanges>? Changes, int UnreadDays)
+    string Method, int Year, bool IsFinal, int Cells, IReadOnlyDictionary<SeasonEvent, DateChanges>? Changes, IReadOnlyList<Fault> Unread)
 {
     /// <summary>Dates of regions and places that moved, were withdrawn or are new, in words.</summary>
     public IReadOnlyList<string> Named { get; init; } = [];
@@ -40,7 +41,7 @@ internal sealed record SeasonYearReport(
         Year,
         IsFinal ? "final" : "provisional",
         Cells,
-        UnreadDays,
+        Unread.Count,
         (Changes ?? new Dictionary<SeasonEvent, DateChanges>()).ToDictionary(
             change => SeasonEvents.NameOf(change.Key),
             change => new DateChangeCounts(change.Value.Confirmed, change.Value.Moved, change.Value.Withdrawn, change.Value.New)),

@@ -66,7 +66,7 @@ internal sealed class SeasonSpan(
             places.Add(span, cells, preparation.Places);
             archive.WriteCells(span, cells);
             SeasonYearReport report = new(
-                method, span.Year.Year, span.IsComplete, Enumerable.Range(0, cells.Cells.Count).Count(cells.HadIce), before?.ChangesTo(cells), stack.Faults.Count);
+                method, span.Year.Year, span.IsComplete, Enumerable.Range(0, cells.Cells.Count).Count(cells.HadIce), before?.ChangesTo(cells), stack.Faults);
             reports.Add(report);
             yearDone(report);
         }
