@@ -18,7 +18,7 @@ internal static class SeasonScoreReport
                 Cells = score.Cells.ToDictionary(
                     pair => SeasonEvents.NameOf(pair.Key),
                     pair => new { pair.Value.Dated, pair.Value.ExactShare, Within3Days = pair.Value.Within(3), pair.Value.BiasDays, pair.Value.HeldShare, pair.Value.MeanSpreadDays, pair.Value.SameStateShare }),
-                Regions = score.Regions.Select(error => new { error.Region, error.Year, Date = SeasonEvents.NameOf(error.Which), error.Days }),
+                Regions = score.Regions.Select(error => new { error.Region, error.Year, error.Date, error.Days }),
             })));
             return;
         }
@@ -33,14 +33,14 @@ internal static class SeasonScoreReport
         }
 
         console.Print(string.Empty);
-        console.Print("Regions' medians: regions and ice years, within two days, largest error");
-        foreach (IGrouping<(string Method, SeasonEvent Which), int> errors in scores
-            .SelectMany(score => score.Regions.Select(error => (score.Method, error.Which, error.Days)))
-            .GroupBy(error => (error.Method, error.Which), error => error.Days))
+        console.Print("Regions' medians, and when their ice area falls and rises: regions and ice years, within two days, largest error");
+        foreach (IGrouping<(string Method, string Date), int> errors in scores
+            .SelectMany(score => score.Regions.Select(error => (score.Method, error.Date, error.Days)))
+            .GroupBy(error => (error.Method, error.Date), error => error.Days))
         {
             console.Print(string.Create(
                 CultureInfo.InvariantCulture,
-                $"{errors.Key.Method,-14} {SeasonEvents.NameOf(errors.Key.Which),-9} {errors.Count(),8} {(double)errors.Count(days => Math.Abs(days) <= 2) / errors.Count(),7:P0} {errors.Max(Math.Abs),7}"));
+                $"{errors.Key.Method,-14} {errors.Key.Date,-9} {errors.Count(),8} {(double)errors.Count(days => Math.Abs(days) <= 2) / errors.Count(),7:P0} {errors.Max(Math.Abs),7}"));
         }
     }
 }

@@ -75,6 +75,18 @@ internal sealed class IceYearStack(int[] cells, int gridCells)
         }
     }
 
+    /// <summary>Copies one day out, onto the grid.</summary>
+    /// <param name="day">The day's place in the span.</param>
+    /// <param name="fraction">Receives one value a cell of the grid; other cells than those of the ocean are left alone. Missing: NaN.</param>
+    public void CopyDay(int day, Span<float> fraction)
+    {
+        ReadOnlySpan<short> stored = fractions.AsSpan(day * cells.Length, cells.Length);
+        for (int index = 0; index < cells.Length; index++)
+        {
+            fraction[cells[index]] = Unpacked(stored[index]);
+        }
+    }
+
     /// <summary>Copies the series of neighbouring cells out.</summary>
     /// <param name="days">The days of the span that was loaded.</param>
     /// <param name="first">The first cell's place among the ocean cells.</param>

@@ -11,9 +11,9 @@ namespace IceExtent.Worker.Seasons;
 /// <summary>The dates of one method held against the true ones.</summary>
 /// <param name="Method">The method.</param>
 /// <param name="Cells">By date.</param>
-/// <param name="Regions">Errors of the regions' medians in days, by region, year and date.</param>
+/// <param name="Regions">Errors of the regions' medians, and of the dates of their areas, in days.</param>
 internal sealed record ScoredSeasons(
-    string Method, IReadOnlyDictionary<SeasonEvent, SeasonDateScore> Cells, IReadOnlyList<(string Region, int Year, SeasonEvent Which, int Days)> Regions);
+    string Method, IReadOnlyDictionary<SeasonEvent, SeasonDateScore> Cells, IReadOnlyList<(string Region, int Year, string Date, int Days)> Regions);
 
 /// <summary>Finds season dates in an invented scene, as observed and as it was, without writing anything.</summary>
 internal sealed class SceneSeasonScore
@@ -45,7 +45,7 @@ internal sealed class SceneSeasonScore
     public IReadOnlyList<ScoredSeasons> Run(IEnumerable<int> years, int workers, CancellationToken cancellation)
     {
         Dictionary<SeasonEvent, SeasonDateScore>[] cells = [.. methods.Select(_ => FromConcentration.ToDictionary(which => which, _ => new SeasonDateScore()))];
-        List<(string, int, SeasonEvent, int)>[] medians = [.. methods.Select(_ => new List<(string, int, SeasonEvent, int)>())];
+        List<(string, int, string, int)>[] medians = [.. methods.Select(_ => new List<(string, int, string, int)>())];
         foreach (int year in years)
         {
             IceYear iceYear = season.Scheme.YearStart.Beginning(year);
@@ -57,6 +57,7 @@ internal sealed class SceneSeasonScore
                 CellSeasons found = CellSeasonSearch.Find(observed[method], season.Scheme, melt: null, span, workers, cancellation);
                 Hold(real, found, cells[method]);
                 medians[method].AddRange(Medians(year, real, found));
+                medians[method].AddRange(Areas(span, observed[method]));
             }
         }
 
@@ -95,7 +96,7 @@ internal sealed class SceneSeasonScore
         }
     }
 
-    private IEnumerable<(string, int, SeasonEvent, int)> Medians(int year, CellSeasons real, CellSeasons found)
+    private IEnumerable<(string, int, string, int)> Medians(int year, CellSeasons real, CellSeasons found)
     {
         RegionMedians realMedians = new(real, season.Regions.LeastDatedShare), foundMedians = new(found, season.Regions.LeastDatedShare);
         foreach (TotalsRegion region in regions)
@@ -105,9 +106,61 @@ internal sealed class SceneSeasonScore
             {
                 if (was.Of(which)?.Day is { } day && is_.Of(which)?.Day is { } other)
                 {
-                    yield return (region.Name, year, which, other - day);
+                    yield return (region.Name, year, SeasonEvents.NameOf(which), other - day);
                 }
             }
         }
+    }
+
+    // The level of each region is that of the one year.
+    private IEnumerable<(string, int, string, int)> Areas(IceYearSpan span, IceYearStack found)
+    {
+        List<DailyIce>[] real = DailyAreas(span, truth), seen = DailyAreas(span, found);
+        (DateOnly first, DateOnly last) = (span.FirstDate, span.Year.DateOf(span.Year.Length + span.Tail));
+        for (int region = 0; region < regions.Count; region++)
+        {
+            (SeasonDate? fall, SeasonDate? rise) = new RegionArea(real[region], season.Scheme, season.Regions).In(span.Year, first, last);
+            (SeasonDate? fallSeen, SeasonDate? riseSeen) = new RegionArea(seen[region], season.Scheme, season.Regions).In(span.Year, first, last);
+            if (fallSeen?.Day - fall?.Day is { } fallError)
+            {
+                yield return (regions[region].Name, span.Year.Year, "area_fall", fallError);
+            }
+
+            if (riseSeen?.Day - rise?.Day is { } riseError)
+            {
+                yield return (regions[region].Name, span.Year.Year, "area_rise", riseError);
+            }
+        }
+    }
+
+    // Ice area of days on which nearly all of a region is known: of others the sum would lack what was not seen.
+    private List<DailyIce>[] DailyAreas(IceYearSpan span, IceYearStack stack)
+    {
+        const double NearlyAll = 0.95;
+        List<DailyIce>[] areas = [.. regions.Select(_ => new List<DailyIce>())];
+        float[] fraction = new float[scene.Grid.CellCount];
+        for (int day = 0; day < span.Days; day++)
+        {
+            stack.CopyDay(day, fraction);
+            for (int region = 0; region < regions.Count; region++)
+            {
+                double ice = 0.0, known = 0.0, whole = 0.0;
+                for (int index = 0; index < regions[region].Cells.Length; index++)
+                {
+                    float value = fraction[regions[region].Cells[index]];
+                    double area = regions[region].AreasSquareMeters[index];
+                    whole += area;
+                    known += float.IsNaN(value) ? 0.0 : area;
+                    ice += value >= season.Scheme.Retreat.Level ? value * area : 0.0;
+                }
+
+                if (known >= NearlyAll * whole)
+                {
+                    areas[region].Add(new(span.FirstDate.AddDays(day), ice / 1e6, 0.0));
+                }
+            }
+        }
+
+        return areas;
     }
 }
