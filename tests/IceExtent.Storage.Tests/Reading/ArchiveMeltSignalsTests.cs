@@ -63,7 +63,8 @@ public sealed class ArchiveMeltSignalsTests : IDisposable
         Write(Day, MeltSignalVariables.Of(Range, Vertical, Vertical));
         Assert.Equal("IE2108", Code(new(layout, shifted)));
 
-        Write(Day, [new PackedVariable(MeltSignalVariables.HorizontalRange, "other steps", null, [], "K", Range, Packing.BrightnessKelvins)]);
+        GridVariable other = new PackedVariable(MeltSignalVariables.HorizontalRange, "other steps", null, [], "K", Vertical, Packing.BrightnessKelvins);
+        Write(Day, [other, .. MeltSignalVariables.Of(Range, Vertical, Vertical).Skip(1)]);
         Assert.Equal("IE2111", Code(signals));
         Write(Day, [new PackedVariable("concentration", "none of them", null, [], "1", Range, Packing.Fraction)]);
         Assert.Equal("IE2105", Code(signals));

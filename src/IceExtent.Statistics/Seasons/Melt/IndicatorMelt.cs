@@ -53,6 +53,12 @@ public static class IndicatorMelt
             return (none, none, null);
         }
 
+        if (search.Last < search.First)
+        {
+            SeasonDate none = SeasonDate.Without(search.Cut ?? SeasonDateState.NeverReached);
+            return (none, none, reference);
+        }
+
         MeltIndicators.Sum(begin, end, reference, room);
         (SeasonDate early, SeasonDate continuous) = new MeltSearch(series.IceFraction, days, search, rules, room, begin, end).Find();
         return (early, continuous, reference);
