@@ -23,4 +23,4 @@ sed -e '/^\[melt_season.wet_ice_emissivity\]/,/^\[/ { s/^19h = .*/19h = 0.925/; 
 score "north, ice year 2003, wet snow as in the other scores" --from 2003-03-01 --to 2003-12-31 --scene "$work/weak.toml"
 sed -e 's/^day_step = 1/day_step = 2/' "$root/config/scenes/north.toml" > "$work/alternate.toml"
 score "north, ice year 2003, measured every other day" --from 2003-03-01 --to 2003-12-31 --scene "$work/alternate.toml"
-score "south, ice year 2003" --grid south-25km --from 2003-09-01 --to 2003-12-31
+score "south, ice year 2003" --grid south-25km --from 2003-01-01 --to 2003-12-31
