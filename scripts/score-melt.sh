@@ -21,4 +21,6 @@ sed -e 's/^early_melt_share = 0.1 /early_melt_share = 0.3 /' "$root/config/scene
 score "north, ice year 2003, three times as much early melt" --from 2003-03-01 --to 2003-12-31 --scene "$work/early.toml"
 sed -e '/^\[melt_season.wet_ice_emissivity\]/,/^\[/ { s/^19h = .*/19h = 0.925/; s/^37h = .*/37h = 0.930/ }' "$root/config/scenes/north.toml" > "$work/weak.toml"
 score "north, ice year 2003, wet snow as in the other scores" --from 2003-03-01 --to 2003-12-31 --scene "$work/weak.toml"
-score "south, ice year 2003" --grid south-25km --from 2003-09-01 --to 2003-12-31
+sed -e 's/^day_step = 1/day_step = 2/' "$root/config/scenes/north.toml" > "$work/alternate.toml"
+score "north, ice year 2003, measured every other day" --from 2003-03-01 --to 2003-12-31 --scene "$work/alternate.toml"
+score "south, ice year 2003" --grid south-25km --from 2003-01-01 --to 2003-12-31

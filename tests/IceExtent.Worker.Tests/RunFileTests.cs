@@ -1,5 +1,6 @@
 using IceExtent.Statistics;
 using IceExtent.Retrieval;
+using IceExtent.Statistics.Seasons;
 using IceExtent.Storage.Faults;
 using IceExtent.TestKit;
 using IceExtent.Worker.Configuration;
@@ -104,6 +105,16 @@ public sealed class RunFileTests : IDisposable
         { "[tie_points]\nwater_to_km = 80", "", "IE1011", "not above water_from_km = 100" },
         { "[tie_points]\nblend_to_fraction = 0.6", "", "IE1011", "not above blend_from_fraction = 0.7" },
         { "[tie_points]\nclosed_ice_fraction = 95", "", "IE1006", "Write the fraction: 0.95, not 95." },
+        { "[melt]\nsignal = true", "", "IE1003", "Did you mean signals?" },
+        { "[melt]\nsignals = 1", "", "IE1005", "true or false" },
+        { "[melt]\nleast_ice_fraction = 50", "", "IE1006", "Write the fraction: 0.5, not 50." },
+        { "[melt]\nnorth_melt = [\"03-11\"]", "", "IE1006", "two days" },
+        { "[melt]\nnorth_melt = [\"03-11\", \"08-32\"]", "", "IE1006", "08-32" },
+        { "[melt]\nhorizontal_range_wet_k = 5", "", "IE1011", "not below horizontal_range_dry_k = 4" },
+        { "[melt]\nhorizontal_range_least_days = 12", "", "IE1011", "12 of horizontal_range_test_days = 10" },
+        { "[melt]\nhorizontal_range_test_days = 5\nhorizontal_range_lead_days = 5", "", "IE1011", "fewer days than are tested" },
+        { "[melt]\nindicator_interrupt_days = 9", "", "IE1011", "above indicator_persist_days = 5" },
+        { "[melt]\nindicator_jump_weight = 0\nindicator_gradient_weight = 0\nindicator_level_weight = 0\nindicator_range_weight = 0", "", "IE1011", "a weight above 0" },
         { "", "status = \"finl\"", "IE1007", "Did you mean final?" },
         { "output = \"again\"", "", "IE1002", "already defined" },
         { "notice = ", "", "IE1002", "not TOML" },
@@ -159,6 +170,34 @@ public sealed class RunFileTests : IDisposable
         Fault fault = Assert.Single(faulty.Faults);
         Assert.Equal("IE1009", fault.Code);
         Assert.Contains("no 37v, which the method nasa-team needs", fault.Found, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Load_SignalsWithoutTheirChannel_IsRefusedByName()
+    {
+        run.WriteDay(new(1990, 1, 1), _ => 0.5);
+        run.WriteRunFile("[melt]\nsignals = true");
+        run.Write("run.toml", File.ReadAllText(run.RunFile).Replace(", 37h = \"h37\"", string.Empty, StringComparison.Ordinal));
+
+        ConfigurationException faulty = Assert.Throws<ConfigurationException>(() => RunFileLoader.Load(run.RunFile, ConfigFolder.BesideProgram));
+
+        Fault fault = Assert.Single(faulty.Faults);
+        Assert.Equal("IE1009", fault.Code);
+        Assert.Contains("no 37h of", fault.Found, StringComparison.Ordinal);
+        Assert.Contains("melt signals", fault.Found, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Load_Melt_TakesTheHemisphereOfTheGrid()
+    {
+        run.WriteDay(new(1990, 1, 1), _ => 0.5);
+        run.WriteRunFile("[melt]\nnorth_melt = [\"04-01\", \"07-31\"]\nhorizontal_range_change_k = 9");
+
+        RunSettings settings = RunFileLoader.Load(run.RunFile, ConfigFolder.BesideProgram);
+
+        Assert.False(settings.Melt.Signals);
+        Assert.Equal(new CalendarWindow(new(4, 1), new(7, 31)), settings.Melt.Rules.Calendar.Melt);
+        Assert.Equal((9.0, 4.0), (settings.Melt.Rules.HorizontalRange.LeastChangeKelvins, settings.Melt.Rules.HorizontalRange.DryAboveKelvins));
     }
 
     [Fact]

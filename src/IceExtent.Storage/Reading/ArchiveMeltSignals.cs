@@ -10,7 +10,7 @@ namespace IceExtent.Storage.Reading;
 /// <param name="grid">The grid of every file.</param>
 public sealed class ArchiveMeltSignals(ArchiveLayout layout, Grid grid)
 {
-    private volatile bool agreed; // All files of an archive are on one grid: the first one read is compared with it in full.
+    private volatile bool agreed; // All files of an archive are of one kind: the first one read is looked at in full.
 
     /// <summary>Lists the days of a period that have a file, in order.</summary>
     /// <param name="from">The first day wanted, or null.</param>
@@ -34,15 +34,20 @@ public sealed class ArchiveMeltSignals(ArchiveLayout layout, Grid grid)
 
         HdfFile.Read(path, file =>
         {
+            FileVariable range = file.Variable(MeltSignalVariables.HorizontalRange), first = file.Variable(MeltSignalVariables.Vertical19);
+            FileVariable second = file.Variable(MeltSignalVariables.Vertical37);
+            StoredShorts.CheckPacking(range, MeltSignalVariables.RangePacking); // Each look at attributes takes time, and a file is packed as a whole.
             if (!agreed)
             {
-                StoredShorts.CheckGrid(file.Variable(MeltSignalVariables.HorizontalRange), grid);
+                StoredShorts.CheckGrid(range, grid);
+                StoredShorts.CheckPacking(first, MeltSignalVariables.BrightnessPacking);
+                StoredShorts.CheckPacking(second, MeltSignalVariables.BrightnessPacking);
                 agreed = true;
             }
 
-            StoredShorts.Read(file.Variable(MeltSignalVariables.HorizontalRange), grid, MeltSignalVariables.RangePacking, horizontalRange.Span);
-            StoredShorts.Read(file.Variable(MeltSignalVariables.Vertical19), grid, MeltSignalVariables.BrightnessPacking, vertical19.Span);
-            StoredShorts.Read(file.Variable(MeltSignalVariables.Vertical37), grid, MeltSignalVariables.BrightnessPacking, vertical37.Span);
+            StoredShorts.Read(range, grid, horizontalRange.Span);
+            StoredShorts.Read(first, grid, vertical19.Span);
+            StoredShorts.Read(second, grid, vertical37.Span);
             return true;
         });
     }

@@ -92,6 +92,7 @@ internal static class SceneScoring
         const int CellStep = 3; // Neighbours tell the same; one in nine is enough.
         if (Usable(scene, methods, console) is not [string method, ..] || years.Count == 0)
         {
+            console.Say(years.Count == 0 ? "No ice year begins in the period." : "No method is left.");
             return ExitCode.NoUsableInput;
         }
 

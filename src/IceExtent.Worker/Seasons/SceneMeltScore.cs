@@ -74,13 +74,17 @@ internal sealed class SceneMeltScore
     {
         using ThreadLocal<(SceneWorkspace Workspace, SceneTruth Truth, BrightnessPlanes Planes)> rooms = new(() =>
             (scene.CreateWorkspace(), new(scene.Grid.CellCount), new(scene.Grid.CellCount, MeltSettings.SignalChannels)));
-        IEnumerable<DateOnly> days = Enumerable.Range(0, into.Days).Select(firstDay.AddDays);
-        retrieval.Run(days, workers, cancellation, (date, _, concentration) =>
+        Parallel.For(0, into.Days, new ParallelOptions { MaxDegreeOfParallelism = workers, CancellationToken = cancellation }, day =>
         {
-            (SceneWorkspace workspace, SceneTruth truth, BrightnessPlanes planes) = rooms.Value;
-            scene.Truth(date, workspace, truth);
-            scene.Observe(date, workspace, planes);
-            into.Set(date.DayNumber - firstDay.DayNumber, cells, planes, concentration.Total, truth.Concentration, iceFraction);
+            (SceneWorkspace workspace, SceneTruth truth, _) = rooms.Value;
+            scene.Truth(firstDay.AddDays(day), workspace, truth); // Of missing days too.
+            into.SetTruth(day, cells, truth.Concentration);
+        });
+        retrieval.Run(Enumerable.Range(0, into.Days).Select(firstDay.AddDays), workers, cancellation, (date, _, concentration) =>
+        {
+            BrightnessPlanes planes = rooms.Value.Planes;
+            scene.Observe(date, rooms.Value.Workspace, planes);
+            into.Set(date.DayNumber - firstDay.DayNumber, cells, planes, concentration.Total, iceFraction);
         });
     }
 
@@ -154,14 +158,22 @@ internal sealed class SceneMeltScore
 
         public int Days => days;
 
-        public void Set(int day, int[] cells, BrightnessPlanes planes, ReadOnlySpan<float> concentration, ReadOnlySpan<float> real, float leastIce)
+        public void SetTruth(int day, int[] cells, ReadOnlySpan<float> concentration)
+        {
+            for (int index = 0; index < cells.Length; index++)
+            {
+                truth[(index * days) + day] = concentration[cells[index]];
+            }
+        }
+
+        public void Set(int day, int[] cells, BrightnessPlanes planes, ReadOnlySpan<float> concentration, float leastIce)
         {
             ReadOnlySpan<float> h19 = planes.Kelvins(Channel.H19), h37 = planes.Kelvins(Channel.H37);
             ReadOnlySpan<float> v19 = planes.Kelvins(Channel.V19), v37 = planes.Kelvins(Channel.V37);
             for (int index = 0; index < cells.Length; index++)
             {
                 int cell = cells[index], at = (index * days) + day;
-                (ice[at], truth[at]) = (concentration[cell], real[cell]);
+                ice[at] = concentration[cell];
                 if (concentration[cell] >= leastIce) // As in the archive.
                 {
                     (range[at], vertical19[at], vertical37[at]) = (h19[cell] - h37[cell], v19[cell], v37[cell]);

@@ -2,7 +2,7 @@ namespace IceExtent.Statistics.Seasons;
 
 /// <summary>Melt onset and freeze-up by several indicators, each held against the cell's own winter.</summary>
 /// <remarks>
-/// In the manner of [Markus2009], in our own form: their indicators (jump of 37V, change of the gradient ratio, level of 19V +
+/// In the manner of [MarkusStroeve2009], in our own form: their indicators (jump of 37V, change of the gradient ratio, level of 19V +
 /// 0.8 · 37V) as z-scores against mean and scatter of the cell's own winter, weighted and summed. A day with a sum from a limit
 /// on looks like melt. Early melt is the first such day, continuous melt the first of a run that lasts. Freeze is the mirror
 /// image: looking back from the winter after, which is then the reference, continuous freeze follows the last day that looks
@@ -51,6 +51,12 @@ public static class IndicatorMelt
         {
             SeasonDate none = Unmeasured(series.IceFraction, days, winter, search);
             return (none, none, null);
+        }
+
+        if (search.Last < search.First)
+        {
+            SeasonDate none = SeasonDate.Without(search.Cut ?? SeasonDateState.NeverReached);
+            return (none, none, reference);
         }
 
         MeltIndicators.Sum(begin, end, reference, room);

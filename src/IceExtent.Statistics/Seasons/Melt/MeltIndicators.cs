@@ -10,7 +10,7 @@ internal static class MeltIndicators
 {
     public const int Pad = MeltIndicatorRules.MostJumpDays;
 
-    private const float LevelShare37 = 0.8f; // [Markus2009]: 19V + 0.8 · 37V stands for the surface's temperature.
+    private const float LevelShare37 = 0.8f; // [MarkusStroeve2009]: 19V + 0.8 · 37V stands for the surface's temperature.
 
     /// <summary>Whether a winter has a day with ice at all.</summary>
     public static bool HasIce(in MeltSeries series, SearchSpan winter, MeltRules rules)

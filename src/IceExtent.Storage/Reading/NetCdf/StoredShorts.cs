@@ -19,31 +19,35 @@ internal static class StoredShorts
         }
     }
 
+    /// <summary>Compares what the stored numbers mean with what they should.</summary>
+    /// <exception cref="Faults.FaultException">IE2106, IE2111: they mean something else.</exception>
+    public static void CheckPacking(FileVariable variable, Packing packing)
+    {
+        KelvinEncoding encoding = PackingAttributes.Of(variable);
+        if (encoding.Number != StoredNumber.SignedTwoBytes || !encoding.Scale.Equals(packing.Scale) || !encoding.Offset.Equals(packing.Offset) || !encoding.Missing.Contains(Packing.Fill))
+        {
+            throw NetCdfFaults.Packing(
+                variable,
+                FormattableString.Invariant($"scale_factor {encoding.Scale} and add_offset {encoding.Offset}"),
+                FormattableString.Invariant($"signed numbers of 16 bits with scale_factor {packing.Scale}, add_offset {packing.Offset} and _FillValue {Packing.Fill}"));
+        }
+    }
+
     /// <summary>Reads one plane.</summary>
     /// <param name="variable">The variable.</param>
     /// <param name="grid">The grid.</param>
-    /// <param name="packing">How it must be packed.</param>
     /// <param name="stored">Receives one number a cell.</param>
-    /// <exception cref="Faults.FaultException">IE2106, IE2107, IE2111: it has other numbers, another shape or another packing.</exception>
-    public static void Read(FileVariable variable, Grid grid, Packing packing, Span<short> stored)
+    /// <exception cref="Faults.FaultException">IE2106, IE2107: it has other numbers or another shape.</exception>
+    public static void Read(FileVariable variable, Grid grid, Span<short> stored)
     {
         if (variable.Lengths is not [1, var rows, var columns] || rows != (ulong)grid.Rows || columns != (ulong)grid.Columns)
         {
             throw NetCdfFaults.Shape(variable, $"the shape {string.Join(", ", variable.Lengths)}", grid);
         }
 
-        KelvinEncoding encoding = PackingAttributes.Of(variable);
-        if (encoding.Number != StoredNumber.SignedTwoBytes)
+        if (variable.Number != StoredNumber.SignedTwoBytes)
         {
             throw NetCdfFaults.Type(variable, "other numbers than signed ones of 16 bits");
-        }
-
-        if (!encoding.Scale.Equals(packing.Scale) || !encoding.Offset.Equals(packing.Offset) || !encoding.Missing.Contains(Packing.Fill))
-        {
-            throw NetCdfFaults.Packing(
-                variable,
-                FormattableString.Invariant($"scale_factor {encoding.Scale} and add_offset {encoding.Offset}"),
-                FormattableString.Invariant($"scale_factor {packing.Scale}, add_offset {packing.Offset} and _FillValue {Packing.Fill}"));
         }
 
         variable.File.ReadingCellsOf = variable.Name;

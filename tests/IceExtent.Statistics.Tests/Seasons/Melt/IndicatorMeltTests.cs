@@ -91,6 +91,25 @@ public sealed class IndicatorMeltTests
         static MeltDates At(int last) => new MeltCell { RecordLast = last }.Kelvins(60, 220f).Kelvins(220, 200f).Dates(Rules);
     }
 
+    /// <summary>The windows of a year in which winter is over long before melt may come; the record ends between them, or before either.</summary>
+    [Theory]
+    [InlineData(60)]
+    [InlineData(20)]
+    [InlineData(-15)]
+    public void Dates_RecordEndsBeforeTheWindow_HaveNotBeenReached(int last)
+    {
+        float[] days = new float[400], ice = new float[400];
+        Array.Fill(days, 200f);
+        Array.Fill(ice, 0.9f);
+        Array.Fill(ice, float.NaN, 20 + last + 1, 379 - last);
+        MeltWindows late = MeltCell.Windows with { Melt = new(120, 180) };
+        MeltSeries series = new(days, days, days, ice);
+        SeriesDays lie = new(20, 0, 20 + last);
+
+        Assert.Equal(SeasonDateState.NotYetReached, IndicatorMelt.Dates(series, lie, late, Rules, new(400)).ContinuousMelt.State);
+        Assert.Equal(SeasonDateState.NotYetReached, HorizontalRangeMelt.Onset(series, lie, late, Rules, new(400)).State);
+    }
+
     [Fact]
     public void Dates_NeverFrozenOrNeverMelted_AreNeverReached()
     {

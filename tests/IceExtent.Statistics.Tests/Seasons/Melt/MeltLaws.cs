@@ -54,6 +54,17 @@ public sealed class MeltLaws
         return cell.Find(0, 0f, room) == cell.Find(0, 0f);
     });
 
+    /// <summary>Any windows, in any order, over the ends of any record: there is an answer, and nothing is read outside the series.</summary>
+    [Fact]
+    public void Dates_AnyWindowsAndRecord_GiveAnAnswer() => Gen.Select(Cells, Gen.Int[-80, 480].Array[10]).Sample((cell, ends) =>
+    {
+        MeltWindows windows = new(Window(0), Window(2), Window(4), Window(6));
+        (SeasonDate onset, MeltDates dates) = cell.Find(0, 0f, windows: windows, lie: new(DayZero, Math.Min(ends[8], ends[9]), Math.Max(ends[8], ends[9])));
+        return Enum.IsDefined(onset.State) && Enum.IsDefined(dates.ContinuousMelt.State) && Enum.IsDefined(dates.ContinuousFreeze.State);
+
+        SeasonWindow Window(int at) => new(Math.Min(ends[at], ends[at + 1]), Math.Max(ends[at], ends[at + 1]));
+    });
+
     /// <summary>Against the plain way.</summary>
     [Fact]
     public void SlidingSpread_AnySeriesAndWidth_IsMaximumLessMinimum() => Gen.Select(Gen.Float[-50f, 50f].Array[80, 120], Gen.Int[1, 32], Gen.Int[0, 20]).Sample((values, width, from) =>
@@ -82,7 +93,7 @@ public sealed class MeltLaws
     // Winter with a wild stretch in it; whole tenths of a kelvin in powers of two, so that shifts add no rounding.
     private sealed class Cell(int seed, double missing)
     {
-        public (SeasonDate Onset, MeltDates Dates) Find(int shift, float kelvins, MeltWorkspace? room = null)
+        public (SeasonDate Onset, MeltDates Dates) Find(int shift, float kelvins, MeltWorkspace? room = null, MeltWindows? windows = null, SeriesDays? lie = null)
         {
             Random random = new(seed);
             float[] range = new float[Days], v19 = new float[Days], v37 = new float[Days], ice = new float[Days];
@@ -102,7 +113,9 @@ public sealed class MeltLaws
 
             MeltSeries series = new(range, v19, v37, ice);
             room ??= new(Days);
-            return (HorizontalRangeMelt.Onset(series, Lie, MeltCell.Windows, Rules, room), IndicatorMelt.Dates(series, Lie, MeltCell.Windows, Rules, room));
+            return (
+                HorizontalRangeMelt.Onset(series, lie ?? Lie, windows ?? MeltCell.Windows, Rules, room),
+                IndicatorMelt.Dates(series, lie ?? Lie, windows ?? MeltCell.Windows, Rules, room));
         }
     }
 }
