@@ -89,8 +89,10 @@ public sealed class MeltSeasonTests
         Scene scene = TestWorld.Make(south with { MeltSeason = south.MeltSeason with { Imposed = true } }, grid: TestWorld.South);
         (int[] wet, int[] dry) = Turns(scene, 2001);
 
-        Assert.All(wet.Zip(dry), turn => Assert.InRange(turn.Second - turn.First, 20, 300));
-        Assert.Equal(2002, DateOnly.FromDayNumber(dry[scene.Grid.CellCount / 2]).Year);
+        double[] latitudes = scene.Grid.LatitudesDegrees.ToArray();
+        int[] sea = [.. Enumerable.Range(0, wet.Length).Where(cell => latitudes[cell] > -79.0)]; // Nearer the pole, where land is, seasons shrink to nothing.
+        Assert.All(sea, cell => Assert.InRange(dry[cell] - wet[cell], 5, 300));
+        Assert.All(sea, cell => Assert.Equal(2002, DateOnly.FromDayNumber(dry[cell]).Year));
     }
 
     /// <summary>Where the weather decides, nothing of the season reaches a temperature, and there is no truth to ask for.</summary>
