@@ -136,6 +136,7 @@ public sealed class RunRecordFileTests : IDisposable
                 }
               ],
               "faults": [],
+              "seasons": [],
               "files_read": [
                 "a.nc",
                 "b.nc"
