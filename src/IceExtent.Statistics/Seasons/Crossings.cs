@@ -156,6 +156,7 @@ internal static class Crossings
     /// <param name="series">Any unit.</param>
     /// <param name="first">The first day that may be it.</param>
     /// <param name="last">The last.</param>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     public static int Lowest(ReadOnlySpan<float> series, int first, int last)
     {
         last = Math.Min(last, series.Length - 1);

@@ -1,3 +1,5 @@
+using System.Runtime.CompilerServices;
+
 namespace IceExtent.Statistics.Seasons;
 
 /// <summary>Finds the dates of one ice year in series of daily concentration. Not shared between threads: it keeps room for one series.</summary>
@@ -62,6 +64,7 @@ public sealed class SeasonFinder
             open);
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     private void Prepare(ReadOnlySpan<float> fraction, ReadOnlySpan<float> standardError)
     {
         fraction.CopyTo(bridged);
@@ -89,6 +92,7 @@ public sealed class SeasonFinder
     }
 
     // Half of the ocean of a hemisphere has no ice in a year.
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     private bool IsOpenThroughout()
     {
         float least = (float)Math.Min(scheme.Retreat.Level, scheme.Advance.Level); // Own levels are never below.
@@ -132,6 +136,7 @@ public sealed class SeasonFinder
         return (new(new(melting.First, turn), melting.First, window.Last), new(new(turn + 1, freezing.Last), window.Last, freezing.Last));
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     private (int Known, int Open) Count(float level)
     {
         int known = 0, open = 0;

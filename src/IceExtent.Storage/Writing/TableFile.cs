@@ -23,18 +23,22 @@ public static class TableFile
     /// <param name="columns">The columns in their order.</param>
     /// <param name="rows">The rows in their order; there may be none.</param>
     /// <param name="metadata">Key-value metadata in its order; no key twice, none starting with <c>unit:</c>.</param>
+    /// <param name="beforePublishing">Called when the table is encoded and not yet in its place, or null.</param>
     /// <exception cref="FaultException">IE3101 to IE3107: the file cannot be written.</exception>
     public static void Write<TRow>(
         string path,
         IReadOnlyList<TableColumn<TRow>> columns,
         IReadOnlyList<TRow> rows,
-        IReadOnlyList<KeyValuePair<string, string>> metadata)
+        IReadOnlyList<KeyValuePair<string, string>> metadata,
+        Action? beforePublishing = null)
     {
         ArgumentNullException.ThrowIfNull(columns);
         ArgumentNullException.ThrowIfNull(rows);
         ArgumentNullException.ThrowIfNull(metadata);
 
-        PublishedFile.Write(path, Encode(columns, rows, metadata));
+        byte[] encoded = Encode(columns, rows, metadata);
+        beforePublishing?.Invoke();
+        PublishedFile.Write(path, encoded);
     }
 
     /// <summary>Encodes a table and drops it, so that the library is loaded before the first table is due.</summary>

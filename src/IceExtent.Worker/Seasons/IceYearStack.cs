@@ -64,6 +64,7 @@ internal sealed class IceYearStack(int[] cells, int gridCells)
     /// <param name="day">The day's place in the span.</param>
     /// <param name="fraction">One value a cell of the grid. Unit: 1. Missing: NaN.</param>
     /// <param name="standardError">Its standard error, likewise.</param>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     public void Set(int day, ReadOnlySpan<float> fraction, ReadOnlySpan<float> standardError)
     {
         Span<short> storedFraction = fractions.AsSpan(day * cells.Length, cells.Length);
@@ -93,6 +94,7 @@ internal sealed class IceYearStack(int[] cells, int gridCells)
     /// <param name="count">How many cells.</param>
     /// <param name="fraction">Receives one series after another, <paramref name="days"/> values each. Unit: 1. Missing: NaN.</param>
     /// <param name="standardError">Receives their standard errors, likewise.</param>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     public void CopySeries(int days, int first, int count, Span<float> fraction, Span<float> standardError)
     {
         for (int day = 0; day < days; day++)
@@ -112,6 +114,7 @@ internal sealed class IceYearStack(int[] cells, int gridCells)
     /// <param name="first">The first cell's place among the ocean cells.</param>
     /// <param name="count">How many cells.</param>
     /// <param name="kelvins">Three spans: horizontal range, 19 GHz and 37 GHz vertical; each receives one series after another. Missing: NaN.</param>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     public void CopySignals(int days, int first, int count, float[][] kelvins)
     {
         const float StepsPerKelvin = 10f; // As MeltSignalVariables packs them.

@@ -52,9 +52,11 @@ internal sealed class SeasonArchive(RunSettings settings, SeasonSettings season,
     public void WriteCells(IceYearSpan span, CellSeasons cells)
     {
         IceYear year = span.Year;
+        Task maps = Task.Run(() => SeasonGridFile.Write(GridPathOf(year), settings.Grid, year, season.Scheme.Begins, cells, Text(span)));
         CellSeasonRow[] rows = [.. Enumerable.Range(0, cells.Cells.Count).Where(cells.HadIce).Select(RowAt)];
-        SeasonGridFile.Write(GridPathOf(year), settings.Grid, year, season.Scheme.Begins, cells, Text(span));
-        TableFile.Write(CellPathOf(year), SeasonTables.CellColumns, rows, Text(span)); // Last: its metadata tell that the year is done.
+
+        // The table is put in its place last: its metadata tell that the year is done.
+        TableFile.Write(CellPathOf(year), SeasonTables.CellColumns, rows, Text(span), maps.GetAwaiter().GetResult);
 
         CellSeasonRow RowAt(int index)
         {

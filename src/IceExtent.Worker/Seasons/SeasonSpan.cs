@@ -52,6 +52,7 @@ internal sealed class SeasonSpan(
         StoredDays<ArchiveGrids> grids = new(reader, files);
         StoredDays<ArchiveMeltSignals>? melt = season.Melt is null ? null : MeltDays();
         List<SeasonYearReport> reports = [];
+        using Writing writing = new(); // A year is written while the next is read.
         foreach (IceYearSpan span in named.Spans)
         {
             if (archive.Has(span) && !IsTouched(span, touched))
@@ -64,13 +65,14 @@ internal sealed class SeasonSpan(
             CellSeasons cells = CellSeasonSearch.Find(stack, season.Scheme, season.Melt, span, workers, cancellation);
             named.Add(span, cells, preparation.Regions);
             places.Add(span, cells, preparation.Places);
-            archive.WriteCells(span, cells);
+            writing.Begin(() => archive.WriteCells(span, cells));
             SeasonYearReport report = new(
                 method, span.Year.Year, span.IsComplete, Enumerable.Range(0, cells.Cells.Count).Count(cells.HadIce), before?.ChangesTo(cells), stack.Faults);
             reports.Add(report);
             yearDone(report);
         }
 
+        writing.End();
         archive.RemoveYearsOutside(named.Spans);
         if (reports.Count > 0)
         {
@@ -78,6 +80,23 @@ internal sealed class SeasonSpan(
         }
 
         return reports;
+    }
+
+    /// <summary>One piece of writing at a time beside other work.</summary>
+    private sealed class Writing : IDisposable
+    {
+        private Task task = Task.CompletedTask;
+
+        public void Begin(Action write)
+        {
+            End();
+            task = Task.Run(write);
+        }
+
+        public void End() => task.GetAwaiter().GetResult();
+
+        // Nothing is left running, whatever happened; its failure was told by End, or another one is under way.
+        public void Dispose() => Task.WhenAny(task).GetAwaiter().GetResult();
     }
 
     private StoredDays<ArchiveMeltSignals> MeltDays()
