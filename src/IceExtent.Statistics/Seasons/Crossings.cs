@@ -125,6 +125,7 @@ internal static class Crossings
     }
 
     /// <summary>The nearest known day before one.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     public static int KnownBefore(ReadOnlySpan<float> series, int day)
     {
         for (int before = Math.Min(day, series.Length) - 1; before >= 0; before--)
@@ -139,6 +140,7 @@ internal static class Crossings
     }
 
     /// <summary>The nearest known day after one.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     public static int KnownAfter(ReadOnlySpan<float> series, int day)
     {
         for (int after = day + 1; after < series.Length; after++)

@@ -97,6 +97,7 @@ internal static class SeriesSmoothing
         }
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
     private static int Insert(Span<float> sorted, int known, float value)
     {
         if (float.IsNaN(value))
@@ -114,6 +115,7 @@ internal static class SeriesSmoothing
         return known + 1;
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
     private static int Remove(Span<float> sorted, int known, float value)
     {
         if (float.IsNaN(value))
