@@ -31,7 +31,12 @@ internal static class SeasonCommand
                 [new("IE1014", settings.RunFile, "no table [season]", "a run that finds season dates", "Add a line [season] and run it.")]);
             string wanted = MethodOf(settings, parsed.GetValue(method));
             SeasonAnswer answer = Find(settings, season, wanted, parsed.GetValue(name)!);
-            SeasonReport.Print(answer, season, wanted, parsed.GetValue(years), parsed.GetValue(json), settings.Notice, console);
+            if (answer.Metadata.GetValueOrDefault("scheme") is { } made && made != season.Scheme.Name)
+            {
+                console.Say($"The dates in the archive are of the scheme {made}; the run file now names {season.Scheme.Name}: run it to have those.");
+            }
+
+            SeasonReport.Print(answer, wanted, parsed.GetValue(years), parsed.GetValue(json), settings.Notice, console);
             return ExitCode.Done;
         });
         return command;
@@ -44,16 +49,16 @@ internal static class SeasonCommand
     private static SeasonAnswer Find(RunSettings settings, SeasonSettings season, string method, string name)
     {
         ArchiveLayout layout = new(settings.Output);
-        IReadOnlyList<RegionSeasonRow> regions = Read(layout.TableFile("season_regions", method, settings.Grid.Hemisphere), path => SeasonTableReader.ReadRegions(path).Rows);
-        IReadOnlyList<PlaceSeasonRow> places = Read(layout.TableFile("season_places", method, settings.Grid.Hemisphere), path => SeasonTableReader.ReadPlaces(path).Rows);
+        (IReadOnlyList<RegionSeasonRow> regions, IReadOnlyDictionary<string, string> ofRegions) = Read(layout.TableFile("season_regions", method, settings.Grid.Hemisphere), SeasonTableReader.ReadRegions);
+        (IReadOnlyList<PlaceSeasonRow> places, IReadOnlyDictionary<string, string> ofPlaces) = Read(layout.TableFile("season_places", method, settings.Grid.Hemisphere), SeasonTableReader.ReadPlaces);
         if (regions.Any(row => row.Region == name))
         {
-            return SeasonAnswer.Of(name, "region", regions.Where(row => row.Region == name), season);
+            return SeasonAnswer.Of(name, "region", regions.Where(row => row.Region == name), season, ofRegions);
         }
 
         if (places.Any(row => row.Place == name))
         {
-            return SeasonAnswer.Of(name, "place", places.Where(row => row.Place == name), season);
+            return SeasonAnswer.Of(name, "place", places.Where(row => row.Place == name), season, ofPlaces);
         }
 
         string[] known = [.. regions.Select(row => row.Region).Concat(places.Select(row => row.Place)).Distinct()];
@@ -62,5 +67,7 @@ internal static class SeasonCommand
             : new("IE3142", settings.Output, $"no region or place {name}", string.Join(", ", known), NearestName.Suggestion(name, known)));
     }
 
-    private static IReadOnlyList<T> Read<T>(string path, Func<string, IReadOnlyList<T>> read) => File.Exists(path) ? read(path) : [];
+    private static (IReadOnlyList<T> Rows, IReadOnlyDictionary<string, string> Metadata) Read<T>(
+        string path, Func<string, (IReadOnlyList<T>, IReadOnlyDictionary<string, string>)> read) =>
+        File.Exists(path) ? read(path) : ([], new Dictionary<string, string>());
 }

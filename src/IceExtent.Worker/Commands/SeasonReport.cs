@@ -2,7 +2,6 @@ using System.Globalization;
 using IceExtent.Statistics.Seasons;
 using IceExtent.Statistics.Trends;
 using IceExtent.Storage.Writing;
-using IceExtent.Worker.Configuration;
 using IceExtent.Worker.Seasons;
 
 namespace IceExtent.Worker.Commands;
@@ -12,16 +11,16 @@ internal static class SeasonReport
 {
     private const double YearsPerDecade = 10.0;
 
-    public static void Print(SeasonAnswer answer, SeasonSettings season, string method, int years, bool json, string? notice, CommandConsole console)
+    public static void Print(SeasonAnswer answer, string method, int years, bool json, string? notice, CommandConsole console)
     {
         if (json)
         {
-            console.Print(JsonText.Of(AsJson(answer, season, method, years, notice)));
+            console.Print(JsonText.Of(AsJson(answer, method, years, notice)));
             return;
         }
 
         SeasonRow last = answer.Rows[^1];
-        console.Print($"{answer.Name} ({answer.Kind}), {method}, dates by the scheme {season.Scheme.Name}: {season.Scheme.Source}");
+        console.Print($"{answer.Name} ({answer.Kind}), {method}, dates by the scheme {Told(answer, "scheme")}: {Told(answer, "scheme_source")}; days from {Told(answer, "record")}");
         console.Print(string.Empty);
         console.Print(string.Create(
             CultureInfo.InvariantCulture,
@@ -32,7 +31,7 @@ internal static class SeasonReport
         }
 
         console.Print(string.Empty);
-        console.Print("Years that are over        years  earliest   a quarter      median   a quarter    latest   days a decade (95 %)");
+        console.Print($"{answer.KnownYears,2} years over and known   years  earliest   a quarter      median   a quarter    latest   days a decade (95 %)");
         console.Print("                                or least      before                   after   or most");
         foreach ((SeasonQuantity quantity, UsualDays usual) in answer.Usual.Where(pair => pair.Usual is not null).Select(pair => (pair.Quantity, pair.Usual!)))
         {
@@ -57,16 +56,24 @@ internal static class SeasonReport
         foreach (SeasonRow row in answer.Rows.Skip(Math.Max(0, answer.Rows.Count - years)))
         {
             string free = row.Dates.Ice.InnerIceFreeDays(row.Year, row.Begins) is { } days
-                ? string.Create(CultureInfo.InvariantCulture, $"{days} ± {row.Dates.Ice.InnerIceFreeSpreadDays:F0}")
+                ? string.Create(CultureInfo.InvariantCulture, $"{days} ± {row.Dates.Ice.InnerIceFreeSpreadDays:0.#}")
                 : "-";
             console.Print(string.Create(CultureInfo.InvariantCulture, $"{row.Year.Year}{(row.IsFinal ? " " : "*")}     ")
                 + string.Concat(dates.Select(quantity => $"{DateText(row.Year, quantity.DateOf!(row)),-18}")) + free);
         }
 
+        console.Print("Opening and closing: ice falls from or reaches the level of closed ice (80 % in most schemes); retreat and advance: that of open water (15 %).");
+        console.Print("Inner ice free days: retreat to advance, also the last column; outer: opening to closing. Open water days are counted, below the level of retreat.");
         console.Print("± is half of the days between the first and the last day that a date may have been (95 % limits); * is provisional.");
+        if (answer.Kind == "place")
+        {
+            console.Print("Never: the mean of the cells in reach stayed on one side of the level. Land in the radiometer's view can hold it above 15 %.");
+        }
+
         if (answer.Kind == "region")
         {
-            console.Print("area_fall and area_rise: the region's ice area passes half way between its winter and its summer; the others: medians of its cells.");
+            console.Print("Area fall and rise: the region's ice area passes half way between its winter and its summer. The others are medians over the cells that the ice leaves;");
+            console.Print("known and open water days are means over all cells that held ice, so they are fewer than the ice-free period.");
         }
     }
 
@@ -74,36 +81,40 @@ internal static class SeasonReport
     {
         if (quantity.DateOf is null)
         {
-            return quantity.DaysOf(row) is { } length ? string.Create(CultureInfo.InvariantCulture, $"{length:F0} days") : "not known yet, or none";
+            return quantity.DaysOf(row) is not { } length ? "not known yet, or none"
+                : quantity.Name == "open_water_days"
+                    ? string.Create(CultureInfo.InvariantCulture, $"{length:F0} days{(row.IsFinal ? string.Empty : " so far")}, of {row.KnownDays:F0} known")
+                    : string.Create(CultureInfo.InvariantCulture, $"{length:F0} days{AgainstUsual(length - usual?.Median, usual, "shorter", "longer")}");
         }
 
         SeasonDate? date = quantity.DateOf(row);
-        string text = DateText(row.Year, date);
-        if (usual is null)
+        return date switch
         {
-            return text;
-        }
-
-        double? apart = date?.Day - usual.Median;
-        return (date?.State, apart) switch
-        {
-            (SeasonDateState.Found, { } days) => string.Create(
-                CultureInfo.InvariantCulture, $"{text}, {Math.Abs(days):F0} days {(days < 0 ? "before" : "after")} the median of {usual.Years} years"),
-            (SeasonDateState.NotYetReached, _) => $"{text}; in half of {usual.Years} years by {TextOf(quantity, row.Year, usual.Median)}",
-            _ => text,
+            { State: SeasonDateState.Found } found => string.Create(
+                CultureInfo.InvariantCulture,
+                $"{row.Year.DateOf(found.Day!.Value):d MMM yyyy}, {row.Year.DateOf(found.Earliest!.Value):d MMM} to {row.Year.DateOf(found.Latest!.Value):d MMM} possible{AgainstUsual(found.Day - usual?.Median, usual, "before", "after")}"),
+            { State: SeasonDateState.NotYetReached } when usual is not null =>
+                $"not yet; it came in {Counted.Of(usual.Years, "year")} that {(usual.Years == 1 ? "is" : "are")} over, in half of them by {TextOf(quantity, row.Year, usual.Median)}",
+            _ => DateText(row.Year, date),
         };
     }
+
+    private static string AgainstUsual(double? days, UsualDays? usual, string less, string more) => days is not { } apart || usual is null ? string.Empty
+        : Math.Abs(apart) < 0.5 ? $"; as the median of {Counted.Of(usual.Years, "year")}"
+        : string.Create(CultureInfo.InvariantCulture, $"; {Math.Abs(apart):0.#} days {(apart < 0 ? less : more)} {(less == "before" ? string.Empty : "than ")}the median of {Counted.Of(usual.Years, "year")}");
 
     private static string DateText(IceYear year, SeasonDate? date) => date switch
     {
         null => "not sought",
-        { State: SeasonDateState.Found } => string.Create(CultureInfo.InvariantCulture, $"{year.DateOf(date.Value.Day!.Value):d MMM yyyy} ± {date.Value.SpreadDays:F0}"),
+        { State: SeasonDateState.Found } => string.Create(CultureInfo.InvariantCulture, $"{year.DateOf(date.Value.Day!.Value):d MMM yyyy} ± {date.Value.SpreadDays:0.#}"),
         { State: SeasonDateState.HiddenByGap } => string.Create(
-            CultureInfo.InvariantCulture, $"{year.DateOf(date.Value.Earliest!.Value):d MMM}-{year.DateOf(date.Value.Latest!.Value):d MMM} gap"),
+            CultureInfo.InvariantCulture, $"{year.DateOf(date.Value.Earliest!.Value):d MMM}-{year.DateOf(date.Value.Latest!.Value):d MMM} in a gap"),
         { State: SeasonDateState.NeverReached } => "never",
         { State: SeasonDateState.BeforeRecord } => "before the record",
         _ => "not yet",
     };
+
+    private static string Told(SeasonAnswer answer, string key) => answer.Metadata.GetValueOrDefault(key, "unknown");
 
     private static string TitleOf(SeasonQuantity quantity) => quantity.Name.Replace('_', ' ');
 
@@ -120,13 +131,14 @@ internal static class SeasonReport
         _ => throw new InvalidOperationException("There is no other trend."),
     };
 
-    private static object AsJson(SeasonAnswer answer, SeasonSettings season, string method, int years, string? notice) => new
+    private static object AsJson(SeasonAnswer answer, string method, int years, string? notice) => new
     {
         answer.Name,
         answer.Kind,
         Method = method,
-        Scheme = season.Scheme.Name,
-        SchemeSource = season.Scheme.Source,
+        Scheme = Told(answer, "scheme"),
+        SchemeSource = Told(answer, "scheme_source"),
+        Record = Told(answer, "record"),
         Years = answer.Rows.Skip(Math.Max(0, answer.Rows.Count - years)).Select(row => new
         {
             IceYear = row.Year.Year,

@@ -11,8 +11,7 @@ internal sealed record SeasonQuantity(string Name, Func<SeasonRow, SeasonDate?>?
 {
     /// <summary>Every quantity of a row, in the order they are told.</summary>
     /// <param name="row">A row of the region or place.</param>
-    /// <param name="leastKnownShare">Days that are counted make a year only where so much of it is known.</param>
-    public static IReadOnlyList<SeasonQuantity> Of(SeasonRow row, double leastKnownShare) =>
+    public static IReadOnlyList<SeasonQuantity> Of(SeasonRow row) =>
     [
         .. row is RegionSeasonRow
             ? [Date("area_fall", region => ((RegionSeasonRow)region).AreaFall), Date("area_rise", region => ((RegionSeasonRow)region).AreaRise)]
@@ -20,7 +19,7 @@ internal sealed record SeasonQuantity(string Name, Func<SeasonRow, SeasonDate?>?
         .. SeasonEvents.All.Where(which => row.Dates.Of(which) is not null).Select(which => Date(SeasonEvents.NameOf(which), year => year.Dates.Of(which))),
         new("inner_ice_free_days", null, year => year.Dates.Ice.InnerIceFreeDays(year.Year, year.Begins)),
         new("outer_ice_free_days", null, year => year.Dates.Ice.OuterIceFreeDays(year.Year, year.Begins)),
-        new("open_water_days", null, year => year.IsFinal && year.KnownDays >= leastKnownShare * year.Year.Length ? year.OpenWaterDays : null),
+        new("open_water_days", null, year => year.OpenWaterDays),
     ];
 
     private static SeasonQuantity Date(string name, Func<SeasonRow, SeasonDate?> dateOf) => new(name, dateOf, row => dateOf(row)?.Day);
@@ -30,18 +29,31 @@ internal sealed record SeasonQuantity(string Name, Func<SeasonRow, SeasonDate?>?
 /// <param name="Name">Its name.</param>
 /// <param name="Kind"><c>region</c> or <c>place</c>.</param>
 /// <param name="Rows">Its ice years, rising.</param>
-/// <param name="Usual">What each quantity usually is, over years that are over; null where it never was.</param>
-internal sealed record SeasonAnswer(string Name, string Kind, IReadOnlyList<SeasonRow> Rows, IReadOnlyList<(SeasonQuantity Quantity, UsualDays? Usual)> Usual)
+/// <param name="Usual">What each quantity usually is, over years that are over and known; null where it never was.</param>
+/// <param name="KnownYears">How many years are over and known.</param>
+/// <param name="Metadata">That of the table.</param>
+internal sealed record SeasonAnswer(
+    string Name,
+    string Kind,
+    IReadOnlyList<SeasonRow> Rows,
+    IReadOnlyList<(SeasonQuantity Quantity, UsualDays? Usual)> Usual,
+    int KnownYears,
+    IReadOnlyDictionary<string, string> Metadata)
 {
     /// <summary>Puts the ice years of a region or place together.</summary>
-    public static SeasonAnswer Of(string name, string kind, IEnumerable<SeasonRow> rows, SeasonSettings season)
+    public static SeasonAnswer Of(string name, string kind, IEnumerable<SeasonRow> rows, SeasonSettings season, IReadOnlyDictionary<string, string> metadata)
     {
         SeasonRow[] ordered = [.. rows.OrderBy(row => row.Year.Year)];
+
+        // A year that the record only touches would bring its late dates alone.
+        SeasonRow[] whole = [.. ordered.Where(row => row.IsFinal && row.KnownDays >= season.LeastKnownShare * row.Year.Length)];
         return new(
             name,
             kind,
             ordered,
-            [.. SeasonQuantity.Of(ordered[^1], season.LeastKnownShare).Select(quantity => (quantity, UsualDays.Of(
-                [.. ordered.Where(row => row.IsFinal && quantity.DaysOf(row) is not null).Select(row => (row.Year.Year, quantity.DaysOf(row)!.Value))], season.LeastTrendYears)))]);
+            [.. SeasonQuantity.Of(ordered[^1]).Select(quantity => (quantity, UsualDays.Of(
+                [.. whole.Where(row => quantity.DaysOf(row) is not null).Select(row => (row.Year.Year, quantity.DaysOf(row)!.Value))], season.LeastTrendYears)))],
+            whole.Length,
+            metadata);
     }
 }

@@ -26,6 +26,9 @@ internal sealed class SeasonArchive(RunSettings settings, SeasonSettings season,
 
     private readonly string digest = DigestOf(configuration, season);
 
+    /// <summary>The first and the last day of the record, for tables of every year.</summary>
+    public required string Record { get; init; }
+
     /// <summary>The table of every region and year.</summary>
     public string RegionPath => layout.TableFile(RegionTable, method, settings.Grid.Hemisphere);
 
@@ -126,6 +129,11 @@ internal sealed class SeasonArchive(RunSettings settings, SeasonSettings season,
             new(SeasonMetadata.DigestKey, digest),
             new("caution", Cautions.Text),
         ];
+        if (span is null)
+        {
+            text.Add(new(RecordKey, Record));
+        }
+
         if (span is { } year)
         {
             text.Insert(0, new("title", $"Season dates of the ice year {year.Year.Year} on the grid {settings.Grid.Name}"));

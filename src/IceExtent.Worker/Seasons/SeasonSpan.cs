@@ -45,8 +45,11 @@ internal sealed class SeasonSpan(
             return [];
         }
 
-        SeasonArchive archive = new(settings, season, layout, method, configuration);
         (DateOnly First, DateOnly Last) record = (files.Keys.Min(), files.Keys.Max());
+        SeasonArchive archive = new(settings, season, layout, method, configuration)
+        {
+            Record = FormattableString.Invariant($"{record.First:yyyy-MM-dd} to {record.Last:yyyy-MM-dd}"),
+        };
         RegionSeasons named = new(settings, season, layout, method, archive, record);
         PlaceSeasons places = new(settings, season, layout, method, archive, record);
         StoredDays<ArchiveGrids> grids = new(reader, files);
