@@ -46,6 +46,7 @@ internal static class DemoCommand
         console.Print(string.Empty);
         console.Print($"Run it again: {CommandLine.ProgramPath} run {runFile}");
         console.Print($"Series:       {Path.Combine(folder, "archive", "daily")}");
+        console.Print($"Seasons:      {CommandLine.ProgramPath} season {runFile} kivalde-bay");
         console.Print($"Places:       {Path.Combine(folder, "archive", "daily_places")}");
         console.Print($"Grids:        {Path.Combine(folder, "archive", "grids")}");
         return exitCode;

@@ -52,14 +52,14 @@ internal static class SeasonReport
     {
         SeasonQuantity[] dates = [.. answer.Usual.Select(pair => pair.Quantity).Where(quantity => quantity.DateOf is not null)];
         console.Print(string.Empty);
-        console.Print("Ice year  " + string.Concat(dates.Select(quantity => $"{TitleOf(quantity),-18}")) + "ice-free days");
+        console.Print("Ice year  " + string.Concat(dates.Select(quantity => $"{TitleOf(quantity),-20}")) + "ice-free days");
         foreach (SeasonRow row in answer.Rows.Skip(Math.Max(0, answer.Rows.Count - years)))
         {
             string free = row.Dates.Ice.InnerIceFreeDays(row.Year, row.Begins) is { } days
                 ? string.Create(CultureInfo.InvariantCulture, $"{days} ± {row.Dates.Ice.InnerIceFreeSpreadDays:0.#}")
                 : "-";
             console.Print(string.Create(CultureInfo.InvariantCulture, $"{row.Year.Year}{(row.IsFinal ? " " : "*")}     ")
-                + string.Concat(dates.Select(quantity => $"{DateText(row.Year, quantity.DateOf!(row)),-18}")) + free);
+                + string.Concat(dates.Select(quantity => $"{DateText(row.Year, quantity.DateOf!(row)),-20}")) + free);
         }
 
         console.Print("Opening and closing: ice falls from or reaches the level of closed ice (80 % in most schemes); retreat and advance: that of open water (15 %).");
