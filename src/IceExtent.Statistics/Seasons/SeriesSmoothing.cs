@@ -43,28 +43,26 @@ internal static class SeriesSmoothing
     [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     public static void Mean(ReadOnlySpan<float> series, int half, Span<float> smooth)
     {
-        for (int day = 0; day < series.Length; day++)
+        // A sum that moves on by a day: in double precision what it gathers is far below a float's own step.
+        double sum = 0.0;
+        int known = 0;
+        for (int day = -half; day < series.Length; day++)
         {
-            if (float.IsNaN(series[day]))
+            int come = day + half, gone = day - half - 1;
+            if (come < series.Length && !float.IsNaN(series[come]))
             {
-                smooth[day] = float.NaN;
-                continue;
+                (sum, known) = (sum + series[come], known + 1);
             }
 
-            float sum = 0f;
-            int known = 0;
-            int last = Math.Min(day + half, series.Length - 1);
-            for (int near = Math.Max(day - half, 0); near <= last; near++)
+            if (gone >= 0 && !float.IsNaN(series[gone]))
             {
-                float value = series[near];
-                if (!float.IsNaN(value))
-                {
-                    sum += value;
-                    known++;
-                }
+                (sum, known) = (sum - series[gone], known - 1);
             }
 
-            smooth[day] = sum / known;
+            if (day >= 0)
+            {
+                smooth[day] = float.IsNaN(series[day]) ? float.NaN : (float)(sum / known);
+            }
         }
     }
 

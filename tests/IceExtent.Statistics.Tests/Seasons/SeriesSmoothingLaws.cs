@@ -18,6 +18,16 @@ public sealed class SeriesSmoothingLaws
         return Enumerable.Range(0, series.Length).All(day => smooth[day].Equals(Plain(series, day, half)));
     });
 
+    [Fact]
+    public void Mean_AnySeries_IsTheMeanOfEachWindow() => Gen.Select(Series, Gen.Int[0, 15]).Sample((series, half) =>
+    {
+        float[] smooth = new float[series.Length];
+        SeriesSmoothing.Mean(series, half, smooth);
+        return Enumerable.Range(0, series.Length).All(day => float.IsNaN(series[day])
+            ? float.IsNaN(smooth[day])
+            : Math.Abs(smooth[day] - series[Math.Max(0, day - half)..Math.Min(series.Length, day + half + 1)].Where(value => !float.IsNaN(value)).Average(value => (double)value)) < 1e-6);
+    });
+
     private static float Plain(float[] series, int day, int half)
     {
         if (float.IsNaN(series[day]))
