@@ -115,6 +115,36 @@ public sealed class SeasonTests : IDisposable
         Assert.Single(run.Record().EnumerateArray(), year => year.GetProperty("ice_year").GetInt32() == 1991); // Only the year that holds the day.
     }
 
+    /// <summary>As a run leaves it that was stopped when the years were written and the regions were not.</summary>
+    [Fact]
+    public async Task Run_RegionsLeftBehind_AreMadeOfEveryYear()
+    {
+        run.WriteDays(-5, 380);
+        await run.RunAsync();
+        Dictionary<string, byte[]> whole = Files();
+        Directory.Delete(run.Tiny.PathOf("out", "season_regions"), recursive: true);
+
+        await run.RunAsync(SeasonRun.Plain, "--from", "1991-03-10", "--to", "1991-03-10");
+
+        Assert.All(Files(), file => Assert.Equal(whole[file.Key], file.Value));
+        Assert.Equal(["1990-06-19"], run.Query("season_regions", "retreat", "ice_year = 1990 AND region = 'hemisphere'"));
+    }
+
+    /// <summary>Days 105 to 109 show one row of cells: 4 × 0.5 = 2 cells of ice, below the level of 7.63, and not the region's ice.</summary>
+    [Fact]
+    public async Task Run_PartOfARegionSeen_IsNoFallOfItsArea()
+    {
+        run.WriteDays(-5, 380);
+        for (int day = 105; day < 110; day++)
+        {
+            run.Tiny.WriteDay(SeasonRun.First.AddDays(day), cell => cell < TinyRun.Columns ? 0.50 : double.NaN);
+        }
+
+        await run.RunAsync();
+
+        Assert.Equal(["hidden_by_gap"], run.Query("season_regions", "area_fall_state", "ice_year = 1990 AND region = 'hemisphere'"));
+    }
+
     [Fact]
     public async Task Run_OtherScheme_MakesSeasonsAnewAndLeavesTheDays()
     {

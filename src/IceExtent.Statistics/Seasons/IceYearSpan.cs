@@ -14,6 +14,27 @@ public readonly record struct IceYearSpan(IceYear Year, int Lead, int Tail, int 
     /// <summary>The date of the first of them.</summary>
     public DateOnly FirstDate => Year.DateOf(-Lead);
 
+    /// <summary>Lays dated values out as a series; days without one are missing, days outside it are left out.</summary>
+    /// <param name="days">The values and their standard errors, in any order.</param>
+    /// <returns>Two series of <see cref="Days"/> values; NaN is missing.</returns>
+    public (float[] Values, float[] StandardErrors) Lay(IEnumerable<(DateOnly Date, double Value, double StandardError)> days)
+    {
+        ArgumentNullException.ThrowIfNull(days);
+        float[] values = new float[Days], errors = new float[Days];
+        Array.Fill(values, float.NaN);
+        Array.Fill(errors, float.NaN);
+        foreach ((DateOnly date, double value, double error) in days)
+        {
+            int index = Year.DayOf(date) + Lead;
+            if (index >= 0 && index < Days)
+            {
+                (values[index], errors[index]) = ((float)value, (float)error);
+            }
+        }
+
+        return (values, errors);
+    }
+
     /// <summary>Whether no later day can change what is found.</summary>
     public bool IsComplete => RecordLast >= Year.Length - 1 + Tail;
 

@@ -44,18 +44,7 @@ public sealed class RegionArea
         }
 
         IceYearSpan span = IceYearSpan.Of(year, scheme, melt: null, recordFirst, recordLast);
-        float[] area = new float[span.Days], error = new float[span.Days];
-        Array.Fill(area, float.NaN);
-        Array.Fill(error, float.NaN);
-        foreach (DailyIce day in days)
-        {
-            int index = year.DayOf(day.Date) + span.Lead;
-            if (index >= 0 && index < span.Days)
-            {
-                (area[index], error[index]) = ((float)day.AreaSquareKilometers, (float)day.StandardErrorSquareKilometers);
-            }
-        }
-
+        (float[] area, float[] error) = span.Lay(days.Select(day => (day.Date, day.AreaSquareKilometers, day.StandardErrorSquareKilometers)));
         IceDates dates = new SeasonFinder(scheme, span).Find(area, error);
         return (dates.Retreat, dates.Advance);
     }

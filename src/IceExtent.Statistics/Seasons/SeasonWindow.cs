@@ -5,9 +5,6 @@ namespace IceExtent.Statistics.Seasons;
 /// <param name="Day">1 to the month's days; 29 February is not one.</param>
 public readonly record struct CalendarDay(int Month, int Day)
 {
-    /// <summary>Whether every year has it.</summary>
-    public bool Exists => Month is >= 1 and <= 12 && Day >= 1 && Day <= DateTime.DaysInMonth(2001, Month); // 2001: no 29 February.
-
     /// <summary>The day of an ice year on which it falls: 0 for the year's first day.</summary>
     public int In(IceYear year)
     {

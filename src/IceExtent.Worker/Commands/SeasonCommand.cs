@@ -31,7 +31,7 @@ internal static class SeasonCommand
                 [new("IE1014", settings.RunFile, "no table [season]", "a run that finds season dates", "Add a line [season] and run it.")]);
             string wanted = MethodOf(settings, parsed.GetValue(method));
             SeasonAnswer answer = Find(settings, season, wanted, parsed.GetValue(name)!);
-            if (answer.Metadata.GetValueOrDefault("scheme") is { } made && made != season.Scheme.Name)
+            if (answer.Metadata.GetValueOrDefault(SeasonMetadata.SchemeKey) is { } made && made != season.Scheme.Name)
             {
                 console.Say($"The dates in the archive are of the scheme {made}; the run file now names {season.Scheme.Name}: run it to have those.");
             }

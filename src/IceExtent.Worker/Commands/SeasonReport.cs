@@ -20,7 +20,7 @@ internal static class SeasonReport
         }
 
         SeasonRow last = answer.Rows[^1];
-        console.Print($"{answer.Name} ({answer.Kind}), {method}, dates by the scheme {Told(answer, "scheme")}: {Told(answer, "scheme_source")}; days from {Told(answer, "record")}");
+        console.Print($"{answer.Name} ({answer.Kind}), {method}, dates by the scheme {Told(answer, SeasonMetadata.SchemeKey)}: {Told(answer, SeasonMetadata.SchemeSourceKey)}; days from {Told(answer, SeasonMetadata.RecordKey)}");
         console.Print(string.Empty);
         console.Print(string.Create(
             CultureInfo.InvariantCulture,
@@ -73,7 +73,7 @@ internal static class SeasonReport
         if (answer.Kind == "region")
         {
             console.Print("Area fall and rise: the region's ice area passes half way between its winter and its summer. The others are medians over the cells that the ice leaves;");
-            console.Print("known and open water days are means over all cells that held ice, so they are fewer than the ice-free period.");
+            console.Print("open water days are the mean over all cells that held ice, those that keep it all summer among them, so they are fewer than the ice-free period.");
         }
     }
 
@@ -136,9 +136,9 @@ internal static class SeasonReport
         answer.Name,
         answer.Kind,
         Method = method,
-        Scheme = Told(answer, "scheme"),
-        SchemeSource = Told(answer, "scheme_source"),
-        Record = Told(answer, "record"),
+        Scheme = Told(answer, SeasonMetadata.SchemeKey),
+        SchemeSource = Told(answer, SeasonMetadata.SchemeSourceKey),
+        Record = Told(answer, SeasonMetadata.RecordKey),
         Years = answer.Rows.Skip(Math.Max(0, answer.Rows.Count - years)).Select(row => new
         {
             IceYear = row.Year.Year,

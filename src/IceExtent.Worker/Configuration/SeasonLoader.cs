@@ -82,6 +82,7 @@ internal static class SeasonLoader
         int trendYears = scope.WholeNumber("least_trend_years", 3, 100);
         MeltOnsetMethod onset = scope.OneOf("melt_onset", ("horizontal-range", MeltOnsetMethod.HorizontalRange), ("indicators", MeltOnsetMethod.Indicators));
         double knownShare = scope.Number("least_known_share", 0.0, 1.0);
+        double areaShare = scope.Number("least_area_share", 0.01, 1.0);
         double placeShare = scope.Number("least_place_share", 0.01, 1.0);
         if (other is not null)
         {
@@ -93,7 +94,7 @@ internal static class SeasonLoader
             layer?.RefuseUnknown();
         }
 
-        return faults.Count > before ? null : new(scheme, regions, trendYears, placeShare, knownShare, [path], onset);
+        return faults.Count > before ? null : new(scheme, regions, trendYears, placeShare, areaShare, knownShare, [path], onset);
     }
 
     private static SeasonScheme Scheme(SchemeScope scope, string name, string source)

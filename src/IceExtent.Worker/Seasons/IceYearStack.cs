@@ -10,7 +10,7 @@ namespace IceExtent.Worker.Seasons;
 /// <remarks>Held as the grid files hold it, in 16 bits: a year of one hemisphere at 25 km takes some 120 MB.</remarks>
 internal sealed class IceYearStack(int[] cells, int gridCells)
 {
-    private const float StepsPerUnit = 10_000f; // As Packing.Fraction.
+    private static readonly float StepsPerUnit = (float)(1.0 / Packing.Fraction.Scale);
 
     private readonly short[][] signals = [[], [], []]; // Horizontal range, 19 GHz and 37 GHz vertical, in tenths of K.
     private short[] fractions = [];
@@ -117,15 +117,15 @@ internal sealed class IceYearStack(int[] cells, int gridCells)
     [MethodImpl(MethodImplOptions.AggressiveOptimization)] // A night is over before tiering would notice.
     public void CopySignals(int days, int first, int count, float[][] kelvins)
     {
-        const float StepsPerKelvin = 10f; // As MeltSignalVariables packs them.
+        Span<float> unpacked = stackalloc float[count];
         for (int signal = 0; signal < signals.Length; signal++)
         {
             for (int day = 0; day < days; day++)
             {
-                ReadOnlySpan<short> stored = signals[signal].AsSpan((day * cells.Length) + first, count);
+                ArchiveMeltSignals.Unpack(signals[signal].AsSpan((day * cells.Length) + first, count), unpacked);
                 for (int cell = 0; cell < count; cell++)
                 {
-                    kelvins[signal][(cell * days) + day] = stored[cell] == Packing.Fill ? float.NaN : stored[cell] / StepsPerKelvin;
+                    kelvins[signal][(cell * days) + day] = unpacked[cell];
                 }
             }
         }

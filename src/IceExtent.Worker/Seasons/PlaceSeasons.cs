@@ -16,13 +16,13 @@ internal sealed class PlaceSeasons
     private readonly ArchiveLayout layout;
     private readonly string method;
     private readonly SeasonArchive archive;
-    private readonly (DateOnly First, DateOnly Last) record;
+    private readonly RecordPeriod record;
     private readonly IReadOnlyList<PlaceSeasonRow> before;
     private readonly Dictionary<(int Year, string Place), (SeasonDate? MeltOnset, SeasonDate? FreezeUp)> melt = [];
 
     /// <summary>Reads what the archive has.</summary>
     public PlaceSeasons(
-        RunSettings settings, SeasonSettings season, ArchiveLayout layout, string method, SeasonArchive archive, (DateOnly First, DateOnly Last) record)
+        RunSettings settings, SeasonSettings season, ArchiveLayout layout, string method, SeasonArchive archive, RecordPeriod record)
     {
         (this.settings, this.season, this.layout, this.method, this.archive, this.record) = (settings, season, layout, method, archive, record);
         before = File.Exists(archive.PlacePath) ? SeasonTableReader.ReadPlaces(archive.PlacePath).Rows : [];
@@ -54,9 +54,7 @@ internal sealed class PlaceSeasons
             return [];
         }
 
-        ILookup<string, DailyPlaceRow> days = Enumerable.Range(record.First.Year, record.Last.Year - record.First.Year + 1)
-            .Select(year => layout.DailyPlaceFile(method, settings.Grid.Hemisphere, year))
-            .Where(File.Exists)
+        ILookup<string, DailyPlaceRow> days = record.Files(year => layout.DailyPlaceFile(method, settings.Grid.Hemisphere, year))
             .SelectMany(path => DailyPlaceTable.Read(path).Rows)
             .Where(row => row.ConcentrationFraction is not null && row.ObservedShare + row.FilledShare >= season.LeastPlaceShare)
             .ToLookup(row => row.Place, StringComparer.Ordinal);
@@ -73,18 +71,7 @@ internal sealed class PlaceSeasons
 
     private PlaceSeasonRow RowOf(string place, IceYearSpan span, SeasonFinder finder, IEnumerable<DailyPlaceRow> days)
     {
-        float[] fraction = new float[span.Days], error = new float[span.Days];
-        Array.Fill(fraction, float.NaN);
-        Array.Fill(error, float.NaN);
-        foreach (DailyPlaceRow day in days)
-        {
-            int index = span.Year.DayOf(day.Date) + span.Lead;
-            if (index >= 0 && index < span.Days)
-            {
-                (fraction[index], error[index]) = ((float)day.ConcentrationFraction!.Value, (float)(day.ConcentrationStandardErrorFraction ?? 0.0));
-            }
-        }
-
+        (float[] fraction, float[] error) = span.Lay(days.Select(day => (day.Date, day.ConcentrationFraction!.Value, day.ConcentrationStandardErrorFraction ?? 0.0)));
         IceDates ice = finder.Find(fraction, error);
         (SeasonDate? meltOnset, SeasonDate? freezeUp) = melt.GetValueOrDefault((span.Year.Year, place));
         return new()

@@ -18,13 +18,13 @@ internal sealed class RegionSeasons
     private readonly ArchiveLayout layout;
     private readonly string method;
     private readonly SeasonArchive archive;
-    private readonly (DateOnly First, DateOnly Last) record;
+    private readonly RecordPeriod record;
     private readonly Dictionary<(int Year, string Region), RegionSeasonRow> rows = [];
     private readonly IReadOnlyList<RegionSeasonRow> before;
 
     /// <summary>Reads what the archive has.</summary>
     public RegionSeasons(
-        RunSettings settings, SeasonSettings season, ArchiveLayout layout, string method, SeasonArchive archive, (DateOnly First, DateOnly Last) record)
+        RunSettings settings, SeasonSettings season, ArchiveLayout layout, string method, SeasonArchive archive, RecordPeriod record)
     {
         (this.settings, this.season, this.layout, this.method, this.archive, this.record) = (settings, season, layout, method, archive, record);
         IceYearStart start = season.Scheme.YearStart;
@@ -85,11 +85,10 @@ internal sealed class RegionSeasons
         return [.. NamedChanges.Of(before, dated, row => row.Region)];
     }
 
-    private ILookup<string, DailyIce> DailyAreas() => Enumerable.Range(record.First.Year, record.Last.Year - record.First.Year + 1)
-        .Select(year => layout.DailyFile(method, settings.Grid.Hemisphere, year))
-        .Where(File.Exists)
+    // A sum over part of a region would fall where nothing melts.
+    private ILookup<string, DailyIce> DailyAreas() => record.Files(year => layout.DailyFile(method, settings.Grid.Hemisphere, year))
         .SelectMany(path => DailyTable.Read(path).Rows)
-        .Where(row => row.AreaSquareKilometers is not null)
+        .Where(row => row.AreaSquareKilometers is not null && row.ObservedShare + row.FilledShare >= season.LeastAreaShare)
         .ToLookup(
             row => row.Region,
             row => new DailyIce(row.Date, row.AreaSquareKilometers!.Value, row.AreaStandardErrorSquareKilometers ?? 0.0),

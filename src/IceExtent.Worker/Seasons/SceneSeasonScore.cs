@@ -136,7 +136,6 @@ internal sealed class SceneSeasonScore
     // Ice area of days on which nearly all of a region is known: of others the sum would lack what was not seen.
     private List<DailyIce>[] DailyAreas(IceYearSpan span, IceYearStack stack)
     {
-        const double NearlyAll = 0.95;
         List<DailyIce>[] areas = [.. regions.Select(_ => new List<DailyIce>())];
         float[] fraction = new float[scene.Grid.CellCount];
         for (int day = 0; day < span.Days; day++)
@@ -154,7 +153,7 @@ internal sealed class SceneSeasonScore
                     ice += value >= season.Scheme.Retreat.Level ? value * area : 0.0;
                 }
 
-                if (known >= NearlyAll * whole)
+                if (known >= season.LeastAreaShare * whole)
                 {
                     areas[region].Add(new(span.FirstDate.AddDays(day), ice / 1e6, 0.0));
                 }

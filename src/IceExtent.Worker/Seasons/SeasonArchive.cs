@@ -1,4 +1,3 @@
-using System.Globalization;
 using System.Security.Cryptography;
 using System.Text;
 using IceExtent.Statistics.Seasons;
@@ -14,20 +13,19 @@ namespace IceExtent.Worker.Seasons;
 /// <param name="layout">Where the files stand.</param>
 /// <param name="method">One of its methods.</param>
 /// <param name="configuration">The digest of the days' configuration.</param>
-internal sealed class SeasonArchive(RunSettings settings, SeasonSettings season, ArchiveLayout layout, string method, string configuration)
+/// <param name="record">The days that the archive has.</param>
+internal sealed class SeasonArchive(
+    RunSettings settings, SeasonSettings season, ArchiveLayout layout, string method, string configuration, RecordPeriod record)
 {
     private const string CellTable = "season_cells";
     private const string RegionTable = "season_regions";
     private const string PlaceTable = "season_places";
     private const string GridTable = "season_grids";
-    private const string RecordKey = "record";
     private const string StatusKey = "status";
     private const string Provisional = "provisional";
 
     private readonly string digest = DigestOf(configuration, season);
-
-    /// <summary>The first and the last day of the record, for tables of every year.</summary>
-    public required string Record { get; init; }
+    private IReadOnlyDictionary<string, string>? regionMetadata;
 
     /// <summary>The table of every region and year.</summary>
     public string RegionPath => layout.TableFile(RegionTable, method, settings.Grid.Hemisphere);
@@ -38,17 +36,22 @@ internal sealed class SeasonArchive(RunSettings settings, SeasonSettings season,
     /// <summary>The maps of one year.</summary>
     public string GridPathOf(IceYear year) => layout.IceYearFile(GridTable, method, settings.Grid.Hemisphere, year.Year, ".nc");
 
-    /// <summary>Whether the tables of a year were made by the same rules of as long a record.</summary>
+    /// <summary>Whether the tables of a year were made by the same rules of as long a record, the rows of its regions among them.</summary>
     public bool Has(IceYearSpan span)
     {
         string path = CellPathOf(span.Year);
-        if (!File.Exists(path) || !File.Exists(GridPathOf(span.Year)))
+        if (!File.Exists(path) || !File.Exists(GridPathOf(span.Year)) || !File.Exists(RegionPath))
         {
             return false;
         }
 
+        // Regions are written when all years are: a run that was stopped between leaves them as they were.
+        regionMetadata ??= TableFile.ReadMetadata(RegionPath);
+        string now = record.In(span).ToString();
         IReadOnlyDictionary<string, string> metadata = TableFile.ReadMetadata(path);
-        return metadata.GetValueOrDefault(SeasonMetadata.DigestKey) == digest && metadata.GetValueOrDefault(RecordKey) == RecordOf(span);
+        return metadata.GetValueOrDefault(SeasonMetadata.DigestKey) == digest && metadata.GetValueOrDefault(SeasonMetadata.RecordKey) == now
+            && regionMetadata.GetValueOrDefault(SeasonMetadata.DigestKey) == digest
+            && RecordPeriod.Parse(regionMetadata.GetValueOrDefault(SeasonMetadata.RecordKey))?.In(span).ToString() == now;
     }
 
     /// <summary>Writes the cells of one year: the table of those that held ice, and the maps of all.</summary>
@@ -119,8 +122,8 @@ internal sealed class SeasonArchive(RunSettings settings, SeasonSettings season,
         List<KeyValuePair<string, string>> text =
         [
             new("method", method),
-            new("scheme", season.Scheme.Name),
-            new("scheme_source", season.Scheme.Source),
+            new(SeasonMetadata.SchemeKey, season.Scheme.Name),
+            new(SeasonMetadata.SchemeSourceKey, season.Scheme.Source),
             new(SeasonMetadata.BeginsKey, season.Scheme.Begins == YearBeginning.Ice ? SeasonMetadata.Ice : SeasonMetadata.Water),
             new("limits", FormattableString.Invariant($"95 %, from the series {season.Scheme.LimitDeviations:R} standard errors lower and higher, and from gaps")),
             new("grid", settings.Grid.Name),
@@ -128,16 +131,11 @@ internal sealed class SeasonArchive(RunSettings settings, SeasonSettings season,
             new(DailySeries.DigestKey, configuration),
             new(SeasonMetadata.DigestKey, digest),
             new("caution", Cautions.Text),
+            new(SeasonMetadata.RecordKey, (span is { } part ? record.In(part) : record).ToString()),
         ];
-        if (span is null)
-        {
-            text.Add(new(RecordKey, Record));
-        }
-
         if (span is { } year)
         {
             text.Insert(0, new("title", $"Season dates of the ice year {year.Year.Year} on the grid {settings.Grid.Name}"));
-            text.Add(new(RecordKey, RecordOf(year)));
             text.Add(new(StatusKey, year.IsComplete ? "final" : Provisional));
         }
 
@@ -149,13 +147,6 @@ internal sealed class SeasonArchive(RunSettings settings, SeasonSettings season,
         return text;
     }
 
-    // What of the record's length a year depends on.
-    private static string RecordOf(IceYearSpan span)
-    {
-        int first = Math.Max(span.RecordFirst, -span.Lead), last = Math.Min(span.RecordLast, span.Year.Length - 1 + span.Tail);
-        return string.Create(CultureInfo.InvariantCulture, $"{span.Year.DateOf(first):yyyy-MM-dd} to {span.Year.DateOf(last):yyyy-MM-dd}");
-    }
-
     private static string DigestOf(string configuration, SeasonSettings season) =>
-        Convert.ToHexStringLower(SHA256.HashData(Encoding.UTF8.GetBytes($"{configuration}\n{season.Scheme}\n{season.Regions}\n{season.Melt}\n{season.LeastPlaceShare:R}")));
+        Convert.ToHexStringLower(SHA256.HashData(Encoding.UTF8.GetBytes($"{configuration}\n{season.Scheme}\n{season.Regions}\n{season.Melt}\n{season.LeastPlaceShare:R} {season.LeastAreaShare:R}")));
 }

@@ -45,11 +45,8 @@ internal sealed class SeasonSpan(
             return [];
         }
 
-        (DateOnly First, DateOnly Last) record = (files.Keys.Min(), files.Keys.Max());
-        SeasonArchive archive = new(settings, season, layout, method, configuration)
-        {
-            Record = FormattableString.Invariant($"{record.First:yyyy-MM-dd} to {record.Last:yyyy-MM-dd}"),
-        };
+        RecordPeriod record = new(files.Keys.Min(), files.Keys.Max());
+        SeasonArchive archive = new(settings, season, layout, method, configuration, record);
         RegionSeasons named = new(settings, season, layout, method, archive, record);
         PlaceSeasons places = new(settings, season, layout, method, archive, record);
         StoredDays<ArchiveGrids> grids = new(reader, files);

@@ -44,11 +44,12 @@ public sealed class LinearTrendTests
     [Fact]
     public void Fit_MissingYear_JoinsNoNeighbours()
     {
-        // Origin: worked, from the values above without year 5: neighbours (1,2), (2,3), (3,4), (6,7) and (7,8) only.
-        LinearTrend.Fitted whole = Assert.IsType<LinearTrend.Fitted>(LinearTrend.Fit([1, 2, 3, 4, 6, 7, 8], [2, 2, 2, 2, 2, 2, 3], leastYears: 5));
+        // Origin: worked. Symmetric about year 3, so the line is level and the values are the residuals. Neighbours are (1, 2) and (4, 5):
+        // products −1 and −1 over squares of 4. Were years 2 and 4 neighbours too, it would be −1/4.
+        LinearTrend.Fitted trend = Assert.IsType<LinearTrend.Fitted>(LinearTrend.Fit([1, 2, 4, 5], [1, -1, -1, 1], leastYears: 4));
 
-        Assert.Equal(7, whole.Years);
-        Assert.True(whole.SlopePerYear > 0.0);
+        Assert.Equal(0.0, trend.SlopePerYear, tolerance: 1e-12);
+        Assert.Equal(-0.5, trend.LagOne, tolerance: 1e-12);
     }
 
     [Fact]

@@ -3,7 +3,6 @@ namespace IceExtent.Statistics.Seasons;
 /// <summary>Looks back from the end of autumn for the last day and the last lasting run of days that look like melt or are open.</summary>
 internal ref struct FreezeSearch(ReadOnlySpan<float> ice, SeriesDays days, SearchSpan search, MeltRules rules, MeltWorkspace room)
 {
-    private const double Limit95 = 1.96;
     private const int None = -1;
 
     private readonly ReadOnlySpan<float> ice = ice;
@@ -86,7 +85,7 @@ internal ref struct FreezeSearch(ReadOnlySpan<float> ice, SeriesDays days, Searc
     // Back to the day after the last that melts beyond doubt or is open.
     private readonly int Earliest(int day, double limit)
     {
-        double sure = limit + (Limit95 * limits.ScoreError);
+        double sure = limit + (SearchSpan.Limit95 * limits.ScoreError);
         int before = day - 1;
         while (before >= search.First && !(scores[before] >= sure) && !(ice[before] < rules.LeastIceFraction))
         {
@@ -99,7 +98,7 @@ internal ref struct FreezeSearch(ReadOnlySpan<float> ice, SeriesDays days, Searc
     // On to the first that is frozen beyond doubt, no farther than a run must last.
     private readonly int Latest(int day, double limit)
     {
-        double sure = limit - (Limit95 * limits.ScoreError);
+        double sure = limit - (SearchSpan.Limit95 * limits.ScoreError);
         int farthest = Math.Min(day + limits.PersistDays, search.Last), latest = day;
         for (int after = day; after <= farthest; after++)
         {

@@ -11,7 +11,6 @@ namespace IceExtent.Statistics.Seasons;
 /// </remarks>
 public static class HorizontalRangeMelt
 {
-    private const double Limit95 = 1.96;
     private const int SpreadsAtOnce = 40; // Days of spreads that are worked out together.
 
     // Positions in the workspace: days before the series are there, and missing. A test looks back so far at most.
@@ -123,23 +122,7 @@ public static class HorizontalRangeMelt
                 : SeasonDate.Found(days.DayOf(day), days.DayOf(Earliest(day)) - limits.SpreadDays, days.DayOf(Latest(day)) + limits.SpreadDays);
         }
 
-        private readonly SeasonDate Without(int dry)
-        {
-            if (search.Cut is { } state)
-            {
-                return SeasonDate.Without(state);
-            }
-
-            int known = search.Last; // The last day on which anything was seen, ice or water.
-            while (known >= search.First && float.IsNaN(ice[known]))
-            {
-                known--;
-            }
-
-            return search.Last - known > rules.GapDays
-                ? SeasonDate.Hidden(days.DayOf(Math.Max(dry + 1, search.First)), days.DayOf(search.Last))
-                : SeasonDate.Without(SeasonDateState.NeverReached);
-        }
+        private readonly SeasonDate Without(int dry) => search.Without(ice, days, rules.GapDays, dry);
 
         // The first day below the middle between the lowest range of either half, where most days from it on are; -1 where there is none.
         private int DropAt(int day)
@@ -173,7 +156,7 @@ public static class HorizontalRangeMelt
         private int Earliest(int day)
         {
             int before = day - 1;
-            while (before >= search.First && (float.IsNaN(ranges[before]) || MayBeWet(before, Limit95 * limits.ErrorKelvins, whereUntested: true)))
+            while (before >= search.First && (float.IsNaN(ranges[before]) || MayBeWet(before, SearchSpan.Limit95 * limits.ErrorKelvins, whereUntested: true)))
             {
                 before--;
             }
@@ -190,7 +173,7 @@ public static class HorizontalRangeMelt
                 if (!float.IsNaN(ranges[after]))
                 {
                     latest = after;
-                    if (MayBeWet(after, -Limit95 * limits.ErrorKelvins, whereUntested: false))
+                    if (MayBeWet(after, -SearchSpan.Limit95 * limits.ErrorKelvins, whereUntested: false))
                     {
                         break;
                     }

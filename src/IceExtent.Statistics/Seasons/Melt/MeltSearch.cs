@@ -3,8 +3,6 @@ namespace IceExtent.Statistics.Seasons;
 /// <summary>Looks forward for the first day and the first lasting run of days that look like melt.</summary>
 internal ref struct MeltSearch(ReadOnlySpan<float> ice, SeriesDays days, SearchSpan search, MeltRules rules, MeltWorkspace room, int begin, int end)
 {
-    private const double Limit95 = 1.96;
-
     private readonly ReadOnlySpan<float> ice = ice;
     private readonly ReadOnlySpan<float> scores = room.Score.AsSpan(MeltIndicators.Pad, end);
     private readonly MeltIndicatorRules limits = rules.Indicators;
@@ -70,28 +68,12 @@ internal ref struct MeltSearch(ReadOnlySpan<float> ice, SeriesDays days, SearchS
             : SeasonDate.Found(days.DayOf(day), days.DayOf(Earliest(day)) - limits.SpreadDays, days.DayOf(Latest(day)) + limits.SpreadDays);
     }
 
-    private readonly SeasonDate Without(int frozen)
-    {
-        if (search.Cut is { } state)
-        {
-            return SeasonDate.Without(state);
-        }
-
-        int known = search.Last;
-        while (known >= search.First && float.IsNaN(ice[known]))
-        {
-            known--;
-        }
-
-        return search.Last - known > rules.GapDays
-            ? SeasonDate.Hidden(days.DayOf(Math.Max(frozen + 1, search.First)), days.DayOf(search.Last))
-            : SeasonDate.Without(SeasonDateState.NeverReached);
-    }
+    private readonly SeasonDate Without(int frozen) => search.Without(ice, days, rules.GapDays, frozen);
 
     // Back to the day after the last that is frozen beyond doubt.
     private readonly int Earliest(int day)
     {
-        double sure = limits.MeltScore - (Limit95 * limits.ScoreError);
+        double sure = limits.MeltScore - (SearchSpan.Limit95 * limits.ScoreError);
         int before = day - 1;
         while (before >= search.First && !(scores[before] < sure))
         {
@@ -104,7 +86,7 @@ internal ref struct MeltSearch(ReadOnlySpan<float> ice, SeriesDays days, SearchS
     // On to the first that melts beyond doubt, no farther than a run must last.
     private readonly int Latest(int day)
     {
-        double sure = limits.MeltScore + (Limit95 * limits.ScoreError);
+        double sure = limits.MeltScore + (SearchSpan.Limit95 * limits.ScoreError);
         int farthest = Math.Min(day + limits.PersistDays, end - 1), latest = day;
         for (int after = day; after <= farthest; after++)
         {

@@ -7,6 +7,9 @@ namespace IceExtent.Statistics.Seasons;
 /// <param name="EndsEarly">Whether it goes on after the record.</param>
 internal readonly record struct SearchSpan(int First, int Last, bool StartsLate, bool EndsEarly)
 {
+    /// <summary>How many standard errors leave no doubt: 95 %, both sides.</summary>
+    public const double Limit95 = 1.96;
+
     public static SearchSpan Of(SeasonWindow window, SeriesDays days, int length)
     {
         int begin = days.IndexOf(window.First), end = days.IndexOf(window.Last);
@@ -21,4 +24,27 @@ internal readonly record struct SearchSpan(int First, int Last, bool StartsLate,
         (_, _, true) => SeasonDateState.NotYetReached,
         _ => null,
     };
+
+    /// <summary>Why no day of the span is the event: the record, a gap at the span's end, or that it did not come.</summary>
+    /// <param name="ice">Concentration: a day with ice or water was seen.</param>
+    /// <param name="days">How the series lies.</param>
+    /// <param name="gapDays">A longer gap hides the event.</param>
+    /// <param name="ruledOut">The last day that is known not to be the event, or below the span.</param>
+    public SeasonDate Without(ReadOnlySpan<float> ice, SeriesDays days, int gapDays, int ruledOut)
+    {
+        if (Cut is { } state)
+        {
+            return SeasonDate.Without(state);
+        }
+
+        int known = Last;
+        while (known >= First && float.IsNaN(ice[known]))
+        {
+            known--;
+        }
+
+        return Last - known > gapDays
+            ? SeasonDate.Hidden(days.DayOf(Math.Max(ruledOut + 1, First)), days.DayOf(Last))
+            : SeasonDate.Without(SeasonDateState.NeverReached);
+    }
 }
